@@ -93,11 +93,11 @@ export const variantFields = z.strictObject({
   /** Names by which this variant goes in files that people import. */
   aliases: z.array(z.string().trim().min(1).max(120)).max(40),
   frontalAreas: z.array(frontalArea).min(1).max(60),
-  /** The first is the base configuration, which the ranking uses unless another is chosen. */
-  configurations: z
-    .array(configurationFields.extend({ id: id.optional() }))
-    .min(1)
-    .max(40),
+  /**
+   * The first is the base configuration, which the ranking uses unless another is chosen. May be empty: a variant that an
+   * import created is ranked by drag area before anybody has typed its mass.
+   */
+  configurations: z.array(configurationFields.extend({ id: id.optional() })).max(40),
   pictureAttachmentId: id.optional(),
 });
 export type VariantFields = z.infer<typeof variantFields>;

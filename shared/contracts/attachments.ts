@@ -12,8 +12,17 @@ export const ATTACHMENT_TYPES = [
   'text/plain',
 ] as const;
 
+/**
+ * What a file is for decides who may read it: a picture whoever may see variants, evidence whoever may see results. It
+ * may be brought in by whoever may edit variants or enter results.
+ */
+export const ATTACHMENT_PURPOSES = ['picture', 'evidence'] as const;
+export const attachmentPurpose = z.enum(ATTACHMENT_PURPOSES);
+export type AttachmentPurpose = z.infer<typeof attachmentPurpose>;
+
 export const attachment = z.strictObject({
   id,
+  purpose: attachmentPurpose,
   fileName: z.string(),
   mediaType: z.enum(ATTACHMENT_TYPES),
   sizeBytes: z.int(),
@@ -29,14 +38,14 @@ export const attachmentUpload = endpoint({
   method: 'POST',
   path: '/api/v1/attachments',
   summary: 'Bring in a file for a result or a variant’s picture (multipart, field `file`)',
-  access: 'variants.edit',
+  access: 'signed-in',
   params: nothing,
-  query: nothing,
+  query: z.strictObject({ purpose: attachmentPurpose }),
   body: nothing,
   response: attachment,
   command: true,
   versioned: false,
-  problems: ['too-large', 'unsupported-file'],
+  problems: ['forbidden', 'too-large', 'unsupported-file', 'unusable-input'],
 });
 
 export const attachmentRead = endpoint({
@@ -44,14 +53,14 @@ export const attachmentRead = endpoint({
   method: 'GET',
   path: '/api/v1/attachments/:attachmentId',
   summary: 'What an attachment is',
-  access: 'variants.read',
+  access: 'signed-in',
   params: attachmentParams,
   query: nothing,
   body: nothing,
   response: attachment,
   command: false,
   versioned: false,
-  problems: [],
+  problems: ['forbidden'],
 });
 
 export const attachmentDownload = endpoint({
@@ -59,12 +68,12 @@ export const attachmentDownload = endpoint({
   method: 'GET',
   path: '/api/v1/attachments/:attachmentId/content',
   summary: 'The file itself',
-  access: 'variants.read',
+  access: 'signed-in',
   params: attachmentParams,
   query: nothing,
   body: nothing,
   response: nothing,
   command: false,
   versioned: false,
-  problems: [],
+  problems: ['forbidden'],
 });

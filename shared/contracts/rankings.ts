@@ -1,0 +1,298 @@
+import * as z from 'zod';
+import { BASES, EVIDENCE_BASES, ORDERS } from '#shared/core/ranking/ranking-choices';
+import type { RankingContext } from '#shared/core/ranking/ranking-context';
+import type { RankingView } from '#shared/core/ranking/ranking-view';
+import { nothing, programmeParams } from './common';
+import { endpoint } from './endpoint';
+import { airInputSchema } from './method/air';
+import { rankingInputSchema } from './method/ranking-input';
+import { figureSchema } from './method/figure';
+import { roadLoadReferenceSchema } from './method/road-load';
+
+const number = z.number();
+const text = z.string();
+const named = { variantId: text, name: text };
+
+/** The choices of the ranking as they stand in an address; one left out has its default. */
+export const rankingQuery = z.strictObject({
+  order: z.enum(ORDERS).optional(),
+  area: z
+    .string()
+    .regex(/^(programme|variant:[0-9a-zA-Z-]{1,60}|\d{1,2}(\.\d{1,9})?)$/)
+    .optional()
+    .describe('`programme`, `variant:<id>` or m²'),
+  cycle: z.string().min(1).max(60).optional().describe('Key of a cycle; `wltc-class-3b`'),
+  air: z
+    .string()
+    .max(60)
+    .optional()
+    .describe('`programme`, a named state, or `custom:<°C>:<Pa>:<relative humidity>`'),
+  evidence: z.enum(EVIDENCE_BASES).optional(),
+  basis: z.enum(BASES).optional(),
+  configuration: z.string().min(1).max(120).optional().describe('`base` or the name of a configuration'),
+  confidence: z
+    .string()
+    .regex(/^0\.[5-9]\d{0,5}$/)
+    .optional(),
+});
+export type RankingQuery = z.infer<typeof rankingQuery>;
+
+const contextVariant = z.strictObject({
+  id: text,
+  name: text,
+  bodyShape: text,
+  description: text.optional(),
+  lengthMm: number.optional(),
+  widthMm: number.optional(),
+  heightMm: number.optional(),
+  wheelbaseMm: number.optional(),
+  frontalAreaMethod: text,
+  frontalAreaDate: text,
+  configurations: z.array(
+    z.strictObject({
+      id: text,
+      name: text,
+      massKg: number,
+      rollingResistance: number.optional(),
+      roadLoadReference: roadLoadReferenceSchema.optional(),
+      salesShare: number,
+    }),
+  ),
+});
+
+export const rankingContext = z.strictObject({
+  programme: z.strictObject({
+    id: text,
+    name: text,
+    commonArea: z.union([
+      z.strictObject({ kind: z.literal('fixed'), areaM2: number }),
+      z.strictObject({ kind: z.literal('variant'), variantId: text }),
+    ]),
+    characteristicLengthName: text,
+    milestones: z.array(z.strictObject({ id: text, name: text, date: text })),
+  }),
+  variants: z.array(contextVariant),
+  adoptions: z.array(z.strictObject({ variantId: text, resultId: text, at: text, by: text })),
+  cycles: z.array(
+    z.strictObject({
+      key: text,
+      name: text,
+      source: text,
+      timeS: z.array(number),
+      speedKmh: z.array(number),
+    }),
+  ),
+}) satisfies z.ZodType<RankingContext>;
+
+const viewFigure = figureSchema.omit({ contributions: true });
+const viewCoefficient = z.strictObject({ areaM2: number, value: number, expandedUncertainty: number });
+const viewEvidence = z.strictObject({
+  resultId: text,
+  name: text,
+  testDate: text,
+  facilityName: text,
+  facilityKind: z.enum(['closed', 'open-jet', 'slotted', 'road', 'simulation']),
+  scale: number,
+  adopted: z.boolean(),
+});
+const conditionValue = z.union([text, number, z.boolean()]);
+
+const viewRow = z.strictObject({
+  rank: z.int(),
+  ...named,
+  bodyShape: text,
+  description: text,
+  lengthMm: number.nullable(),
+  heightMm: number.nullable(),
+  wheelbaseMm: number.nullable(),
+  figure: viewFigure,
+  onCommonArea: viewCoefficient,
+  onOwnArea: viewCoefficient,
+  configuration: text,
+  baseStandsIn: z.boolean(),
+  massKg: number.nullable(),
+  energy: z
+    .strictObject({
+      wheelEnergyWhPerKm: number,
+      expandedUncertaintyWhPerKm: number,
+      brakingEnergyWhPerKm: number,
+      whPerKmPerCount: number,
+      f0N: number,
+      f1NPerKmh: number,
+      f2NPerKmh2: number,
+    })
+    .nullable(),
+  rankByDragArea: z.int(),
+  rankByOwnArea: z.int(),
+  rankByEnergy: z.int().nullable(),
+  probabilityLowerThanNext: number.nullable(),
+  evidence: z.array(viewEvidence),
+  newer: viewEvidence.nullable(),
+  reynolds: number,
+  mach: number,
+  blockageRatio: number.nullable(),
+  cautions: z.array(
+    z.enum([
+      'blockage',
+      'included-with-reason',
+      'mach',
+      'outside-cipm-2007-range',
+      'transition',
+      'unpaired-yaw-in-unsymmetrical-sweep',
+    ]),
+  ),
+  steps: z.array(
+    z.strictObject({
+      step: z.enum([
+        'full-scale-drag-area',
+        'reynolds',
+        'condition-adjustments',
+        'facility-correlation',
+        'yaw-ratio',
+      ]),
+      dragAreaM2: number,
+    }),
+  ),
+  contributions: z.array(
+    z.strictObject({
+      key: text,
+      amountM2: number,
+      degreesOfFreedom: number.nullable(),
+      shareOfVariance: number,
+      varianceEstimate: text.optional(),
+      kind: text,
+      of: text,
+    }),
+  ),
+});
+
+const viewNotice = z.strictObject({
+  order: z.enum(['own-area', 'energy']),
+  inversions: z.array(
+    z.strictObject({
+      ...named,
+      direction: z.enum(['behind', 'ahead']),
+      value: number,
+      others: z.array(z.strictObject({ ...named, value: number })),
+      extreme: z.enum(['smallest', 'largest']).nullable(),
+    }),
+  ),
+  more: z.int(),
+});
+
+const viewExclusion = z.strictObject({
+  resultId: text,
+  name: text,
+  variantId: text,
+  variantName: text,
+  facilityName: text,
+  testDate: text,
+  adopted: z.boolean(),
+  rules: z.array(
+    z.strictObject({
+      rule: text,
+      remedy: z.enum(['include-with-reason', 'change-policy', 'enter-anew', 'measure-yaw']),
+      value: number.nullable(),
+      limit: number.nullable(),
+      items: z.array(
+        z.strictObject({ item: text, reference: conditionValue, stated: conditionValue.nullable() }),
+      ),
+      detail: text.nullable(),
+    }),
+  ),
+});
+
+export const rankingView = z.strictObject({
+  programmeName: text,
+  order: z.enum(ORDERS),
+  basis: z.enum(BASES),
+  evidence: z.enum(EVIDENCE_BASES),
+  commonAreaM2: number,
+  commonAreaOf: text.nullable(),
+  confidence: number,
+  cycle: z.strictObject({ key: text, name: text, distanceM: number }).nullable(),
+  air: z.strictObject({ state: text, densityKgM3: number }),
+  configuration: text.nullable(),
+  referenceReynolds: number,
+  characteristicLengthName: text,
+  ignored: z.array(z.enum(['area', 'air', 'cycle', 'configuration', 'order'])),
+  resultCount: z.int(),
+  rows: z.array(viewRow),
+  groups: z.array(
+    z.strictObject({
+      variantIds: z.array(text),
+      names: z.array(text),
+      fromRank: z.int(),
+      toRank: z.int(),
+      difference: number,
+      probability: number,
+    }),
+  ),
+  notices: z.array(viewNotice),
+  stayedOut: z.array(viewExclusion),
+  withoutEvidence: z.array(z.strictObject(named)),
+  withoutEnergy: z.array(z.strictObject(named)),
+  offers: z.strictObject({
+    areas: z.array(z.strictObject({ ...named, areaM2: number })),
+    cycles: z.array(z.strictObject({ key: text, name: text })),
+    configurations: z.array(text),
+    programmeAir: airInputSchema,
+    programmeAreaM2: number,
+    programmeAreaOf: text.nullable(),
+    programmeConfidence: number,
+  }),
+}) satisfies z.ZodType<RankingView>;
+
+export const rankingInputsRead = endpoint({
+  kind: 'json',
+  method: 'GET',
+  path: '/api/v1/programmes/:programmeId/ranking-inputs',
+  summary:
+    'Everything that the ranking depends on, in the shape that the machine entry’s operation `rank` takes, with names',
+  access: 'ranking-inputs.read',
+  params: programmeParams,
+  query: z.strictObject({
+    evidence: z
+      .enum(EVIDENCE_BASES)
+      .optional()
+      .describe(
+        '`adopted`: a variant with an adoption carries its adopted result alone; `newest`: all results',
+      ),
+  }),
+  body: nothing,
+  response: rankingInputSchema,
+  command: false,
+  versioned: false,
+  problems: ['unusable-input'],
+});
+
+export const rankingContextRead = endpoint({
+  kind: 'json',
+  method: 'GET',
+  path: '/api/v1/programmes/:programmeId/ranking-context',
+  summary:
+    'What the ranking screen needs beside the inputs: adoptions, configurations, cycles with their traces',
+  access: 'ranking-inputs.read',
+  params: programmeParams,
+  query: nothing,
+  body: nothing,
+  response: rankingContext,
+  command: false,
+  versioned: false,
+  problems: ['unusable-input'],
+});
+
+export const rankingViewRead = endpoint({
+  kind: 'json',
+  method: 'GET',
+  path: '/api/v1/programmes/:programmeId/ranking-view',
+  summary: 'The ranking for the choices in the query, without the raw evidence',
+  access: 'ranking-view.read',
+  params: programmeParams,
+  query: rankingQuery,
+  body: nothing,
+  response: rankingView,
+  command: false,
+  versioned: false,
+  problems: ['unusable-input', 'method-refused'],
+});

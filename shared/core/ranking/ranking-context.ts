@@ -1,0 +1,62 @@
+import type { RoadLoadReference } from '../road-load/road-load';
+
+/** Which area the programme shows coefficients on. */
+export type CommonAreaPolicy =
+  | { readonly kind: 'fixed'; readonly areaM2: number }
+  | { readonly kind: 'variant'; readonly variantId: string };
+
+/** One way in which a variant is sold, as far as its energy at the wheel depends on it. */
+export interface ContextConfiguration {
+  readonly id: string;
+  readonly name: string;
+  readonly massKg: number;
+  readonly rollingResistance?: number | undefined;
+  readonly roadLoadReference?: RoadLoadReference | undefined;
+  readonly salesShare: number;
+}
+
+/** What a person sees of a variant beside its figures. */
+export interface ContextVariant {
+  readonly id: string;
+  readonly name: string;
+  readonly bodyShape: string;
+  readonly description?: string | undefined;
+  readonly lengthMm?: number | undefined;
+  readonly widthMm?: number | undefined;
+  readonly heightMm?: number | undefined;
+  readonly wheelbaseMm?: number | undefined;
+  readonly frontalAreaMethod: string;
+  readonly frontalAreaDate: string;
+  /** The first is the base. */
+  readonly configurations: readonly ContextConfiguration[];
+}
+
+export interface ContextAdoption {
+  readonly variantId: string;
+  readonly resultId: string;
+  /** When and by whom; a moment with its offset. */
+  readonly at: string;
+  readonly by: string;
+}
+
+export interface ContextCycle {
+  readonly key: string;
+  readonly name: string;
+  readonly source: string;
+  readonly timeS: readonly number[];
+  readonly speedKmh: readonly number[];
+}
+
+/** What the ranking screen needs beside the inputs of the method. Only variants that are not retired, and adoptions that stand. */
+export interface RankingContext {
+  readonly programme: {
+    readonly id: string;
+    readonly name: string;
+    readonly commonArea: CommonAreaPolicy;
+    readonly characteristicLengthName: string;
+    readonly milestones: readonly { readonly id: string; readonly name: string; readonly date: string }[];
+  };
+  readonly variants: readonly ContextVariant[];
+  readonly adoptions: readonly ContextAdoption[];
+  readonly cycles: readonly ContextCycle[];
+}

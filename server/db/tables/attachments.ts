@@ -1,15 +1,15 @@
 import { sql } from 'drizzle-orm';
 import { check, integer, pgTable, text, uuid } from 'drizzle-orm/pg-core';
+import { ATTACHMENT_PURPOSES } from '#shared/contracts/attachments';
 import { byMember, tenantKey, tenantRules } from './columns';
 import { bytea, instant } from './database-terms';
-
-/** The largest attachment that is kept, in bytes (10 MB). */
-export const ATTACHMENT_LIMIT_BYTES = 10 * 1024 * 1024;
 
 export const attachments = pgTable(
   'attachments',
   {
     ...tenantKey(),
+    /** A picture may be seen by whoever sees the variant, evidence by whoever sees results. */
+    purpose: text('purpose', { enum: ATTACHMENT_PURPOSES }).notNull(),
     fileName: text('file_name').notNull(),
     mediaType: text('media_type').notNull(),
     bytes: integer('bytes').notNull(),
@@ -21,6 +21,7 @@ export const attachments = pgTable(
   (t) => [
     ...tenantRules('attachments', t),
     byMember('attachments', t.organisationId, t.createdBy),
+    check('attachments_purpose_check', sql`${t.purpose} in ('picture', 'evidence')`),
     check('attachments_size_check', sql`octet_length(${t.content}) = ${t.bytes} and ${t.bytes} <= 10485760`),
   ],
 );

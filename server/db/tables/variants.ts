@@ -27,10 +27,10 @@ export const variants = pgTable(
     name: text('name').notNull(),
     bodyShape: text('body_shape', { enum: BODY_SHAPES }).notNull(),
     description: text('description'),
-    lengthMm: doublePrecision('length_mm').notNull(),
-    widthMm: doublePrecision('width_mm').notNull(),
-    heightMm: doublePrecision('height_mm').notNull(),
-    wheelbaseMm: doublePrecision('wheelbase_mm').notNull(),
+    lengthMm: doublePrecision('length_mm'),
+    widthMm: doublePrecision('width_mm'),
+    heightMm: doublePrecision('height_mm'),
+    wheelbaseMm: doublePrecision('wheelbase_mm'),
     aliases: text('aliases')
       .array()
       .notNull()

@@ -1,0 +1,37 @@
+/** One step of a derivation, in the order in which it is carried out. */
+export interface DerivationStep {
+  readonly title: string;
+  /** The step's result as it reads, with unit, for example `0.2747` or `899.3 Pa`. */
+  readonly result: string;
+  /** The formula in symbols: MathML and the same as plain text. */
+  readonly formulaMathml: string;
+  readonly formulaText: string;
+  /** The formula with its values. */
+  readonly values: string;
+  readonly source: string;
+  /** Method and version that carried it out, `id@version`. */
+  readonly method: string;
+  readonly changed?: string;
+  readonly assumed: readonly string[];
+  readonly cautions: readonly string[];
+}
+
+/** One contribution to the uncertainty; the shares of a budget sum to 1. */
+export interface BudgetShare {
+  readonly label: string;
+  /** Share of the variance, 0 to 1. */
+  readonly share: number;
+  /** Standard uncertainty as it reads, with unit. */
+  readonly u?: string;
+}
+
+/** Everything the sheet shows of one figure. */
+export interface Derivation {
+  /** The figure as it reads: value, U and unit apart, so that U is set smaller. */
+  readonly figure: { readonly value: string; readonly expandedU?: string; readonly unit: string };
+  /** What the figure is: variant, kind, basis, evidence, coverage factor. */
+  readonly summary: string;
+  readonly steps: readonly DerivationStep[];
+  readonly budget: readonly BudgetShare[];
+  readonly budgetNote?: string;
+}

@@ -73,6 +73,7 @@ export const rankingContext = z.strictObject({
   }),
   variants: z.array(contextVariant),
   adoptions: z.array(z.strictObject({ variantId: text, resultId: text, at: text, by: text })),
+  sessions: z.array(z.strictObject({ id: text, name: text })),
   cycles: z.array(
     z.strictObject({
       key: text,
@@ -108,7 +109,7 @@ const viewRow = z.strictObject({
   figure: viewFigure,
   onCommonArea: viewCoefficient,
   onOwnArea: viewCoefficient,
-  configuration: text,
+  configuration: text.nullable(),
   baseStandsIn: z.boolean(),
   massKg: number.nullable(),
   energy: z

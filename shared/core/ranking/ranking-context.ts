@@ -27,7 +27,7 @@ export interface ContextVariant {
   readonly wheelbaseMm?: number | undefined;
   readonly frontalAreaMethod: string;
   readonly frontalAreaDate: string;
-  /** The first is the base. */
+  /** The first is the base; none where nobody has typed a mass yet. */
   readonly configurations: readonly ContextConfiguration[];
 }
 
@@ -58,5 +58,7 @@ export interface RankingContext {
   };
   readonly variants: readonly ContextVariant[];
   readonly adoptions: readonly ContextAdoption[];
+  /** Entries in facilities, by the id that the inputs hold. */
+  readonly sessions: readonly { readonly id: string; readonly name: string }[];
   readonly cycles: readonly ContextCycle[];
 }

@@ -70,7 +70,8 @@ export interface ViewRow {
   readonly figure: ViewFigure;
   readonly onCommonArea: ViewCoefficient;
   readonly onOwnArea: ViewCoefficient;
-  readonly configuration: string;
+  /** Null where the variant has no configuration yet. */
+  readonly configuration: string | null;
   /** True where the chosen configuration does not exist on this variant and its base stands in. */
   readonly baseStandsIn: boolean;
   readonly massKg: number | null;

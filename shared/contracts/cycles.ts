@@ -60,7 +60,7 @@ export const cycleRead = endpoint({
 export const TIME_UNITS = ['s', 'min'] as const;
 export const SPEED_UNITS = ['km/h', 'm/s', 'mph'] as const;
 
-/** The CSV's text travels in the JSON body: a trace of a day at 10 Hz stays under the limit. */
+/** The CSV's text travels in the JSON body: a trace of five hours at 10 Hz stays under the limit. */
 export const cycleCreate = endpoint({
   kind: 'json',
   method: 'POST',

@@ -1,5 +1,14 @@
 import { sql } from 'drizzle-orm';
-import { check, doublePrecision, jsonb, pgTable, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  check,
+  doublePrecision,
+  integer,
+  jsonb,
+  pgTable,
+  text,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import { byMember, tenantKey, tenantRules } from './columns';
 import { instant } from './database-terms';
 
@@ -24,7 +33,12 @@ const trace = () => ({
 /** Outside tenants: the built-in cycles, known by name, written only by maintenance. */
 export const referenceCycles = pgTable(
   'reference_cycles',
-  { key: text('key').primaryKey(), ...trace() },
+  {
+    key: text('key').primaryKey(),
+    /** The order in which they are offered. */
+    position: integer('position').notNull().default(0),
+    ...trace(),
+  },
   (t) => [check('reference_cycles_trace_check', sql`cardinality(${t.timeS}) = cardinality(${t.speedKmh})`)],
 );
 

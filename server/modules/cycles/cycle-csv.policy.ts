@@ -62,11 +62,11 @@ function rowsOf(text: string, delimiter: string): readonly Row[] | undefined {
       relax_column_count: true,
       skip_empty_lines: true,
       trim: true,
-      info: true,
       record_delimiter: ['\r\n', '\n', '\r'],
-    }) as readonly { readonly info: { readonly lines: number }; readonly record: readonly string[] }[];
+      on_record: (record: string[], { lines }) => [String(lines), ...record],
+    });
     return records
-      .map(({ info, record }) => ({ line: info.lines, cells: withoutEmptyEnd(record) }))
+      .map(([line = '', ...cells]) => ({ line: Number(line), cells: withoutEmptyEnd(cells) }))
       .filter((row) => row.cells.some((cell) => cell !== ''));
   } catch {
     return undefined;

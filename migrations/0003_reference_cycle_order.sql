@@ -1,0 +1,1 @@
+ALTER TABLE "reference_cycles" ADD COLUMN "position" integer DEFAULT 0 NOT NULL;

@@ -1,0 +1,90 @@
+import { asc, eq, inArray, sql } from 'drizzle-orm';
+import type { Facility, FacilityFields } from '#shared/contracts/facilities';
+import type { Tx } from '../../db/pools';
+import { facilities } from '../../db/tables/facilities';
+import { present } from '../../db/returned-row';
+import { withNulls, withoutNulls } from '../../db/without-nulls';
+
+const COLUMNS = [
+  'name',
+  'kind',
+  'areaM2',
+  'blockage',
+  'usualCondition',
+  'biasURelative',
+  'biasUM2',
+  'sessionURelative',
+  'sessionUM2',
+  'sessionDegreesOfFreedom',
+  'installationURelative',
+  'installationUM2',
+  'installationDegreesOfFreedom',
+  'repeatabilityURelative',
+  'repeatabilityDegreesOfFreedom',
+  'remark',
+] as const satisfies readonly (keyof FacilityFields)[];
+
+function facilityOf(row: typeof facilities.$inferSelect): Facility {
+  const { organisationId: _organisationId, createdAt: _createdAt, retiredAt, ...rest } = row;
+  return { ...withoutNulls(rest), ...(retiredAt === null ? {} : { retiredAt: retiredAt.toISOString() }) };
+}
+
+export async function listFacilities(tx: Tx): Promise<readonly Facility[]> {
+  const rows = await tx
+    .select()
+    .from(facilities)
+    .orderBy(sql`lower(${facilities.name})`, asc(facilities.id));
+  return rows.map(facilityOf);
+}
+
+export async function findFacility(tx: Tx, id: string): Promise<Facility | undefined> {
+  const [row] = await tx.select().from(facilities).where(eq(facilities.id, id));
+  return row && facilityOf(row);
+}
+
+/** As `findFacility`, and nobody else changes it until the transaction ends. */
+export async function lockFacility(tx: Tx, id: string): Promise<Facility | undefined> {
+  const [row] = await tx.select().from(facilities).where(eq(facilities.id, id)).for('no key update');
+  return row && facilityOf(row);
+}
+
+/** Which of these ids are facilities of the organisation. */
+export async function knownFacilityIds(tx: Tx, ids: readonly string[]): Promise<ReadonlySet<string>> {
+  if (ids.length === 0) return new Set();
+  const rows = await tx
+    .select({ id: facilities.id })
+    .from(facilities)
+    .where(inArray(facilities.id, [...ids]));
+  return new Set(rows.map((row) => row.id));
+}
+
+export async function facilityOfName(tx: Tx, name: string): Promise<string | undefined> {
+  const [row] = await tx
+    .select({ id: facilities.id })
+    .from(facilities)
+    .where(sql`lower(${facilities.name}) = lower(${name})`);
+  return row?.id;
+}
+
+export async function insertFacility(tx: Tx, fields: FacilityFields): Promise<Facility> {
+  const [row] = await tx.insert(facilities).values(withNulls(fields, COLUMNS)).returning();
+  return facilityOf(present(row));
+}
+
+export async function updateFacility(tx: Tx, id: string, fields: FacilityFields): Promise<Facility> {
+  const [row] = await tx
+    .update(facilities)
+    .set({ ...withNulls(fields, COLUMNS), version: sql`${facilities.version} + 1` })
+    .where(eq(facilities.id, id))
+    .returning();
+  return facilityOf(present(row));
+}
+
+export async function setFacilityRetired(tx: Tx, id: string, retiredAt: Date | null): Promise<Facility> {
+  const [row] = await tx
+    .update(facilities)
+    .set({ retiredAt, version: sql`${facilities.version} + 1` })
+    .where(eq(facilities.id, id))
+    .returning();
+  return facilityOf(present(row));
+}

@@ -1,0 +1,6 @@
+import type { ServerModule } from '../../http/module';
+import { facilitiesRoutes } from './facilities.routes';
+
+export { findFacility, knownFacilityIds, listFacilities } from './facilities.repository';
+
+export const facilitiesModule: ServerModule = { name: 'facilities', routes: facilitiesRoutes };

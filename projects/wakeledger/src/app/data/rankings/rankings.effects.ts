@@ -1,0 +1,54 @@
+import { inject } from '@angular/core';
+import { Actions, createEffect, ofType } from '@ngrx/effects';
+import { concatLatestFrom, mapResponse } from '@ngrx/operators';
+import { Store } from '@ngrx/store';
+import { debounceTime, filter, map, switchMap } from 'rxjs';
+import { asApiProblem } from '../../core/api/api-problem';
+import { RankingsApi } from './rankings-api';
+import { RankingPageActions, RankingsApiActions } from './rankings.actions';
+import { rankingsFeature } from './rankings.feature';
+
+/** A control that is moved again within this time asks once [ms]. */
+export const VIEW_DEBOUNCE_MS = 150;
+
+/** Opening the page fetches the inputs, once; no control ever does. The latest programme wins. */
+export const loadSources = createEffect(
+  (actions = inject(Actions), store = inject(Store), api = inject(RankingsApi)) =>
+    actions.pipe(
+      ofType(RankingPageActions.opened, RankingPageActions.retryPressed),
+      concatLatestFrom(() => store.select(rankingsFeature.selectRankingsState)),
+      map(([, state]) => state),
+      filter(({ mode, programmeId }) => mode === 'computes' && programmeId !== ''),
+      switchMap(({ programmeId }) =>
+        api.sources(programmeId).pipe(
+          mapResponse({
+            next: (sources) => RankingsApiActions.sourcesLoaded({ programmeId, sources }),
+            error: (thrown) =>
+              RankingsApiActions.sourcesFailed({ programmeId, problem: asApiProblem(thrown) }),
+          }),
+        ),
+      ),
+    ),
+  { functional: true },
+);
+
+/** Those who may not hold the inputs ask the server for each view; only the answer to the latest choice counts. */
+export const loadView = createEffect(
+  (actions = inject(Actions), store = inject(Store), api = inject(RankingsApi)) =>
+    actions.pipe(
+      ofType(RankingPageActions.opened, RankingPageActions.addressChanged, RankingPageActions.retryPressed),
+      debounceTime(VIEW_DEBOUNCE_MS),
+      concatLatestFrom(() => store.select(rankingsFeature.selectRankingsState)),
+      map(([, state]) => state),
+      filter(({ mode, programmeId }) => mode === 'is-given' && programmeId !== ''),
+      switchMap(({ programmeId, address }) =>
+        api.view(programmeId, address).pipe(
+          mapResponse({
+            next: (view) => RankingsApiActions.viewLoaded({ programmeId, view }),
+            error: (thrown) => RankingsApiActions.viewFailed({ programmeId, problem: asApiProblem(thrown) }),
+          }),
+        ),
+      ),
+    ),
+  { functional: true },
+);

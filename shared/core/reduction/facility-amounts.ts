@@ -1,0 +1,99 @@
+import type { FacilityInput } from '../ranking/ranking-input';
+import { refuse } from '../refusal';
+import { amount, type Amount } from '../uncertainty/budget';
+import type { ReducedPoint, ResultParts } from './reduction';
+import { needed, neededPositive } from './result-parts';
+import { combinedDegreesOfFreedom } from './yaw/yaw-points';
+
+/** Relative (of the full-scale drag area) and absolute part add. */
+function typed(
+  relative: number | null | undefined,
+  absoluteM2: number | null | undefined,
+  dragAreaM2: number,
+): number {
+  return (relative ?? 0) * dragAreaM2 + (absoluteM2 ?? 0);
+}
+
+export function biasKey(facility: FacilityInput): string {
+  return facility.kind === 'simulation' ? `simulation-bias:${facility.id}` : `facility-bias:${facility.id}`;
+}
+
+function biasAmount({ facility }: ResultParts, dragAreaM2: number): number {
+  return typed(facility.biasURelative, facility.biasUM2, dragAreaM2);
+}
+
+/**
+ * A source's own U/k stands for repeatability, installation and session; if the facility's bias is in it, the bias keeps its
+ * key and the stated amount is √(u² − u_bias²), 0 if that is negative (method section 9).
+ */
+function statedAmount(parts: ResultParts, points: readonly ReducedPoint[], dragAreaM2: number): Amount[] {
+  const { result } = parts;
+  const { stated } = result;
+  if (stated == null) return [];
+  const uValue = needed(stated.expandedU, 'stated.expandedU') / neededPositive(stated.k, 'stated.k');
+  const perValue = points.reduce((sum, point) => sum + point.perValue, 0) / points.length;
+  const u = uValue * perValue;
+  const bias = stated.includesFacilityBias ? biasAmount(parts, dragAreaM2) : 0;
+  const own = Math.sqrt(Math.max(0, u * u - bias * bias));
+  return [amount(`stated:${result.id}`, own, stated.degreesOfFreedom)];
+}
+
+/**
+ * Repeatability of the mean of several points, taken as independent.
+ *
+ * @throws {Refused} missing-input: neither s nor the facility's repeatability is there
+ */
+function repeatabilityAmount({ result }: ResultParts, points: readonly ReducedPoint[]): Amount {
+  const parts = points.map(({ repeatability }) => {
+    if (repeatability === null) {
+      refuse(
+        'missing-input',
+        'points.s',
+        'Neither s nor the facility’s repeatability nor a stated uncertainty is given.',
+      );
+    }
+    return {
+      amount: repeatability.amountM2 / points.length,
+      degreesOfFreedom: repeatability.degreesOfFreedom,
+    };
+  });
+  const [only] = parts;
+  const degreesOfFreedom =
+    parts.length === 1 && only !== undefined ? only.degreesOfFreedom : combinedDegreesOfFreedom(parts);
+  return amount(
+    `repeatability:${result.id}`,
+    Math.hypot(...parts.map((part) => part.amount)),
+    degreesOfFreedom,
+  );
+}
+
+function sessionAndInstallation({ result, facility }: ResultParts, dragAreaM2: number): Amount[] {
+  return [
+    amount(
+      `session:${result.sessionId ?? result.id}`,
+      typed(facility.sessionURelative, facility.sessionUM2, dragAreaM2),
+      facility.sessionDegreesOfFreedom,
+    ),
+    amount(
+      `installation:${result.installationId ?? result.id}`,
+      typed(facility.installationURelative, facility.installationUM2, dragAreaM2),
+      facility.installationDegreesOfFreedom,
+    ),
+  ];
+}
+
+/**
+ * What comes with the facility and the reading rather than with a correction, at the full-scale drag area [m²] of the
+ * zero-yaw points.
+ *
+ * @throws {Refused} missing-input
+ */
+export function facilityAmounts(
+  parts: ResultParts,
+  points: readonly ReducedPoint[],
+  dragAreaM2: number,
+): Amount[] {
+  const bias = amount(biasKey(parts.facility), biasAmount(parts, dragAreaM2));
+  if (parts.result.stated != null) return [bias, ...statedAmount(parts, points, dragAreaM2)];
+  return [bias, repeatabilityAmount(parts, points), ...sessionAndInstallation(parts, dragAreaM2)];
+}

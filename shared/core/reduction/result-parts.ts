@@ -1,0 +1,85 @@
+import { airOf, type Air } from '../air/air';
+import {
+  QUANTITIES,
+  TUNNEL_KINDS,
+  type FacilityInput,
+  type ModelInput,
+  type Quantity,
+  type ResultInput,
+  type TunnelKind,
+  type VariantInput,
+} from '../ranking/ranking-input';
+import { refuse } from '../refusal';
+import { blockageRatio } from './blockage';
+import type { ReductionContext, ResultParts, TunnelParts } from './reduction';
+import { checkScale } from './scale';
+
+/** @throws {Refused} missing-input where there is nothing */
+export function needed<T>(value: T | null | undefined, where: string): T {
+  return value ?? refuse('missing-input', where, `${where} is missing.`);
+}
+
+/** @throws {Refused} missing-input, not-positive */
+export function neededPositive(value: number | null | undefined, where: string): number {
+  const given = needed(value, where);
+  if (!(given > 0)) refuse('not-positive', where, `${where} must be above 0, not ${given}.`);
+  return given;
+}
+
+export function isTunnel(kind: FacilityInput['kind']): kind is TunnelKind {
+  return TUNNEL_KINDS.some((tunnel) => tunnel === kind);
+}
+
+/** @throws {Refused} missing-input, unknown-quantity */
+export function quantityOf(result: ResultInput): Quantity {
+  const quantity = needed(result.quantity, 'quantity');
+  const known = QUANTITIES.find((one) => one === quantity);
+  return known ?? refuse('unknown-quantity', 'quantity', `There is no quantity “${quantity}”.`);
+}
+
+function modelOf(result: ResultInput, context: ReductionContext): ModelInput | null {
+  if (result.modelId == null) return null;
+  return (
+    context.models.get(result.modelId) ??
+    refuse('unknown-model', 'modelId', `There is no model “${result.modelId}”.`)
+  );
+}
+
+function tunnelOf(facility: FacilityInput, variant: VariantInput, scale: number): TunnelParts | null {
+  if (!isTunnel(facility.kind)) return null;
+  const areaM2 = neededPositive(facility.areaM2, 'facility.areaM2');
+  return { areaM2, blockageRatio: blockageRatio(scale, variant.frontalAreaM2, areaM2) };
+}
+
+function resultAir(result: ResultInput): Air {
+  return airOf(needed(result.air, 'air'), 'air');
+}
+
+/**
+ * Finds what a result names and checks what it must state.
+ *
+ * @throws {Refused} unknown-variant, unknown-facility, unknown-model, unknown-quantity, missing-input, scale-out-of-range,
+ *   not-positive, model-larger-than-section, and the codes of air
+ */
+export function resultPartsOf(result: ResultInput, context: ReductionContext): ResultParts {
+  const variant =
+    context.variants.get(result.variantId) ??
+    refuse('unknown-variant', 'variantId', `There is no variant “${result.variantId}”.`);
+  const facility =
+    context.facilities.get(result.facilityId) ??
+    refuse('unknown-facility', 'facilityId', `There is no facility “${result.facilityId}”.`);
+  const model = modelOf(result, context);
+  needed(result.testDate, 'testDate');
+  quantityOf(result);
+  const scale = needed(result.scale, 'scale');
+  checkScale(scale);
+  return {
+    result,
+    variant,
+    facility,
+    model,
+    air: resultAir(result),
+    scale,
+    tunnel: tunnelOf(facility, variant, scale),
+  };
+}

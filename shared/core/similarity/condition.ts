@@ -1,0 +1,14 @@
+import type { ConditionInput } from '../ranking/ranking-input';
+
+/**
+ * The items of the reference condition in which a result differs. Values match exactly; an item that the result does not
+ * state counts as different; items that only the result states are not compared (method section 8).
+ */
+export function differingItems(
+  reference: ConditionInput | null | undefined,
+  condition: ConditionInput | null | undefined,
+): string[] {
+  return Object.entries(reference ?? {})
+    .filter(([item, value]) => value != null && condition?.[item] !== value)
+    .map(([item]) => item);
+}

@@ -27,6 +27,8 @@ const server = {
   rootDir: '.',
   testMatch: ['<rootDir>/server/**/*.{spec,test}.ts'],
   testEnvironment: 'node',
+  globalSetup: '<rootDir>/server/testing/global-setup.ts',
+  globalTeardown: '<rootDir>/server/testing/global-teardown.ts',
   transform: swc,
 };
 

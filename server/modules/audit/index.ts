@@ -1,0 +1,2 @@
+export { recordAudit } from './audit.repository';
+export { differences } from './differences';

@@ -1,0 +1,53 @@
+import { randomBytes } from 'node:crypto';
+import pg from 'pg';
+import { connectStatements } from '../db/bootstrap';
+import { type DatabaseRole, ROLE_NAMES } from '../db/roles';
+import { TEMPLATE, type TestCluster, roleUrl, runStatements } from './test-cluster';
+
+/** A migrated, empty database of a test file's own. */
+export interface TestDatabase {
+  readonly url: (role: DatabaseRole) => string;
+  readonly superuserUrl: string;
+  /** Runs one statement as a role, on a connection of its own. */
+  readonly query: <Row extends pg.QueryResultRow>(
+    role: DatabaseRole | 'superuser',
+    text: string,
+    values?: readonly unknown[],
+  ) => Promise<readonly Row[]>;
+  readonly drop: () => Promise<void>;
+}
+
+export async function createTestDatabase(): Promise<TestDatabase> {
+  const cluster = readCluster();
+  const name = `wakeledger_test_${randomBytes(6).toString('hex')}`;
+  await runStatements(cluster.superuserUrl, [
+    `CREATE DATABASE ${name} TEMPLATE ${TEMPLATE} OWNER ${ROLE_NAMES.owner}`,
+    ...connectStatements(name),
+  ]);
+  const superuserUrl = cluster.superuserUrl.replace(/\/postgres$/, `/${name}`);
+  const url = (role: DatabaseRole) => roleUrl(cluster, role, name);
+  return {
+    url,
+    superuserUrl,
+    query: async <Row extends pg.QueryResultRow>(
+      role: DatabaseRole | 'superuser',
+      text: string,
+      values: readonly unknown[] = [],
+    ) => {
+      const client = new pg.Client({ connectionString: role === 'superuser' ? superuserUrl : url(role) });
+      await client.connect();
+      try {
+        return (await client.query<Row>(text, [...values])).rows;
+      } finally {
+        await client.end();
+      }
+    },
+    drop: () => runStatements(cluster.superuserUrl, [`DROP DATABASE ${name} WITH (FORCE)`]),
+  };
+}
+
+function readCluster(): TestCluster {
+  const text = process.env['WAKELEDGER_TEST_CLUSTER'];
+  if (text === undefined) throw new Error('Run this through jest’s project `server`: it starts the cluster.');
+  return JSON.parse(text) as TestCluster;
+}

@@ -33,3 +33,17 @@ export function repeated(texts: readonly string[]): readonly number[] {
     return again ? [position] : [];
   });
 }
+
+/** Positions of ids that are not among the known ones or stand twice; entries without an id are new and pass. */
+export function strangers(
+  ids: readonly (string | undefined)[],
+  known: ReadonlySet<string>,
+): readonly number[] {
+  const met = new Set<string>();
+  return ids.flatMap((id, position) => {
+    if (id === undefined) return [];
+    const strange = met.has(id) || !known.has(id);
+    met.add(id);
+    return strange ? [position] : [];
+  });
+}

@@ -81,6 +81,22 @@ export const programmeRead = endpoint({
   problems: [],
 });
 
+/** Sent when a person opens a programme: sign-in leads to the latest one. */
+export const programmeOpened = endpoint({
+  kind: 'json',
+  method: 'POST',
+  path: '/api/v1/programmes/:programmeId/opening',
+  summary: 'Remember that this person opened the programme, where the next sign-in leads',
+  access: 'programmes.read',
+  params: programmeParams,
+  query: nothing,
+  body: nothing,
+  response: nothing,
+  command: true,
+  versioned: false,
+  problems: [],
+});
+
 export const programmeCreate = endpoint({
   kind: 'json',
   method: 'POST',

@@ -3,7 +3,12 @@ import { programmeIssues } from './programmes.policy';
 
 const VARIANT = '3f0f7c86-9a4e-4c5f-9f0b-3a6f3c0f8a01';
 const FACILITY = '3f0f7c86-9a4e-4c5f-9f0b-3a6f3c0f8a02';
-const surroundings = { variantIds: new Set([VARIANT]), facilityIds: new Set([FACILITY]) };
+const MILESTONE = '3f0f7c86-9a4e-4c5f-9f0b-3a6f3c0f8a04';
+const surroundings = {
+  variantIds: new Set([VARIANT]),
+  facilityIds: new Set([FACILITY]),
+  milestoneIds: new Set([MILESTONE]),
+};
 
 const fields: ProgrammeFields = {
   name: 'Dunlin',
@@ -37,6 +42,16 @@ describe('a programme', () => {
     expect(issuesOf({ milestones })).toEqual([
       { where: 'milestones.2.name', detail: expect.stringContaining('a name of its own') },
     ]);
+  });
+
+  it('keeps the ids of its own milestones and refuses others, and one that stands twice', () => {
+    const own = { id: MILESTONE, name: 'Clay freeze', date: '2027-03-14' };
+    expect(issuesOf({ milestones: [own] })).toEqual([]);
+    expect(
+      issuesOf({ milestones: [own, { ...own, name: 'Launch' }, { ...own, id: VARIANT, name: 'Start' }] }).map(
+        (issue) => issue.where,
+      ),
+    ).toEqual(['milestones.1.id', 'milestones.2.id']);
   });
 
   it('is refused where the wind is as fast as the car', () => {

@@ -1,13 +1,15 @@
 import { KMH_PER_MS } from '#shared/core/constants';
 import type { ProgrammeFields } from '#shared/contracts/programmes';
 import { airIssues } from '../../rules/air-rules';
-import { Issues, repeated, type Issue } from '../../rules/issue';
+import { Issues, repeated, strangers, type Issue } from '../../rules/issue';
 
 /** What a programme points to, as far as it was found in the organisation. */
 export interface ProgrammeSurroundings {
   /** Ids of the variants of this programme; none for a programme that is only being opened. */
   readonly variantIds: ReadonlySet<string>;
   readonly facilityIds: ReadonlySet<string>;
+  /** Ids of the milestones that the programme has now. */
+  readonly milestoneIds: ReadonlySet<string>;
 }
 
 /** What is wrong with a programme beyond the form of its fields. */
@@ -22,6 +24,17 @@ export function programmeIssues(
       true,
       `milestones.${position}.name`,
       'Another milestone of this programme has this name. Each milestone needs a name of its own.',
+    );
+  }
+
+  for (const position of strangers(
+    fields.milestones.map((milestone) => milestone.id),
+    surroundings.milestoneIds,
+  )) {
+    issues.when(
+      true,
+      `milestones.${position}.id`,
+      'This is not a milestone of this programme. Leave the id out to add a new one.',
     );
   }
 

@@ -1,5 +1,5 @@
 import type { VariantFields } from '#shared/contracts/variants';
-import { Issues, repeated, type Issue } from '../../rules/issue';
+import { Issues, repeated, strangers, type Issue } from '../../rules/issue';
 
 /** Sales shares are typed as rounded percentages: three thirds of 0.333 must be mended, 0.9999999 must not. */
 const SHARE_TOLERANCE = 1e-6;
@@ -95,7 +95,16 @@ function configurationIssues(
       'Another configuration of this variant has this name. Each needs a name of its own.',
     );
   }
-  const met = new Set<string>();
+  for (const position of strangers(
+    configurations.map((configuration) => configuration.id),
+    configurationIds,
+  )) {
+    issues.when(
+      true,
+      `configurations.${position}.id`,
+      'This is not a configuration of this variant. Leave the id out to add a new one.',
+    );
+  }
   configurations.forEach((configuration, position) => {
     const where = `configurations.${position}`;
     const reference = configuration.roadLoadReference;
@@ -110,14 +119,7 @@ function configurationIssues(
         reference !== undefined && reference.f2NPerKmh2 <= 0,
         `${where}.roadLoadReference.f2NPerKmh2`,
         'f2 holds the air’s resistance and must be above 0, in N/(km/h)².',
-      )
-      .when(
-        configuration.id !== undefined &&
-          (met.has(configuration.id) || !configurationIds.has(configuration.id)),
-        `${where}.id`,
-        'This is not a configuration of this variant. Leave the id out to add a new one.',
       );
-    if (configuration.id !== undefined) met.add(configuration.id);
   });
   return issues.list;
 }

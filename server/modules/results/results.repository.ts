@@ -1,0 +1,187 @@
+import { and, asc, eq, sql, type SQL } from 'drizzle-orm';
+import type { Result, ResultFields } from '#shared/contracts/results';
+import type { Work } from '../../http/context';
+import { nextNumbers } from '../../db/counters';
+import { grouped } from '../../db/grouped';
+import type { Tx } from '../../db/pools';
+import { present } from '../../db/returned-row';
+import { testSessions } from '../../db/tables/facilities';
+import { memberships } from '../../db/tables/organisations';
+import { resultPoints, results } from '../../db/tables/results';
+import { withNulls, withoutNulls } from '../../db/without-nulls';
+import { currentAdoptions } from './adoptions.repository';
+import { withdrawalsOf } from './withdrawals.repository';
+
+/** The series of running numbers that every result takes one of, however it comes in. */
+export const ENTRY_SERIES = 'results';
+
+const COLUMNS = [
+  'variantId',
+  'facilityId',
+  'name',
+  'testDate',
+  'quantity',
+  'scale',
+  'quotedAreaM2',
+  'quotedAreaUM2',
+  'quotedAreaScale',
+  'speedKmh',
+  'dynamicPressurePa',
+  'air',
+  'tareAlreadySubtracted',
+  'tareN',
+  'condition',
+  'blockageAlreadyCorrectedBy',
+  'stated',
+  'installation',
+  'source',
+  'remark',
+  'attachmentId',
+] as const satisfies readonly (keyof ResultFields)[];
+
+const POINT_COLUMNS = [
+  'yawDeg',
+  'value',
+  's',
+  'n',
+  'speedKmh',
+  'dynamicPressurePa',
+  'tareN',
+  'frontLift',
+  'rearLift',
+  'sideForce',
+] as const satisfies readonly (keyof ResultFields['points'][number])[];
+
+/** Results with their points, withdrawals and adoptions: five statements, however many results there are. */
+async function select(tx: Tx, where: SQL | undefined): Promise<readonly Result[]> {
+  const rows = await tx
+    .select({ result: results, session: testSessions.name, enteredBy: memberships.displayName })
+    .from(results)
+    .leftJoin(testSessions, eq(testSessions.id, results.testSessionId))
+    .innerJoin(memberships, eq(memberships.userId, results.createdBy))
+    .where(where)
+    .orderBy(asc(results.entrySequence));
+  if (rows.length === 0) return [];
+  // Joined, not listed by id: a programme can hold more results than a statement can hold parameters.
+  const points = await tx
+    .select({ point: resultPoints })
+    .from(resultPoints)
+    .innerJoin(results, eq(results.id, resultPoints.resultId))
+    .where(where)
+    .orderBy(asc(resultPoints.position));
+  const pointsOf = grouped(points, ({ point }) => point.resultId);
+  const withdrawals = await withdrawalsOf(tx, where);
+  const adopted = new Set(
+    [...(await currentAdoptions(tx, [...new Set(rows.map(({ result }) => result.variantId))])).values()].map(
+      (adoption) => adoption.resultId,
+    ),
+  );
+  return rows.map(({ result, session, enteredBy }) => ({
+    ...rawValues(result),
+    ...(session === null ? {} : { session }),
+    points: (pointsOf.get(result.id) ?? []).map(({ point }) => pointOf(point)),
+    enteredBy,
+    adopted: adopted.has(result.id),
+    withdrawn: withdrawals.get(result.id),
+  }));
+}
+
+function rawValues(row: typeof results.$inferSelect) {
+  const {
+    organisationId: _organisationId,
+    createdBy: _createdBy,
+    createdAt,
+    testSessionId: _testSessionId,
+    importRow: _importRow,
+    modelId,
+    turbulenceOrTrips,
+    ...rest
+  } = row;
+  return {
+    ...withoutNulls({ ...rest, model: modelId, turbulenceGenerationOrTrips: turbulenceOrTrips }),
+    enteredAt: createdAt.toISOString(),
+  };
+}
+
+function pointOf(row: typeof resultPoints.$inferSelect): Result['points'][number] {
+  const { organisationId: _organisationId, id: _id, resultId: _resultId, position: _position, ...rest } = row;
+  return withoutNulls(rest);
+}
+
+/** All results of a programme in the order in which they were entered, withdrawn ones included. */
+export async function listResults(tx: Tx, programmeId: string): Promise<readonly Result[]> {
+  return select(tx, eq(results.programmeId, programmeId));
+}
+
+export async function findResult(tx: Tx, programmeId: string, id: string): Promise<Result | undefined> {
+  const [result] = await select(tx, and(eq(results.programmeId, programmeId), eq(results.id, id)));
+  return result;
+}
+
+/** The standing result of this name; a withdrawn one gives its name free for the corrected entry. */
+export async function resultOfName(tx: Tx, programmeId: string, name: string): Promise<string | undefined> {
+  const [row] = await tx
+    .select({ id: results.id })
+    .from(results)
+    .where(
+      and(
+        eq(results.programmeId, programmeId),
+        sql`lower(${results.name}) = lower(${name})`,
+        sql`not exists (select from result_withdrawals w where w.result_id = ${results.id})`,
+      ),
+    );
+  return row?.id;
+}
+
+/**
+ * Takes the next number of entry. Until the commit every other entry of the organisation waits here, so that what is
+ * looked up afterwards (names that are free) still holds when this one is stored.
+ */
+export async function takeEntrySequence(tx: Tx, count = 1): Promise<number> {
+  return nextNumbers(tx, ENTRY_SERIES, count);
+}
+
+/** An entry in a facility, found by its name or begun; it reaches from its first to its last test. */
+export async function sessionOf(tx: Tx, facilityId: string, name: string, testDate: string): Promise<string> {
+  const written = await tx.execute<{ id: string }>(sql`
+    insert into test_sessions as s (facility_id, name, start_date, end_date)
+    values (${facilityId}, ${name}, ${testDate}, ${testDate})
+    on conflict (organisation_id, facility_id, lower(name)) do update
+      set start_date = least(s.start_date, excluded.start_date),
+          end_date = greatest(s.end_date, excluded.end_date)
+    returning s.id`);
+  return present(written.rows[0]).id;
+}
+
+export async function insertResult(
+  work: Work,
+  programmeId: string,
+  fields: ResultFields,
+  entrySequence: number,
+): Promise<Result> {
+  const testSessionId =
+    fields.session === undefined
+      ? null
+      : await sessionOf(work.tx, fields.facilityId, fields.session, fields.testDate);
+  const [row] = await work.tx
+    .insert(results)
+    .values({
+      ...withNulls(fields, COLUMNS),
+      programmeId,
+      testSessionId,
+      entrySequence,
+      modelId: fields.model ?? null,
+      turbulenceOrTrips: fields.turbulenceGenerationOrTrips ?? null,
+      createdBy: work.userId,
+    })
+    .returning({ id: results.id });
+  const { id } = present(row);
+  await work.tx.insert(resultPoints).values(
+    fields.points.map((point, position) => ({
+      ...withNulls(point, POINT_COLUMNS),
+      resultId: id,
+      position,
+    })),
+  );
+  return present(await findResult(work.tx, programmeId, id));
+}

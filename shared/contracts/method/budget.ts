@@ -1,0 +1,9 @@
+import * as z from 'zod';
+import type { BudgetInput } from '../../core/uncertainty/budget-operation';
+import { figureInputSchema } from './figure';
+
+/** Input of the operation `budget`. */
+export const budgetInputSchema = z.strictObject({
+  figure: figureInputSchema,
+  other: figureInputSchema.nullish(),
+}) satisfies z.ZodType<BudgetInput>;

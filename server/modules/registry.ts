@@ -1,13 +1,19 @@
 import type { ServerModule } from '../http/module';
 import { attachmentsModule } from './attachments';
+import { auditModule } from './audit';
 import { cyclesModule } from './cycles';
 import { facilitiesModule } from './facilities';
+import { organisationsModule } from './organisations';
 import { programmesModule } from './programmes';
 import { resultsModule } from './results';
+import { sessionModule } from './session';
 import { variantsModule } from './variants';
 
 /** Every module, once: its routes are mounted, described by OpenAPI and walked by the cross-tenant test from here. */
 export const MODULES: readonly ServerModule[] = [
+  sessionModule,
+  organisationsModule,
+  auditModule,
   programmesModule,
   variantsModule,
   facilitiesModule,

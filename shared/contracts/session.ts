@@ -72,6 +72,25 @@ export const passwordSignIn = endpoint({
   problems: ['sign-in-refused', 'too-many-attempts'],
 });
 
+/** The one-time link that `npm run organisation:create` prints leads here: the token is worth one password. */
+export const passwordSet = endpoint({
+  kind: 'json',
+  method: 'POST',
+  path: '/api/v1/session/password-setting',
+  summary: 'Set a password with a one-time token; sessions of that person end',
+  access: 'public',
+  params: nothing,
+  query: nothing,
+  body: z.strictObject({
+    token: z.string().min(20).max(200),
+    password: z.string().min(12).max(1024),
+  }),
+  response: z.strictObject({ email: z.string(), organisationSlug: z.string() }),
+  command: false,
+  versioned: false,
+  problems: ['sign-in-refused', 'too-many-attempts'],
+});
+
 export const demoSignIn = endpoint({
   kind: 'json',
   method: 'POST',

@@ -25,7 +25,12 @@ export async function recordAudit(work: Work, entry: AuditEntry): Promise<void> 
   });
 }
 
-export async function readAudit(tx: Tx, before: Date | undefined, limit: number) {
+export interface AuditFilter {
+  readonly before: Date | undefined;
+  readonly entityId: string | undefined;
+}
+
+export async function readAudit(tx: Tx, filter: AuditFilter, limit: number) {
   return tx
     .select({
       id: auditEvents.id,
@@ -45,7 +50,12 @@ export async function readAudit(tx: Tx, before: Date | undefined, limit: number)
         eq(memberships.userId, auditEvents.actorUserId),
       ),
     )
-    .where(before ? lt(auditEvents.at, before) : undefined)
+    .where(
+      and(
+        filter.before ? lt(auditEvents.at, filter.before) : undefined,
+        filter.entityId ? eq(auditEvents.entityId, filter.entityId) : undefined,
+      ),
+    )
     .orderBy(desc(auditEvents.at), desc(auditEvents.id))
     .limit(limit);
 }

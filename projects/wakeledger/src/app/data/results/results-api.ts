@@ -1,5 +1,7 @@
 import { Injectable, inject } from '@angular/core';
-import { type Observable, map } from 'rxjs';
+import { type Observable, catchError, forkJoin, map, of } from 'rxjs';
+import { type Programme, programmeRead } from '#shared/contracts/programmes';
+import { rankingInputsRead } from '#shared/contracts/rankings';
 import {
   type Adoption,
   type Result,
@@ -10,7 +12,9 @@ import {
   resultList,
   resultWithdraw,
 } from '#shared/contracts/results';
+import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import { ApiClient } from '../../core/api/api-client';
+import { ApiProblem, asApiProblem } from '../../core/api/api-problem';
 
 /** What a person decides when a result is adopted, or an adoption is released (`resultId` absent). */
 export interface AdoptionOrder {
@@ -20,17 +24,39 @@ export interface AdoptionOrder {
   readonly expectedCurrentResultId?: string;
 }
 
+export interface EvidenceAnswer {
+  readonly programme: Programme;
+  readonly results: readonly Result[];
+  /** Newest first. */
+  readonly adoptions: readonly Adoption[];
+  /** What the results are reduced with; null where the server could not give it, and why. */
+  readonly inputs: RankingInput | null;
+  readonly inputsProblem: ApiProblem | null;
+}
+
 /** Results and adoptions, as the server keeps them. Every call fails with an `ApiProblem`. */
 @Injectable({ providedIn: 'root' })
 export class ResultsApi {
   private readonly api = inject(ApiClient);
 
-  list(programmeId: string): Observable<readonly Result[]> {
-    return this.api.call(resultList, { params: { programmeId } }).pipe(map((answer) => answer.results));
-  }
-
-  adoptions(programmeId: string): Observable<readonly Adoption[]> {
-    return this.api.call(adoptionList, { params: { programmeId } }).pipe(map((answer) => answer.adoptions));
+  /** Everything that the pages of the results read. Without a common area the inputs are refused; the rest is shown. */
+  evidence(programmeId: string): Observable<EvidenceAnswer> {
+    const params = { programmeId };
+    const inputs = this.api
+      .call(rankingInputsRead, { params, query: { evidence: 'newest' } })
+      .pipe(catchError((error: unknown) => of(asApiProblem(error))));
+    return forkJoin({
+      programme: this.api.call(programmeRead, { params }),
+      results: this.api.call(resultList, { params }).pipe(map((answer) => answer.results)),
+      adoptions: this.api.call(adoptionList, { params }).pipe(map((answer) => answer.adoptions)),
+      inputs,
+    }).pipe(
+      map(({ inputs: answer, ...rest }) =>
+        answer instanceof ApiProblem
+          ? { ...rest, inputs: null, inputsProblem: answer }
+          : { ...rest, inputs: answer, inputsProblem: null },
+      ),
+    );
   }
 
   enter(programmeId: string, body: ResultFields, commandKey: string): Observable<Result> {

@@ -1,0 +1,89 @@
+import { inject } from '@angular/core';
+import { Actions, createEffect, ofType } from '@ngrx/effects';
+import { mapResponse } from '@ngrx/operators';
+import { exhaustMap, switchMap } from 'rxjs';
+import { asApiProblem } from '../../core/api/api-problem';
+import { ResultsApi } from './results-api';
+import {
+  ResultEntryPageActions,
+  ResultListPageActions,
+  ResultPageActions,
+  ResultsApiActions,
+} from './results.actions';
+
+/**
+ * Opening a page asks; so does every deed, since what a result is reduced with is the server's to say. The last question
+ * counts.
+ */
+export const loadEvidence = createEffect(
+  (actions = inject(Actions), api = inject(ResultsApi)) =>
+    actions.pipe(
+      ofType(
+        ResultListPageActions.opened,
+        ResultListPageActions.askedAgain,
+        ResultPageActions.opened,
+        ResultEntryPageActions.opened,
+        ResultsApiActions.entered,
+        ResultsApiActions.adopted,
+        ResultsApiActions.withdrawn,
+      ),
+      switchMap(({ programmeId }) =>
+        api.evidence(programmeId).pipe(
+          mapResponse({
+            next: (answer) => ResultsApiActions.loaded({ programmeId, answer }),
+            error: (error) => ResultsApiActions.loadingFailed({ problem: asApiProblem(error) }),
+          }),
+        ),
+      ),
+    ),
+  { functional: true },
+);
+
+/** One at a time: a second press while the first is under way is the same wish. */
+export const enterResult = createEffect(
+  (actions = inject(Actions), api = inject(ResultsApi)) =>
+    actions.pipe(
+      ofType(ResultEntryPageActions.entryConfirmed),
+      exhaustMap(({ programmeId, fields, commandKey }) =>
+        api.enter(programmeId, fields, commandKey).pipe(
+          mapResponse({
+            next: (result) => ResultsApiActions.entered({ programmeId, result }),
+            error: (error) => ResultsApiActions.refused({ problem: asApiProblem(error) }),
+          }),
+        ),
+      ),
+    ),
+  { functional: true },
+);
+
+export const adoptResult = createEffect(
+  (actions = inject(Actions), api = inject(ResultsApi)) =>
+    actions.pipe(
+      ofType(ResultPageActions.adoptionConfirmed),
+      exhaustMap(({ programmeId, order }) =>
+        api.adopt(programmeId, order).pipe(
+          mapResponse({
+            next: (adoption) => ResultsApiActions.adopted({ programmeId, adoption }),
+            error: (error) => ResultsApiActions.refused({ problem: asApiProblem(error) }),
+          }),
+        ),
+      ),
+    ),
+  { functional: true },
+);
+
+export const withdrawResult = createEffect(
+  (actions = inject(Actions), api = inject(ResultsApi)) =>
+    actions.pipe(
+      ofType(ResultPageActions.withdrawalConfirmed),
+      exhaustMap(({ programmeId, resultId, reason }) =>
+        api.withdraw(programmeId, resultId, reason).pipe(
+          mapResponse({
+            next: (result) => ResultsApiActions.withdrawn({ programmeId, result }),
+            error: (error) => ResultsApiActions.refused({ problem: asApiProblem(error) }),
+          }),
+        ),
+      ),
+    ),
+  { functional: true },
+);

@@ -1,0 +1,130 @@
+import { createFeature, createReducer, createSelector, on } from '@ngrx/store';
+import type { Programme } from '#shared/contracts/programmes';
+import type { Adoption, Result } from '#shared/contracts/results';
+import type { RankingInput } from '#shared/core/ranking/ranking-input';
+import type { ApiProblem } from '../../core/api/api-problem';
+import { NOT_ASKED, type Loading } from '../loading';
+import { reducedEvidence } from './reduced-evidence';
+import {
+  ResultEntryPageActions,
+  ResultListPageActions,
+  ResultPageActions,
+  ResultsApiActions,
+} from './results.actions';
+
+/** What a person did with a result, and how far that has come. */
+export type Deed =
+  | { readonly kind: 'none' }
+  | { readonly kind: 'under-way' }
+  | { readonly kind: 'entered'; readonly result: Result }
+  | { readonly kind: 'adopted'; readonly adoption: Adoption }
+  | { readonly kind: 'withdrawn'; readonly result: Result }
+  | { readonly kind: 'refused'; readonly problem: ApiProblem };
+
+export interface ResultsState {
+  readonly programmeId: string | undefined;
+  readonly loading: Loading;
+  readonly programme: Programme | undefined;
+  /** Withdrawn ones included. */
+  readonly results: readonly Result[];
+  /** Newest first. */
+  readonly adoptions: readonly Adoption[];
+  readonly inputs: RankingInput | null;
+  readonly inputsProblem: ApiProblem | null;
+  readonly deed: Deed;
+}
+
+const initial: ResultsState = {
+  programmeId: undefined,
+  loading: NOT_ASKED,
+  programme: undefined,
+  results: [],
+  adoptions: [],
+  inputs: null,
+  inputsProblem: null,
+  deed: { kind: 'none' },
+};
+
+/** Another programme's results are forgotten at once; the same programme's stay in view while they are asked for anew. */
+function asked(state: ResultsState, { programmeId }: { programmeId: string }): ResultsState {
+  const same = state.programmeId === programmeId;
+  return {
+    ...(same ? state : initial),
+    programmeId,
+    loading: same && state.loading.kind === 'ready' ? state.loading : { kind: 'loading' },
+    deed: { kind: 'none' },
+  };
+}
+
+function withResult(results: readonly Result[], result: Result): readonly Result[] {
+  return results.some(({ id }) => id === result.id)
+    ? results.map((each) => (each.id === result.id ? result : each))
+    : [...results, result];
+}
+
+export const resultsFeature = createFeature({
+  name: 'results',
+  reducer: createReducer(
+    initial,
+    on(
+      ResultListPageActions.opened,
+      ResultListPageActions.askedAgain,
+      ResultPageActions.opened,
+      ResultEntryPageActions.opened,
+      asked,
+    ),
+    on(ResultsApiActions.loaded, (state, { programmeId, answer }): ResultsState =>
+      programmeId === state.programmeId ? { ...state, ...answer, loading: { kind: 'ready' } } : state,
+    ),
+    on(ResultsApiActions.loadingFailed, (state, { problem }): ResultsState => ({
+      ...state,
+      loading: { kind: 'failed', problem },
+    })),
+    on(
+      ResultPageActions.adoptionConfirmed,
+      ResultPageActions.withdrawalConfirmed,
+      ResultEntryPageActions.entryConfirmed,
+      (state): ResultsState => ({ ...state, deed: { kind: 'under-way' } }),
+    ),
+    on(ResultsApiActions.entered, (state, { result }): ResultsState => ({
+      ...state,
+      results: withResult(state.results, result),
+      deed: { kind: 'entered', result },
+    })),
+    on(ResultsApiActions.withdrawn, (state, { result }): ResultsState => ({
+      ...state,
+      results: withResult(state.results, result),
+      deed: { kind: 'withdrawn', result },
+    })),
+    on(ResultsApiActions.adopted, (state, { adoption }): ResultsState => ({
+      ...state,
+      adoptions: [adoption, ...state.adoptions],
+      results: state.results.map((result) =>
+        result.variantId === adoption.variantId
+          ? { ...result, adopted: result.id === adoption.resultId }
+          : result,
+      ),
+      deed: { kind: 'adopted', adoption },
+    })),
+    on(ResultsApiActions.refused, (state, { problem }): ResultsState => ({
+      ...state,
+      deed: { kind: 'refused', problem },
+    })),
+    on(ResultPageActions.outcomeSeen, ResultEntryPageActions.outcomeSeen, (state): ResultsState => ({
+      ...state,
+      deed: { kind: 'none' },
+    })),
+  ),
+  extraSelectors: ({ selectInputs, selectAdoptions }) => ({
+    /** Every result brought to the reference, by its id; made anew only when the inputs change. */
+    selectReduced: createSelector(selectInputs, reducedEvidence),
+    /** The adoption that stands, by variant. */
+    selectStanding: createSelector(selectAdoptions, (adoptions): ReadonlyMap<string, Adoption> => {
+      const standing = new Map<string, Adoption>();
+      for (const adoption of adoptions) {
+        if (!standing.has(adoption.variantId)) standing.set(adoption.variantId, adoption);
+      }
+      return standing;
+    }),
+  }),
+});

@@ -1,0 +1,21 @@
+import { lineAsText, type BenchPart } from './bench/bench-part';
+import { coreEnergy } from './bench/core-energy';
+import { coreLowest } from './bench/core-lowest';
+import { coreRanking } from './bench/core-ranking';
+
+/** All parts in the order in which they run; `npm run bench -- core-energy` runs the named ones only. */
+const PARTS: readonly BenchPart[] = [coreEnergy, coreRanking, coreLowest];
+
+const wanted = process.argv.slice(2);
+const unknown = wanted.filter((name) => !PARTS.some((part) => part.name === name));
+if (unknown.length > 0) {
+  console.error(
+    `No such part: ${unknown.join(', ')}. There are: ${PARTS.map((part) => part.name).join(', ')}.`,
+  );
+  process.exitCode = 2;
+} else {
+  for (const part of PARTS) {
+    if (wanted.length > 0 && !wanted.includes(part.name)) continue;
+    for (const line of await part.run()) console.log(lineAsText(part.name, line));
+  }
+}

@@ -39,6 +39,8 @@ let count = 0;
 export class NumberField implements ControlValueAccessor, Validator {
   readonly label = input.required<string>();
   readonly unit = input('');
+  /** Off where a choice of units is projected in its place (`unitChoice`). */
+  readonly unitBeside = input(true);
   readonly hint = input<string>();
   readonly minimum = input<number>();
   readonly maximum = input<number>();

@@ -1,0 +1,50 @@
+import type * as z from 'zod';
+
+/** An operation of the machine entry: the schema of its input and what it answers. */
+export interface Operation {
+  readonly schema: z.ZodType;
+  readonly evaluate: (input: unknown) => unknown;
+}
+
+/** Ties an evaluation to its schema; it must be handed what that schema has passed. */
+export function operation<Schema extends z.ZodType>(
+  schema: Schema,
+  evaluate: (input: z.output<Schema>) => unknown,
+): Operation {
+  return { schema, evaluate: (input) => evaluate(input as z.output<Schema>) };
+}
+
+/** Loaded one at a time: a call pays for what it asks. */
+const AVAILABLE = {
+  air: async () => (await import('./operations/air')).air,
+  blockage: async () => (await import('./operations/blockage')).blockage,
+  yaw: async () => (await import('./operations/yaw')).yaw,
+  budget: async () => (await import('./operations/budget')).budget,
+  rank: async () => (await import('./operations/rank')).rank,
+  reduce: async () => (await import('./operations/reduce')).reduce,
+  'cycle-energy': async () => (await import('./operations/cycle-energy')).cycleEnergy,
+  powertrain: async () => (await import('./operations/powertrain')).powertrain,
+  'student-quantile': async () => (await import('./operations/student-quantile')).studentQuantile,
+} as const satisfies { readonly [name: string]: () => Promise<Operation> };
+
+export type OperationName = keyof typeof AVAILABLE;
+
+/** Operations of later sections, with the section of the method that holds them. */
+export const NOT_YET_AVAILABLE: { readonly [name: string]: number } = {
+  'reynolds-sweep': 6,
+  'friction-line': 6,
+  correlation: 8,
+  combine: 10,
+  statement: 11,
+  plan: 15,
+};
+
+export const OPERATION_NAMES = Object.keys(AVAILABLE) as readonly OperationName[];
+
+export function isOperationName(name: string): name is OperationName {
+  return Object.hasOwn(AVAILABLE, name);
+}
+
+export function loadOperation(name: OperationName): Promise<Operation> {
+  return AVAILABLE[name]();
+}

@@ -1,0 +1,5 @@
+import { blockageInputSchema } from '../../../../shared/contracts/method/blockage';
+import { evaluateBlockage } from '../../../../shared/core/reduction/blockage-operation';
+import { operation } from '../operations';
+
+export const blockage = operation(blockageInputSchema, evaluateBlockage);

@@ -1,0 +1,5 @@
+import { budgetInputSchema } from '../../../../shared/contracts/method/budget';
+import { evaluateBudget } from '../../../../shared/core/uncertainty/budget-operation';
+import { operation } from '../operations';
+
+export const budget = operation(budgetInputSchema, evaluateBudget);

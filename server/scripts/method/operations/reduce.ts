@@ -1,0 +1,5 @@
+import { rankingInputSchema } from '../../../../shared/contracts/method/ranking-input';
+import { evaluateReduce } from '../../../../shared/core/reduction/reduce';
+import { operation } from '../operations';
+
+export const reduce = operation(rankingInputSchema, evaluateReduce);

@@ -1,4 +1,4 @@
-import { FormControl, FormGroup, type NonNullableFormBuilder } from '@angular/forms';
+import { FormControl, FormGroup } from '@angular/forms';
 import type { Condition } from '#shared/contracts/condition';
 import { withoutBlanks } from '../../core/editing/without-blanks';
 
@@ -18,44 +18,33 @@ export type ConditionForm = FormGroup<{
   beltSpeedRatio: Measure;
   wheelVentilationInForce: Choice;
 }>;
-export type ConditionValues = ReturnType<ConditionForm['getRawValue']>;
 
-export function conditionForm(builder: NonNullableFormBuilder): ConditionForm {
-  const choice = (): Choice => builder.control('');
-  const measure = (): Measure => builder.control<number | null>(null);
-  return builder.group({
-    ground: choice(),
-    wheels: choice(),
-    cooling: choice(),
-    mirrors: choice(),
-    rideHeightFrontMm: measure(),
-    rideHeightRearMm: measure(),
-    payloadKg: measure(),
-    tyres: choice(),
-    beltSpeedRatio: measure(),
-    wheelVentilationInForce: choice(),
+export function conditionForm(condition: Condition = {}): ConditionForm {
+  const choice = (value: string | undefined): Choice => new FormControl(value ?? '', { nonNullable: true });
+  const measure = (value: number | undefined): Measure => new FormControl(value ?? null);
+  const { wheelVentilationInForce: ventilation } = condition;
+  return new FormGroup({
+    ground: choice(condition.ground),
+    wheels: choice(condition.wheels),
+    cooling: choice(condition.cooling),
+    mirrors: choice(condition.mirrors),
+    rideHeightFrontMm: measure(condition.rideHeightFrontMm),
+    rideHeightRearMm: measure(condition.rideHeightRearMm),
+    payloadKg: measure(condition.payloadKg),
+    tyres: choice(condition.tyres),
+    beltSpeedRatio: measure(condition.beltSpeedRatio),
+    wheelVentilationInForce: choice(ventilation === undefined ? '' : ventilation ? 'yes' : 'no'),
   });
 }
 
-/** What the form shows for a condition, for example a facility's usual one. */
-export function conditionToForm(condition: Condition): ConditionValues {
-  const { wheelVentilationInForce: ventilation } = condition;
-  return {
-    ground: condition.ground ?? '',
-    wheels: condition.wheels ?? '',
-    cooling: condition.cooling ?? '',
-    mirrors: condition.mirrors ?? '',
-    rideHeightFrontMm: condition.rideHeightFrontMm ?? null,
-    rideHeightRearMm: condition.rideHeightRearMm ?? null,
-    payloadKg: condition.payloadKg ?? null,
-    tyres: condition.tyres ?? '',
-    beltSpeedRatio: condition.beltSpeedRatio ?? null,
-    wheelVentilationInForce: ventilation === undefined ? '' : ventilation ? 'yes' : 'no',
-  };
+/** Puts a condition into the form, for example a facility's usual one. */
+export function setCondition(form: ConditionForm, condition: Condition): void {
+  form.setValue(conditionForm(condition).getRawValue());
 }
 
 /** What the form says, as the contract wants it. */
-export function conditionFromForm({ wheelVentilationInForce, ...rest }: ConditionValues): Condition {
+export function conditionOf(form: ConditionForm): Condition {
+  const { wheelVentilationInForce, ...rest } = form.getRawValue();
   return {
     ...withoutBlanks(rest),
     ...(wheelVentilationInForce === '' ? {} : { wheelVentilationInForce: wheelVentilationInForce === 'yes' }),

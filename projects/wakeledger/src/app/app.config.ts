@@ -22,6 +22,7 @@ import { focusOnNavigation } from './core/navigation/focus-on-navigation';
 import { QuestionTitle } from './core/navigation/question-title';
 import { Preferences } from './core/preferences/preferences';
 import { forgetOnMemberChange } from './core/session/forget-on-member-change';
+import { provideProgrammes } from './data/programmes/provide-programmes';
 import { provideDevelopmentTools } from './development-tools';
 
 export const appConfig: ApplicationConfig = {
@@ -39,6 +40,7 @@ export const appConfig: ApplicationConfig = {
     provideStore({}, { metaReducers: [forgetOnMemberChange] }),
     provideRouterStore(),
     provideEffects(),
+    provideProgrammes(),
     provideDevelopmentTools(),
     provideAppInitializer(() => {
       inject(Preferences);

@@ -1,5 +1,5 @@
 import type { Routes } from '@angular/router';
-import { signedIn } from './core/session/session-guards';
+import { needs, signedIn } from './core/session/session-guards';
 import { Shell } from './core/shell/shell';
 
 /**
@@ -11,7 +11,43 @@ export const routes: Routes = [
     path: '',
     component: Shell,
     canActivate: [signedIn],
-    children: [{ path: '', pathMatch: 'full', redirectTo: 'programmes' }],
+    children: [
+      { path: '', pathMatch: 'full', redirectTo: 'programmes' },
+      {
+        path: 'programmes',
+        title: $localize`Which programmes need you today?`,
+        loadComponent: () =>
+          import('./features/programmes/programme-list-page').then((page) => page.ProgrammeListPage),
+      },
+      {
+        path: 'programmes/new',
+        title: $localize`What will the new programme compare on?`,
+        canActivate: [needs('programmes.edit')],
+        loadChildren: () => import('./features/programmes/programme-form.routes').then((file) => file.routes),
+      },
+      {
+        path: 'programmes/:programmeId/settings',
+        title: $localize`What does this programme compare on?`,
+        canActivate: [needs('programmes.read')],
+        loadChildren: () => import('./features/programmes/programme-form.routes').then((file) => file.routes),
+      },
+      {
+        path: 'cycles',
+        canActivate: [needs('cycles.read')],
+        loadChildren: () => import('./features/cycles/cycles.routes').then((file) => file.routes),
+      },
+      {
+        path: 'api',
+        title: $localize`How do scripts talk to Wakeledger?`,
+        loadComponent: () =>
+          import('./features/api-reference/api-reference-page').then((page) => page.ApiReferencePage),
+      },
+    ],
+  },
+  {
+    path: 'sign-in',
+    title: $localize`Who is keeping the account?`,
+    loadComponent: () => import('./features/sign-in/sign-in-page').then((page) => page.SignInPage),
   },
   {
     path: 'unavailable',

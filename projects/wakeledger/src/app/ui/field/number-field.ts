@@ -1,17 +1,21 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  DestroyRef,
+  Injector,
+  type OnInit,
   computed,
   forwardRef,
   inject,
   input,
   signal,
 } from '@angular/core';
+import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import {
-  type AbstractControl,
   type ControlValueAccessor,
   NG_VALIDATORS,
   NG_VALUE_ACCESSOR,
+  NgControl,
   type ValidationErrors,
   type Validator,
 } from '@angular/forms';
@@ -36,7 +40,7 @@ let count = 0;
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class NumberField implements ControlValueAccessor, Validator {
+export class NumberField implements ControlValueAccessor, OnInit, Validator {
   readonly label = input.required<string>();
   readonly unit = input('');
   /** Off where a choice of units is projected in its place (`unitChoice`). */
@@ -53,6 +57,10 @@ export class NumberField implements ControlValueAccessor, Validator {
   protected readonly text = signal('');
   protected readonly disabled = signal(false);
   private readonly left = signal(false);
+  private readonly injector = inject(Injector);
+  private readonly destroyed = inject(DestroyRef);
+  /** What the server said, as the form put it on the control. */
+  private readonly refused = signal<string | undefined>(undefined);
   /** The reading that the person chose for this very text. */
   private readonly chosen = signal<number | undefined>(undefined);
   private changed: (value: number | null) => void = () => undefined;
@@ -87,7 +95,7 @@ export class NumberField implements ControlValueAccessor, Validator {
   });
 
   protected readonly error = computed(() => {
-    const server = this.serverError();
+    const server = this.serverError() ?? this.refused();
     if (server) return server;
     const typed = this.typed();
     if (typed.kind === 'empty') {
@@ -108,6 +116,16 @@ export class NumberField implements ControlValueAccessor, Validator {
       .filter(Boolean)
       .join(' '),
   );
+
+  ngOnInit(): void {
+    // Asked for late: the control needs this field as its validator before it exists.
+    const control = this.injector.get(NgControl, null, { optional: true, self: true })?.control;
+    control?.events.pipe(takeUntilDestroyed(this.destroyed)).subscribe(() => {
+      this.left.set(control.touched);
+      const said: unknown = control.errors?.['server'];
+      this.refused.set(typeof said === 'string' ? said : undefined);
+    });
+  }
 
   protected onInput(text: string): void {
     this.text.set(text);
@@ -149,9 +167,8 @@ export class NumberField implements ControlValueAccessor, Validator {
     this.disabled.set(disabled);
   }
 
-  validate(control: AbstractControl<unknown>): ValidationErrors | null {
+  validate(): ValidationErrors | null {
     const typed = this.typed();
-    if (control.touched) this.left.set(true);
     if (typed.kind === 'empty') return this.optional() ? null : { required: true };
     if (typed.kind === 'not-a-number') return { notANumber: true };
     const value = this.value();

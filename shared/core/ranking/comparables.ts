@@ -1,6 +1,7 @@
 import { AMOUNT_FLOOR_M2 } from '../constants';
 import { probabilityAbove, type Budget } from '../uncertainty/budget';
 import { studentQuantile } from '../uncertainty/student';
+import { varianceOfDifferences } from './difference-variance';
 
 /** A value to be compared, with its amounts by key; m² or J, the same for all. */
 export interface KeyedValue {
@@ -26,31 +27,48 @@ export interface Comparables {
   readonly keyNames: readonly string[];
 }
 
-/** Numbers for texts, in code-unit order. */
-function numbered(texts: Iterable<string>): { readonly names: readonly string[]; of(text: string): number } {
-  const names = [...new Set(texts)].sort();
-  const numbers = new Map(names.map((name, i) => [name, i]));
-  return { names, of: (text) => numbers.get(text) ?? -1 };
+/** Numbers the texts of a list in code-unit order; one look-up a text, because a ranking has thousands. */
+function numbered(texts: readonly string[]): {
+  readonly names: readonly string[];
+  readonly numbers: Int32Array;
+} {
+  const firstSeen = new Map<string, number>();
+  const numbers = new Int32Array(texts.length);
+  texts.forEach((text, i) => {
+    const number = firstSeen.get(text) ?? firstSeen.size;
+    if (number === firstSeen.size) firstSeen.set(text, number);
+    numbers[i] = number;
+  });
+  const names = [...firstSeen.keys()].sort();
+  const inOrder = new Int32Array(names.length);
+  names.forEach((name, i) => (inOrder[firstSeen.get(name) as number] = i));
+  return { names, numbers: numbers.map((number) => inOrder[number] as number) };
 }
 
 export function comparablesOf(list: readonly KeyedValue[]): Comparables {
   const entries = list.flatMap((item) => item.budget);
   const keyed = numbered(entries.map((entry) => entry.key));
   const pooled = entries.some((entry) => entry.varianceEstimate !== entry.key);
-  const estimated = pooled ? numbered(entries.map((entry) => entry.varianceEstimate)) : null;
   const offsets = new Int32Array(list.length + 1);
-  list.forEach((item, i) => (offsets[i + 1] = (offsets[i] as number) + item.budget.length));
+  const amounts = new Float64Array(entries.length);
+  const inverseNu = new Float64Array(entries.length);
+  let at = 0;
+  list.forEach(({ budget, rate }, i) => {
+    for (const { amountM2, degreesOfFreedom } of budget) {
+      amounts[at] = amountM2 * rate;
+      inverseNu[at] = 1 / degreesOfFreedom;
+      at++;
+    }
+    offsets[i + 1] = at;
+  });
   return {
     ids: list.map((item) => item.id),
     values: Float64Array.from(list, (item) => item.value),
     offsets,
-    keys: Int32Array.from(entries, (entry) => keyed.of(entry.key)),
-    amounts: Float64Array.from(
-      list.flatMap((item) => item.budget.map((entry) => entry.amountM2 * item.rate)),
-    ),
-    inverseNu: Float64Array.from(entries, (entry) => 1 / entry.degreesOfFreedom),
-    estimates:
-      estimated === null ? null : Int32Array.from(entries, (entry) => estimated.of(entry.varianceEstimate)),
+    keys: keyed.numbers,
+    amounts,
+    inverseNu,
+    estimates: pooled ? numbered(entries.map((entry) => entry.varianceEstimate)).numbers : null,
     keyNames: keyed.names,
   };
 }
@@ -122,28 +140,25 @@ function spreadOf(set: Comparables, a: number, b: number): Spread {
 const nuOf = ({ variance, denominator }: Spread): number =>
   denominator > 0 ? (variance * variance) / denominator : Infinity;
 
-function probabilityFrom(set: Comparables, a: number, b: number, spread: Spread): number {
+/** P(row a < row b) by Student's distribution of the difference by keys (method section 14). */
+export function probabilityLowerOf(set: Comparables, a: number, b: number): number {
+  const spread = spreadOf(set, a, b);
   const difference = (set.values[b] as number) - (set.values[a] as number);
   return probabilityAbove(difference, Math.sqrt(spread.variance), nuOf(spread));
 }
 
-/** P(row a < row b) by Student's distribution of the difference by keys (method section 14). */
-export function probabilityLowerOf(set: Comparables, a: number, b: number): number {
-  return probabilityFrom(set, a, b, spreadOf(set, a, b));
-}
-
 /**
- * Tells whether two rows are separable at a confidence: max(P, 1 − P) ≥ confidence. Student's quantile is never below the
- * normal one, so most pairs are settled without it.
+ * Tells whether two rows of a set are separable at a confidence: max(P, 1 − P) ≥ confidence. Student's quantile is never below
+ * the normal one, so most pairs are settled by the variance of their difference alone.
  */
-export function separabilityAt(confidence: number): (set: Comparables, a: number, b: number) => boolean {
+export function separabilityWithin(set: Comparables, confidence: number): (a: number, b: number) => boolean {
   const needed = confidence > 0.5 ? studentQuantile(confidence) * (1 - 1e-9) : 0;
-  return (set, a, b) => {
-    const spread = spreadOf(set, a, b);
-    const u = Math.sqrt(spread.variance);
+  const varianceOf = varianceOfDifferences(set);
+  return (a, b) => {
+    const u = Math.sqrt(varianceOf(a, b));
     const difference = Math.abs((set.values[a] as number) - (set.values[b] as number));
     if (u >= AMOUNT_FLOOR_M2 && difference < needed * u) return false;
-    const p = probabilityFrom(set, a, b, spread);
+    const p = probabilityLowerOf(set, a, b);
     return Math.max(p, 1 - p) >= confidence;
   };
 }
@@ -165,7 +180,7 @@ export function probabilityLowerThanLaterOnes(set: Comparables): number[][] {
  * looked at.
  */
 export function inseparableGroups(set: Comparables, confidence: number): string[][] {
-  const separable = separabilityAt(confidence);
+  const separable = separabilityWithin(set, confidence);
   const groups: string[][] = [];
   const count = set.ids.length;
   let start = 0;
@@ -174,7 +189,7 @@ export function inseparableGroups(set: Comparables, confidence: number): string[
   };
   for (let next = 1; next < count; next++) {
     let k = next - 1;
-    while (k >= start && !separable(set, k, next)) k--;
+    while (k >= start && !separable(k, next)) k--;
     if (k >= start) {
       close(next);
       start = k + 1;

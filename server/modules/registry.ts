@@ -5,6 +5,7 @@ import { cyclesModule } from './cycles';
 import { facilitiesModule } from './facilities';
 import { organisationsModule } from './organisations';
 import { programmesModule } from './programmes';
+import { rankingsModule } from './rankings';
 import { resultsModule } from './results';
 import { sessionModule } from './session';
 import { variantsModule } from './variants';
@@ -20,4 +21,5 @@ export const MODULES: readonly ServerModule[] = [
   cyclesModule,
   resultsModule,
   attachmentsModule,
+  rankingsModule,
 ];

@@ -1,6 +1,7 @@
 import * as z from 'zod';
 import { BASES, EVIDENCE_BASES, ORDERS } from '#shared/core/ranking/ranking-choices';
 import type { RankingContext } from '#shared/core/ranking/ranking-context';
+import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
 import { nothing, programmeParams } from './common';
 import { endpoint } from './endpoint';
@@ -60,7 +61,8 @@ const contextVariant = z.strictObject({
   ),
 });
 
-export const rankingContext = z.strictObject({
+/** Typed by the core, so that lists are read-only on both sides. */
+export const rankingContext: z.ZodType<RankingContext, RankingContext> = z.strictObject({
   programme: z.strictObject({
     id: text,
     name: text,
@@ -83,7 +85,7 @@ export const rankingContext = z.strictObject({
       speedKmh: z.array(number),
     }),
   ),
-}) satisfies z.ZodType<RankingContext>;
+});
 
 const viewFigure = figureSchema.omit({ contributions: true });
 const viewCoefficient = z.strictObject({ areaM2: number, value: number, expandedUncertainty: number });
@@ -203,7 +205,7 @@ const viewExclusion = z.strictObject({
   ),
 });
 
-export const rankingView = z.strictObject({
+export const rankingView: z.ZodType<RankingView, RankingView> = z.strictObject({
   programmeName: text,
   order: z.enum(ORDERS),
   basis: z.enum(BASES),
@@ -242,7 +244,9 @@ export const rankingView = z.strictObject({
     programmeAreaOf: text.nullable(),
     programmeConfidence: number,
   }),
-}) satisfies z.ZodType<RankingView>;
+});
+
+const rankingInputs: z.ZodType<RankingInput, RankingInput> = rankingInputSchema;
 
 export const rankingInputsRead = endpoint({
   kind: 'json',
@@ -261,7 +265,7 @@ export const rankingInputsRead = endpoint({
       ),
   }),
   body: nothing,
-  response: rankingInputSchema,
+  response: rankingInputs,
   command: false,
   versioned: false,
   problems: ['unusable-input'],

@@ -1,0 +1,233 @@
+import type { EvidenceBasis } from '#shared/core/ranking/ranking-choices';
+import type { ContextAdoption, RankingContext } from '#shared/core/ranking/ranking-context';
+import type {
+  FacilityInput,
+  PointInput,
+  RankingInput,
+  ResultInput,
+  VariantInput,
+} from '#shared/core/ranking/ranking-input';
+import { consideredResults } from '#shared/core/ranking/ranking-view-input';
+import type {
+  AdoptionRow,
+  AreaRow,
+  ConfigurationRow,
+  FacilityRow,
+  PointRow,
+  ProgrammeRow,
+  ResultRow,
+  VariantRow,
+} from './rankings.repository';
+
+/** Rows of one programme, as they lie in the database. */
+export interface RankingRows {
+  readonly programme: ProgrammeRow;
+  readonly variants: readonly VariantRow[];
+  readonly areas: readonly AreaRow[];
+  readonly configurations: readonly ConfigurationRow[];
+  readonly facilities: readonly FacilityRow[];
+  readonly results: readonly ResultRow[];
+  readonly points: readonly PointRow[];
+  readonly adoptions: readonly AdoptionRow[];
+}
+
+/** Reynolds corrections are off until they can be chosen: nothing of method section 6 enters. */
+const POLICIES = { frictionLine: 'off', frictionShare: 0, frictionShareU: 0 } as const;
+
+type Present<T> = { [K in keyof T]?: Exclude<T[K], null> };
+
+/** The fields that hold something: what is absent in the database is absent in the answer. */
+function present<T extends object>(fields: T): Present<T> {
+  return Object.fromEntries(
+    Object.entries(fields).filter(([, value]) => value !== null && value !== undefined),
+  ) as Present<T>;
+}
+
+function grouped<T>(rows: readonly T[], keyOf: (row: T) => string): ReadonlyMap<string, readonly T[]> {
+  const groups = new Map<string, T[]>();
+  for (const row of rows) {
+    const group = groups.get(keyOf(row));
+    if (group) group.push(row);
+    else groups.set(keyOf(row), [row]);
+  }
+  return groups;
+}
+
+function pointInput(row: PointRow): PointInput {
+  const { yawDeg, value, s, n, speedKmh, dynamicPressurePa, tareN, frontLift, rearLift, sideForce } = row;
+  return {
+    yawDeg,
+    value,
+    ...present({ s, n, speedKmh, dynamicPressurePa, tareN, frontLift, rearLift, sideForce }),
+  };
+}
+
+/** Installations are known by a name within their facility. */
+const installationId = (row: ResultRow): string | null =>
+  row.installation === null ? null : `${row.facilityId}:${row.installation}`;
+
+function resultInput(row: ResultRow, points: readonly PointRow[]): ResultInput {
+  const { id, name, variantId, facilityId, testDate, entrySequence, quantity, scale, condition } = row;
+  const { quotedAreaM2, quotedAreaUM2, quotedAreaScale, speedKmh, dynamicPressurePa, air } = row;
+  const { tareAlreadySubtracted, tareN, blockageAlreadyCorrectedBy, stated, modelId } = row;
+  return {
+    id,
+    name,
+    variantId,
+    facilityId,
+    testDate,
+    entrySequence,
+    quantity,
+    scale,
+    condition,
+    points: points.map(pointInput),
+    ...present({
+      sessionId: row.testSessionId,
+      installationId: installationId(row),
+      modelId,
+      quotedAreaM2,
+      quotedAreaUM2,
+      quotedAreaScale,
+      speedKmh,
+      dynamicPressurePa,
+      air,
+      tareAlreadySubtracted,
+      tareN,
+      blockageAlreadyCorrectedBy,
+      turbulenceGenerationOrTrips: row.turbulenceOrTrips,
+      stated,
+    }),
+  };
+}
+
+function facilityInput(row: FacilityRow): FacilityInput {
+  const { id, name, kind, areaM2, blockage, biasURelative, biasUM2, sessionURelative, sessionUM2 } = row;
+  const { sessionDegreesOfFreedom, installationURelative, installationUM2 } = row;
+  const { installationDegreesOfFreedom, repeatabilityURelative, repeatabilityDegreesOfFreedom } = row;
+  return {
+    id,
+    name,
+    kind,
+    ...present({
+      areaM2,
+      blockage,
+      biasURelative,
+      biasUM2,
+      sessionURelative,
+      sessionUM2,
+      sessionDegreesOfFreedom,
+      installationURelative,
+      installationUM2,
+      installationDegreesOfFreedom,
+      repeatabilityURelative,
+      repeatabilityDegreesOfFreedom,
+    }),
+  };
+}
+
+function variantInput(
+  { id, name }: VariantRow,
+  area: AreaRow,
+  base: ConfigurationRow | undefined,
+): VariantInput {
+  return {
+    id,
+    name,
+    frontalAreaM2: area.areaM2,
+    frontalAreaUM2: area.uM2,
+    ...present({
+      massKg: base?.massKg,
+      rollingResistance: base?.rollingResistance,
+      roadLoadReference: base?.roadLoadReference,
+    }),
+  };
+}
+
+/** Adoptions that stand: not released, and of a result that still counts. */
+export function standingAdoptions(
+  adoptions: readonly AdoptionRow[],
+  results: readonly ResultRow[],
+): readonly ContextAdoption[] {
+  const counting = new Set(results.map(({ id }) => id));
+  return adoptions.flatMap(({ variantId, resultId, at, by }) =>
+    resultId !== null && counting.has(resultId) ? [{ variantId, resultId, at: at.toISOString(), by }] : [],
+  );
+}
+
+/** The programme's common area [m²]; null where none is chosen, or where it is that of a variant that has left. */
+export function commonAreaOf(rows: RankingRows): number | null {
+  const policy = rows.programme.commonArea;
+  if (!policy) return null;
+  if (policy.kind === 'fixed') return policy.areaM2;
+  return rows.areas.find(({ variantId }) => variantId === policy.variantId)?.areaM2 ?? null;
+}
+
+/**
+ * The machine entry's input of the operation `rank` for a programme, with names. Variants carry the mass and road load of
+ * their base configuration.
+ */
+export function rankingInputs(
+  rows: RankingRows,
+  commonAreaM2: number,
+  evidence: EvidenceBasis,
+): RankingInput {
+  const { programme } = rows;
+  const areaOf = new Map(rows.areas.map((area) => [area.variantId, area]));
+  const configurationsOf = grouped(rows.configurations, ({ variantId }) => variantId);
+  const pointsOf = grouped(rows.points, ({ resultId }) => resultId);
+  const results = rows.results.map((row) => resultInput(row, pointsOf.get(row.id) ?? []));
+  const considered = consideredResults(results, standingAdoptions(rows.adoptions, rows.results), evidence);
+  const models = [...new Set(considered.flatMap(({ modelId }) => modelId ?? []))].sort();
+  return {
+    programme: {
+      name: programme.name,
+      referenceSpeedKmh: programme.referenceSpeedKmh,
+      referenceAir: programme.referenceAir,
+      characteristicLengthM: programme.characteristicLengthM,
+      commonAreaM2,
+      confidence: programme.confidence,
+      ...present({ referenceFacilityId: programme.referenceFacilityId }),
+      referenceCondition: programme.referenceCondition,
+      windSpeedMs: programme.windSpeedMs,
+      policies: POLICIES,
+    },
+    facilities: rows.facilities.map(facilityInput),
+    models: models.map((id) => ({ id, name: id })),
+    variants: rows.variants.flatMap((variant) => {
+      const area = areaOf.get(variant.id);
+      return area ? [variantInput(variant, area, configurationsOf.get(variant.id)?.[0])] : [];
+    }),
+    results: considered,
+  };
+}
+
+type ContextRows = Pick<RankingRows, 'programme' | 'variants' | 'areas' | 'configurations'>;
+
+/** What a person sees of the variants beside their figures. */
+export function contextVariants(rows: ContextRows): RankingContext['variants'] {
+  const areaOf = new Map(rows.areas.map((area) => [area.variantId, area]));
+  const configurationsOf = grouped(rows.configurations, ({ variantId }) => variantId);
+  return rows.variants.flatMap((variant) => {
+    const area = areaOf.get(variant.id);
+    if (!area) return [];
+    const { id, name, bodyShape, description, lengthMm, widthMm, heightMm, wheelbaseMm } = variant;
+    return {
+      id,
+      name,
+      bodyShape,
+      ...present({ description, lengthMm, widthMm, heightMm, wheelbaseMm }),
+      frontalAreaMethod: area.method,
+      frontalAreaDate: area.date,
+      configurations: (configurationsOf.get(id) ?? []).map((row) => ({
+        id: row.id,
+        name: row.name,
+        massKg: row.massKg,
+        ...present({
+          rollingResistance: row.rollingResistance,
+          roadLoadReference: row.roadLoadReference,
+        }),
+        salesShare: row.salesShare,
+      })),
+    };
+  });
+}

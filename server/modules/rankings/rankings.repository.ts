@@ -1,0 +1,184 @@
+import { and, asc, desc, eq, inArray, isNull } from 'drizzle-orm';
+import type { Tx } from '../../db/pools';
+import { cycles, referenceCycles } from '../../db/tables/cycles';
+import { facilities, testSessions } from '../../db/tables/facilities';
+import { memberships } from '../../db/tables/organisations';
+import { milestones, programmes } from '../../db/tables/programmes';
+import { adoptions, resultPoints, results, resultWithdrawals } from '../../db/tables/results';
+import { configurations, frontalAreas, variants } from '../../db/tables/variants';
+
+export type ProgrammeRow = typeof programmes.$inferSelect;
+export type VariantRow = typeof variants.$inferSelect;
+export type AreaRow = typeof frontalAreas.$inferSelect;
+export type ConfigurationRow = typeof configurations.$inferSelect;
+export type FacilityRow = typeof facilities.$inferSelect;
+export type ResultRow = typeof results.$inferSelect;
+export type PointRow = typeof resultPoints.$inferSelect;
+
+export interface AdoptionRow {
+  readonly variantId: string;
+  readonly resultId: string | null;
+  readonly at: Date;
+  readonly by: string;
+}
+
+export async function findProgramme(tx: Tx, programmeId: string): Promise<ProgrammeRow | undefined> {
+  const [row] = await tx.select().from(programmes).where(eq(programmes.id, programmeId));
+  return row;
+}
+
+export async function listMilestones(tx: Tx, programmeId: string) {
+  return tx
+    .select({ id: milestones.id, name: milestones.name, date: milestones.date })
+    .from(milestones)
+    .where(eq(milestones.programmeId, programmeId))
+    .orderBy(asc(milestones.date), asc(milestones.name));
+}
+
+/** Variants that are still in the programme, by name. */
+export async function listVariants(tx: Tx, programmeId: string): Promise<readonly VariantRow[]> {
+  return tx
+    .select()
+    .from(variants)
+    .where(and(eq(variants.programmeId, programmeId), isNull(variants.retiredAt)))
+    .orderBy(asc(variants.name), asc(variants.id));
+}
+
+/** The frontal area that counts of each variant: the newest by date, of equal dates the later entry. */
+export async function newestAreas(tx: Tx, programmeId: string): Promise<readonly AreaRow[]> {
+  const rows = await tx
+    .selectDistinctOn([frontalAreas.variantId], { area: frontalAreas })
+    .from(frontalAreas)
+    .innerJoin(variants, eq(variants.id, frontalAreas.variantId))
+    .where(eq(variants.programmeId, programmeId))
+    .orderBy(frontalAreas.variantId, desc(frontalAreas.date), desc(frontalAreas.position));
+  return rows.map(({ area }) => area);
+}
+
+export async function listConfigurations(tx: Tx, programmeId: string): Promise<readonly ConfigurationRow[]> {
+  const rows = await tx
+    .select({ configuration: configurations })
+    .from(configurations)
+    .innerJoin(variants, eq(variants.id, configurations.variantId))
+    .where(eq(variants.programmeId, programmeId))
+    .orderBy(configurations.variantId, asc(configurations.position));
+  return rows.map(({ configuration }) => configuration);
+}
+
+/** Results that count: not withdrawn, of variants that are still in the programme, in the order of entry. */
+export async function listResults(tx: Tx, programmeId: string): Promise<readonly ResultRow[]> {
+  const rows = await tx
+    .select({ result: results })
+    .from(results)
+    .innerJoin(variants, eq(variants.id, results.variantId))
+    .leftJoin(resultWithdrawals, eq(resultWithdrawals.resultId, results.id))
+    .where(
+      and(eq(results.programmeId, programmeId), isNull(variants.retiredAt), isNull(resultWithdrawals.id)),
+    )
+    .orderBy(asc(results.entrySequence));
+  return rows.map(({ result }) => result);
+}
+
+export async function listPoints(tx: Tx, programmeId: string): Promise<readonly PointRow[]> {
+  const rows = await tx
+    .select({ point: resultPoints })
+    .from(resultPoints)
+    .innerJoin(results, eq(results.id, resultPoints.resultId))
+    .where(eq(results.programmeId, programmeId))
+    .orderBy(resultPoints.resultId, asc(resultPoints.position));
+  return rows.map(({ point }) => point);
+}
+
+/** The newest word on each variant's evidence; without a result it releases what stood before. */
+export async function currentAdoptions(tx: Tx, programmeId: string): Promise<readonly AdoptionRow[]> {
+  return tx
+    .selectDistinctOn([adoptions.variantId], {
+      variantId: adoptions.variantId,
+      resultId: adoptions.resultId,
+      at: adoptions.adoptedAt,
+      by: memberships.displayName,
+    })
+    .from(adoptions)
+    .innerJoin(variants, eq(variants.id, adoptions.variantId))
+    .innerJoin(memberships, eq(memberships.userId, adoptions.adoptedBy))
+    .where(eq(variants.programmeId, programmeId))
+    .orderBy(adoptions.variantId, desc(adoptions.adoptedAt), desc(adoptions.id));
+}
+
+export async function facilitiesById(tx: Tx, ids: readonly string[]): Promise<readonly FacilityRow[]> {
+  if (ids.length === 0) return [];
+  return tx
+    .select()
+    .from(facilities)
+    .where(inArray(facilities.id, [...ids]))
+    .orderBy(asc(facilities.name), asc(facilities.id));
+}
+
+export async function sessionsById(tx: Tx, ids: readonly string[]) {
+  if (ids.length === 0) return [];
+  return tx
+    .select({ id: testSessions.id, name: testSessions.name })
+    .from(testSessions)
+    .where(inArray(testSessions.id, [...ids]))
+    .orderBy(asc(testSessions.name), asc(testSessions.id));
+}
+
+export interface CycleRow {
+  readonly key: string;
+  readonly name: string;
+  readonly source: string;
+}
+export interface CycleTraceRow extends CycleRow {
+  readonly timeS: number[];
+  readonly speedKmh: number[];
+}
+
+/** Every cycle that may be chosen, built-in ones first; without the traces. */
+export async function listCycles(tx: Tx): Promise<readonly CycleRow[]> {
+  const builtIn = await tx
+    .select({ key: referenceCycles.key, name: referenceCycles.name, source: referenceCycles.source })
+    .from(referenceCycles)
+    .orderBy(asc(referenceCycles.position));
+  const own = await tx
+    .select({ key: cycles.id, name: cycles.name, source: cycles.source })
+    .from(cycles)
+    .where(isNull(cycles.retiredAt))
+    .orderBy(asc(cycles.name));
+  return [...builtIn, ...own];
+}
+
+const IS_ID = /^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/i;
+
+/** The traces of the cycles with these keys; a key is a built-in name or the id of an own cycle. */
+export async function cycleTraces(tx: Tx, keys: readonly string[]): Promise<readonly CycleTraceRow[]> {
+  const names = keys.filter((key) => !IS_ID.test(key));
+  const ids = keys.filter((key) => IS_ID.test(key));
+  const builtIn =
+    names.length === 0
+      ? []
+      : await tx
+          .select({
+            key: referenceCycles.key,
+            name: referenceCycles.name,
+            source: referenceCycles.source,
+            timeS: referenceCycles.timeS,
+            speedKmh: referenceCycles.speedKmh,
+          })
+          .from(referenceCycles)
+          .where(inArray(referenceCycles.key, names));
+  const own =
+    ids.length === 0
+      ? []
+      : await tx
+          .select({
+            key: cycles.id,
+            name: cycles.name,
+            source: cycles.source,
+            timeS: cycles.timeS,
+            speedKmh: cycles.speedKmh,
+          })
+          .from(cycles)
+          .where(and(inArray(cycles.id, ids), isNull(cycles.retiredAt)));
+  const found = new Map([...builtIn, ...own].map((row) => [row.key, row]));
+  return keys.flatMap((key) => found.get(key) ?? []);
+}

@@ -1,0 +1,11 @@
+import { rankingContextRead, rankingInputsRead, rankingViewRead } from '#shared/contracts/rankings';
+import { route } from '../../http/module';
+import { readRankingContext, readRankingInputs, readRankingView } from './rankings.service';
+
+export const rankingsRoutes = [
+  route(rankingInputsRead, ({ params, query }, context) =>
+    readRankingInputs(context, params.programmeId, query.evidence ?? 'adopted'),
+  ),
+  route(rankingContextRead, ({ params }, context) => readRankingContext(context, params.programmeId)),
+  route(rankingViewRead, ({ params, query }, context) => readRankingView(context, params.programmeId, query)),
+];

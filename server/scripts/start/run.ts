@@ -1,0 +1,148 @@
+import { rmSync } from 'node:fs';
+import { join } from 'node:path';
+import { migrateDatabase } from '../../db/migrate';
+import {
+  type ClusterPlace,
+  clusterExists,
+  createCluster,
+  freePort,
+  startCluster,
+  stopCluster,
+} from '../cluster/cluster';
+import { clusterUser } from '../cluster/find-postgres';
+import { buildClientWhenStale, buildServer, CLIENT_FOLDER, SERVER_BUNDLE } from './builds';
+import { type DatabaseUrls, externalUrls, prepareDatabase } from './database';
+import { startDevelopmentClient } from './development-client';
+import { ensurePostgres } from './install-postgres';
+import { readyLine } from './ready-line';
+import { seedDemoOnce, seedReference } from './seeding';
+import { requirePort, startServer } from './server-process';
+import { takeStartLock } from './start-lock';
+import { clusterFolder, openSecrets, openStateFolder, type Secrets, writePrivate } from './state-folder';
+
+const say = (line: string) => process.stdout.write(`${line}\n`);
+
+/** What has been started and must be stopped, last first. */
+type Undo = () => Promise<void> | void;
+
+/** Sets up whatever is missing, runs the product until it is asked to stop, and leaves everything in order. */
+export async function start(words: readonly string[]): Promise<void> {
+  const undo: Undo[] = [];
+  const stopped = new Promise<number>((resolve) => {
+    process.on('SIGINT', () => resolve(0));
+    process.on('SIGTERM', () => resolve(0));
+  });
+  let code = 1;
+  try {
+    const failed = await bringUp(process.cwd(), words.includes('--dev'), undo);
+    code = await Promise.race([stopped, failed]);
+  } catch (error) {
+    process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+  }
+  for (const step of undo.reverse()) await step();
+  process.exit(code);
+}
+
+/** Resolves once everything runs, with a promise that settles when a part of it dies by itself. */
+async function bringUp(root: string, development: boolean, undo: Undo[]): Promise<Promise<number>> {
+  const host = process.env['HOST'] ?? '127.0.0.1';
+  const port = Number(process.env['PORT'] ?? 4300);
+  const user = clusterUser();
+  const stateFolder = openStateFolder(root, user);
+  undo.push(takeStartLock(stateFolder));
+  const secrets = openSecrets(stateFolder);
+  await requirePort(host, port);
+
+  const external = externalUrls(process.env);
+  const deaths: Promise<number>[] = [];
+  let urls: DatabaseUrls;
+  if (external === undefined) {
+    const place = clusterPlace(root, stateFolder);
+    if (!clusterExists(place)) createCluster(place, secrets.superuser);
+    const cluster = await startCluster(place, {
+      superuserPassword: secrets.superuser,
+      port: await freePort(),
+      throwaway: false,
+    });
+    undo.push(() => stopCluster(place, 'fast'));
+    deaths.push(cluster.ended.then(() => reportDeath('The database')));
+    const note = join(stateFolder, 'running.json');
+    writePrivate(note, JSON.stringify({ databasePort: cluster.port, serverPort: port }));
+    undo.push(() => rmSync(note, { force: true }));
+    urls = await prepareDatabase(cluster, secrets, root);
+  } else {
+    urls = external;
+    await migrateDatabase(urls.owner, join(root, 'migrations'));
+  }
+  await seedReference(urls.maintenance);
+  if (external === undefined && (await seedDemoOnce(urls.maintenance, secrets.demo))) {
+    say('The demo scenario has been set up.');
+  }
+
+  if (!development) {
+    buildClientWhenStale(root, say);
+    await buildServer(root);
+  }
+  const server = await startServer(
+    development ? ['--watch', '--import', 'tsx', 'server/main.ts'] : ['--enable-source-maps', SERVER_BUNDLE],
+    root,
+    serverEnvironment(urls, secrets, { host, port, development, demo: external === undefined, root }),
+    development ? undefined : join(stateFolder, 'server.log'),
+  );
+  undo.push(() => server.stop());
+  deaths.push(server.ended.then(() => reportDeath('The server')));
+  if (development) undo.push(startDevelopmentClient(root));
+
+  const demo =
+    external === undefined ? { maintenanceUrl: urls.maintenance, password: secrets.demo } : undefined;
+  say(await readyLine(process.env['PUBLIC_ORIGINS']?.split(',')[0] ?? `http://${host}:${port}`, demo));
+  return Promise.race(deaths);
+}
+
+function clusterPlace(root: string, stateFolder: string): ClusterPlace {
+  const bin = ensurePostgres(say);
+  // Asked again: the installation may just have created the user.
+  const user = clusterUser();
+  openStateFolder(root, user);
+  const { folder, notice } = clusterFolder(root, stateFolder, user);
+  if (notice !== undefined) say(notice);
+  return { bin, folder, user };
+}
+
+interface ServerSettings {
+  readonly host: string;
+  readonly port: number;
+  readonly development: boolean;
+  readonly demo: boolean;
+  readonly root: string;
+}
+
+/** The server is given the two request logins only: the owner's and the maintenance login stay here. */
+function serverEnvironment(
+  urls: DatabaseUrls,
+  secrets: Secrets,
+  settings: ServerSettings,
+): NodeJS.ProcessEnv {
+  const { DATABASE_URL_OWNER: _owner, DATABASE_URL_MAINTENANCE: _maintenance, ...inherited } = process.env;
+  const developmentOrigins = [settings.port, 4200].flatMap((port) => [
+    `http://127.0.0.1:${port}`,
+    `http://localhost:${port}`,
+  ]);
+  return {
+    ...inherited,
+    ...(settings.development
+      ? { WAKELEDGER_MODE: 'development', PUBLIC_ORIGINS: developmentOrigins.join(',') }
+      : { WAKELEDGER_MODE: 'production', CLIENT_DIRECTORY: join(settings.root, CLIENT_FOLDER) }),
+    HOST: settings.host,
+    PORT: String(settings.port),
+    DATABASE_URL_TENANT: urls.tenant,
+    DATABASE_URL_PLATFORM: urls.platform,
+    SESSION_SECRET: process.env['SESSION_SECRET'] ?? secrets.session,
+    DEMO: settings.demo ? '1' : '0',
+  };
+}
+
+function reportDeath(what: string): number {
+  process.stderr.write(`${what} has ended by itself. Start again: nothing that was stored is lost.\n`);
+  return 1;
+}

@@ -52,46 +52,51 @@ export const loadedFleet = (fleet: readonly EnergyCandidate[]): readonly LoadedV
     };
   });
 
-/** Columns of a fleet, one entry a vehicle. */
-interface FleetColumns {
-  readonly f0: Float64Array;
-  readonly f1: Float64Array;
-  readonly f2: Float64Array;
-  readonly inertia: Float64Array;
-}
-
 /**
- * The yardstick: a bare loop over typed arrays with the arithmetic of the energy and nothing around it. It answers the sum
- * of all energies, so that no compiler may leave the work out.
+ * The yardstick: a bare loop over typed arrays with the arithmetic of the energy and nothing around it, written out on its
+ * own. It answers wheel less braking energy, so that no compiler may leave the work out.
  */
-function bareSum({ f0, f1, f2, inertia }: FleetColumns, cycle: PreparedCycle): number {
-  const { steps, meanSpeedKmh: speed, accelerationMs2: acceleration, stepDistanceM: distance } = cycle;
-  let total = 0;
-  for (let n = 0; n < f0.length; n++) {
-    const a = f0[n] as number;
-    const b = f1[n] as number;
-    const c = f2[n] as number;
-    const m = inertia[n] as number;
-    let wheel = 0;
-    let braking = 0;
-    for (let i = 0; i < steps; i++) {
-      const v = speed[i] as number;
-      const work = (a + v * (b + v * c) + m * (acceleration[i] as number)) * (distance[i] as number);
-      if (work > 0) wheel += work;
-      else braking -= work;
-    }
-    total += wheel - braking;
+function bareEnergy(
+  f0: number,
+  f1: number,
+  f2: number,
+  inertia: number,
+  speed: Float64Array,
+  acceleration: Float64Array,
+  distance: Float64Array,
+): number {
+  let wheel = 0;
+  let braking = 0;
+  for (let i = 0; i < speed.length; i++) {
+    const v = speed[i] as number;
+    const force = f0 + v * (f1 + v * f2) + inertia * (acceleration[i] as number);
+    const work = force * (distance[i] as number);
+    if (work > 0) wheel += work;
+    else braking -= work;
   }
-  return total;
+  return wheel - braking;
 }
 
-/** The bare loop over a fleet, its columns laid out beforehand. */
+/** The bare loop over a fleet, its columns laid out beforehand; it answers the sum over all. */
 export function bareLoop(cycle: PreparedCycle, vehicles: readonly LoadedVehicle[]): () => number {
-  const columns = {
-    f0: Float64Array.from(vehicles, ({ load }) => load.f0N),
-    f1: Float64Array.from(vehicles, ({ load }) => load.f1NPerKmh),
-    f2: Float64Array.from(vehicles, ({ load }) => load.f2NPerKmh2),
-    inertia: Float64Array.from(vehicles, ({ massKg }) => DEFAULT_ROTATING_FACTOR * massKg),
+  const { meanSpeedKmh, accelerationMs2, stepDistanceM } = cycle;
+  const f0 = Float64Array.from(vehicles, ({ load }) => load.f0N);
+  const f1 = Float64Array.from(vehicles, ({ load }) => load.f1NPerKmh);
+  const f2 = Float64Array.from(vehicles, ({ load }) => load.f2NPerKmh2);
+  const inertia = Float64Array.from(vehicles, ({ massKg }) => DEFAULT_ROTATING_FACTOR * massKg);
+  return () => {
+    let total = 0;
+    for (let n = 0; n < f0.length; n++) {
+      total += bareEnergy(
+        f0[n] as number,
+        f1[n] as number,
+        f2[n] as number,
+        inertia[n] as number,
+        meanSpeedKmh,
+        accelerationMs2,
+        stepDistanceM,
+      );
+    }
+    return total;
   };
-  return () => bareSum(columns, cycle);
 }

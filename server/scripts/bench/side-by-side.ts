@@ -1,7 +1,7 @@
-/** Median of at least one number. */
-function median(values: readonly number[]): number {
+/** A quarter of the numbers lie below it. */
+function lowerQuartile(values: readonly number[]): number {
   const sorted = [...values].sort((a, b) => a - b);
-  return sorted[Math.floor(sorted.length / 2)] ?? NaN;
+  return sorted[Math.floor(sorted.length / 4)] ?? NaN;
 }
 
 function millisecondsOf(work: () => void): number {
@@ -13,26 +13,27 @@ function millisecondsOf(work: () => void): number {
 export interface SideBySide {
   readonly subjectMs: number;
   readonly yardstickMs: number;
-  /** Median over the rounds of subject over yardstick. */
+  /** Subject over yardstick. */
   readonly ratio: number;
 }
 
 /**
- * Times two pieces of work in turn, round by round, so that whatever else the machine does falls on both; medians. Both
- * are warmed up first: the compiler's own work is not measured.
+ * Times two pieces of work in turn, so that whatever else the machine does falls on both, and compares their lower
+ * quartiles: what slows a round down from outside is never part of the work. Both are warmed up first: the compiler's own
+ * work is not measured.
  */
-export function sideBySide(subject: () => void, yardstick: () => void, rounds = 31): SideBySide {
-  for (let i = 0; i < 6; i++) {
+export function sideBySide(subject: () => void, yardstick: () => void, rounds = 60): SideBySide {
+  for (let i = 0; i < 15; i++) {
     subject();
     yardstick();
   }
-  const pairs = Array.from({ length: rounds }, () => ({
-    yardstickMs: millisecondsOf(yardstick),
-    subjectMs: millisecondsOf(subject),
-  }));
-  return {
-    subjectMs: median(pairs.map((pair) => pair.subjectMs)),
-    yardstickMs: median(pairs.map((pair) => pair.yardstickMs)),
-    ratio: median(pairs.map((pair) => pair.subjectMs / pair.yardstickMs)),
-  };
+  const subjectTimes: number[] = [];
+  const yardstickTimes: number[] = [];
+  for (let round = 0; round < rounds; round++) {
+    yardstickTimes.push(millisecondsOf(yardstick));
+    subjectTimes.push(millisecondsOf(subject));
+  }
+  const subjectMs = lowerQuartile(subjectTimes);
+  const yardstickMs = lowerQuartile(yardstickTimes);
+  return { subjectMs, yardstickMs, ratio: subjectMs / yardstickMs };
 }

@@ -18,6 +18,14 @@ describe('prepareCycle', () => {
     expect(cycle.distanceM).toBe(12.5);
   });
 
+  test('By falling acceleration the steps are the same, each with its own speed and distance', () => {
+    const cycle = prepareCycle({ timeS: [0, 1, 2, 4, 5], speedKmh: [0, 18, 9, 9, 45] });
+    const { byAcceleration } = cycle;
+    expect(Array.from(byAcceleration.accelerationMs2)).toEqual([10, 5, 0, -2.5]);
+    expect(Array.from(byAcceleration.meanSpeedKmh)).toEqual([27, 9, 9, 13.5]);
+    expect(Array.from(byAcceleration.stepDistanceM)).toEqual([7.5, 2.5, 5, 3.75]);
+  });
+
   test('Only a step that begins and ends at 0 km/h stands', () => {
     const cycle = prepareCycle({ timeS: [0, 1, 2, 3, 4], speedKmh: [0, 0, 5, 0, 0] });
     expect(Array.from(cycle.standing)).toEqual([1, 0, 0, 1]);

@@ -28,7 +28,8 @@ export function cycleEnergy(
   massKg: number,
   rotatingFactor: number = DEFAULT_ROTATING_FACTOR,
 ): CycleEnergy {
-  const { steps, meanSpeedKmh, accelerationMs2, stepDistanceM } = cycle;
+  const { meanSpeedKmh, accelerationMs2, stepDistanceM } = cycle.byAcceleration;
+  const { steps } = cycle;
   const { f0N, f1NPerKmh, f2NPerKmh2 } = load;
   const inertiaKg = rotatingFactor * massKg;
   let wheelEnergyJ = 0;

@@ -1,5 +1,5 @@
 import { DEFAULT_ROTATING_FACTOR, EXCHANGE_RATE_STEP_M2 } from '../constants';
-import type { PreparedCycle } from '../cycles/cycle';
+import type { PreparedCycle, StepsByAcceleration } from '../cycles/cycle';
 import { f2OfDragArea, type RoadLoad } from './road-load';
 
 /** A vehicle as a cycle sees it. */
@@ -20,9 +20,12 @@ export interface EnergiesOnCycle {
 }
 
 /** Work [J] in each step that a drag area of EXCHANGE_RATE_STEP_M2 costs in air of a density [kg/m³]. */
-function workOfStepInDragArea(cycle: PreparedCycle, airDensityKgM3: number): Float64Array {
+function workOfStepInDragArea(
+  { meanSpeedKmh, stepDistanceM }: StepsByAcceleration,
+  airDensityKgM3: number,
+): Float64Array {
   const f2 = f2OfDragArea(EXCHANGE_RATE_STEP_M2, airDensityKgM3);
-  return cycle.meanSpeedKmh.map((speed, i) => f2 * speed * speed * (cycle.stepDistanceM[i] as number));
+  return meanSpeedKmh.map((speed, i) => f2 * speed * speed * (stepDistanceM[i] as number));
 }
 
 /**
@@ -45,8 +48,9 @@ export function energiesOnCycle(
   const wheelEnergyJ = new Float64Array(count);
   const brakingEnergyJ = new Float64Array(count);
   const exchangeRateJPerM2 = new Float64Array(count);
-  const { steps, meanSpeedKmh, accelerationMs2, stepDistanceM } = cycle;
-  const stepWorkJ = workOfStepInDragArea(cycle, airDensityKgM3);
+  const { meanSpeedKmh, accelerationMs2, stepDistanceM } = cycle.byAcceleration;
+  const { steps } = cycle;
+  const stepWorkJ = workOfStepInDragArea(cycle.byAcceleration, airDensityKgM3);
 
   for (let left = 0; left < count; left += 2) {
     // An odd last vehicle goes together with itself.

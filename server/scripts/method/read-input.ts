@@ -2,63 +2,61 @@ import type * as z from 'zod';
 import { Refused, refuse } from '../../../shared/core/refusal';
 
 type Issue = z.core.$ZodIssue;
+type Path = readonly PropertyKey[];
 
 /** Codes that a schema gives itself, as the message of a check. */
 const OWN_CODES = new Set(['degrees-of-freedom', 'confidence-out-of-range']);
 
-const pathOf = (path: readonly PropertyKey[]): string => path.map(String).join('.');
+const pathOf = (path: Path): string => path.map(String).join('.') || 'input';
+
+function valueAt(root: unknown, path: Path): unknown {
+  return path.reduce<unknown>(
+    (value, key) =>
+      typeof value === 'object' && value !== null ? (value as Record<PropertyKey, unknown>)[key] : undefined,
+    root,
+  );
+}
+
+const isUnrecognised = (issue: Issue): boolean => issue.code === 'unrecognized_keys';
+
+/** Misspelt fields come first: they explain what seems to be missing. */
+function firstOf(issues: readonly Issue[]): Issue | undefined {
+  return issues.find(isUnrecognised) ?? issues[0];
+}
 
 /** Of a union the branch that was most likely meant: fewest fields that it does not know, then fewest that are missing. */
-function likeliestBranch(branches: readonly (readonly Issue[])[]): readonly Issue[] {
+function likeliestBranch(branches: readonly (readonly Issue[])[], value: unknown): readonly Issue[] {
   const distance = (issues: readonly Issue[]): number =>
     issues.reduce((sum, issue) => {
       if (issue.code === 'unrecognized_keys') return sum + 100 * issue.keys.length;
-      return sum + (issue.input === undefined ? 10 : 1);
+      if (issue.path.length === 0) return sum + 1000;
+      return sum + (valueAt(value, issue.path) == null ? 10 : 1);
     }, 0);
   return [...branches].sort((a, b) => distance(a) - distance(b))[0] ?? [];
 }
 
-function typeCode(issue: Issue): string {
-  if (issue.input == null) return 'missing-input';
-  return typeof issue.input === 'number' ? 'not-a-number' : 'malformed-input';
-}
-
-function codeOf(issue: Issue): string {
+function codeOf(issue: Issue, value: unknown): string {
   if (OWN_CODES.has(issue.message)) return issue.message;
-  switch (issue.code) {
-    case 'invalid_type':
-      return issue.expected === 'number' || issue.input == null ? typeCode(issue) : 'malformed-input';
-    case 'invalid_value':
-      return issue.input == null ? 'missing-input' : 'malformed-input';
-    case 'too_small':
-      return issue.origin === 'number' ? (issue.inclusive ? 'negative' : 'not-positive') : 'malformed-input';
-    default:
-      return 'malformed-input';
+  if (issue.code === 'invalid_type' || issue.code === 'invalid_value' || issue.code === 'invalid_union') {
+    if (value == null) return 'missing-input';
+    return typeof value === 'number' && !Number.isFinite(value) ? 'not-a-number' : 'malformed-input';
   }
+  if (issue.code === 'too_small' && issue.origin === 'number') {
+    return issue.inclusive ? 'negative' : 'not-positive';
+  }
+  return 'malformed-input';
 }
 
-function refusalOf(issue: Issue, above: readonly PropertyKey[] = []): Refused {
+function refusalOf(issue: Issue, root: unknown, above: Path = []): Refused {
   const path = [...above, ...issue.path];
-  if (issue.code === 'invalid_union') {
-    if (issue.input == null) return new Refused('missing-input', pathOf(path), `${pathOf(path)} is missing.`);
-    const [first] = inOrder(likeliestBranch(issue.errors));
-    if (first !== undefined && (first.path.length > 0 || first.code === 'unrecognized_keys')) {
-      return refusalOf(first, path);
-    }
-    if (typeof issue.input === 'number') {
-      return new Refused('not-a-number', pathOf(path), `${pathOf(path)} is beyond the range of numbers.`);
-    }
+  const value = valueAt(root, path);
+  if (issue.code === 'invalid_union' && typeof value === 'object' && value !== null) {
+    const inner = firstOf(likeliestBranch(issue.errors, value));
+    if (inner !== undefined) return refusalOf(inner, root, path);
   }
   const where = pathOf(issue.code === 'unrecognized_keys' ? [...path, issue.keys[0] ?? ''] : path);
-  const code = codeOf(issue);
+  const code = codeOf(issue, value);
   return new Refused(code, where, code === 'missing-input' ? `${where} is missing.` : issue.message);
-}
-
-/** Misspelt fields come first: they explain what seems to be missing. */
-function inOrder(issues: readonly Issue[]): readonly Issue[] {
-  return [...issues].sort(
-    (a, b) => Number(b.code === 'unrecognized_keys') - Number(a.code === 'unrecognized_keys'),
-  );
 }
 
 /** @throws {Refused} not-json */
@@ -77,10 +75,10 @@ export function parseJson(text: string): unknown {
  *   confidence-out-of-range
  */
 export function readInput(schema: z.ZodType, input: unknown): unknown {
-  const parsed = schema.safeParse(input, { reportInput: true });
+  const parsed = schema.safeParse(input);
   if (parsed.success) return parsed.data;
-  const [first] = inOrder(parsed.error.issues);
-  throw first === undefined
+  const issue = firstOf(parsed.error.issues);
+  throw issue === undefined
     ? new Refused('malformed-input', 'input', parsed.error.message)
-    : refusalOf(first);
+    : refusalOf(issue, input);
 }

@@ -4,21 +4,18 @@ export interface WindNode {
   readonly yawDeg: number;
 }
 
-const DIRECTIONS = [1, 2, 3, 4, 5, 6] as const;
+/** One wind direction φ [°] for r, wind speed over vehicle speed: M = 1 + r² + 2·r·cos φ, ψ = atan(r·sin φ/(1 + r·cos φ)). */
+export function windNode(windRatio: number, directionDeg: number): WindNode {
+  const phi = (directionDeg * Math.PI) / 180;
+  return {
+    weight: 1 + windRatio * windRatio + 2 * windRatio * Math.cos(phi),
+    yawDeg: (Math.atan2(windRatio * Math.sin(phi), 1 + windRatio * Math.cos(phi)) * 180) / Math.PI,
+  };
+}
 
-/**
- * The six wind directions of SAE J1252 (memory) for r, wind speed over vehicle speed: φ_j = 30°·j − 15°,
- * M_j = 1 + r² + 2·r·cos φ_j, ψ_j = atan(r·sin φ_j/(1 + r·cos φ_j)).
- */
+/** The six wind directions of SAE J1252 (memory): φ_j = 30°·j − 15°, j = 1…6. */
 export function windNodes(windRatio: number): WindNode[] {
-  return DIRECTIONS.map((j) => {
-    const phi = ((30 * j - 15) * Math.PI) / 180;
-    const along = 1 + windRatio * Math.cos(phi);
-    return {
-      weight: 1 + windRatio * windRatio + 2 * windRatio * Math.cos(phi),
-      yawDeg: (Math.atan2(windRatio * Math.sin(phi), along) * 180) / Math.PI,
-    };
-  });
+  return [1, 2, 3, 4, 5, 6].map((j) => windNode(windRatio, 30 * j - 15));
 }
 
 /** C̄ = (1/6)·Σ M_j·C(ψ_j). ΣM_j = 6·(1 + r²), so a body indifferent to yaw scores C·(1 + r²). */

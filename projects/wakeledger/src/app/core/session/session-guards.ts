@@ -14,7 +14,9 @@ export const signedIn: CanActivateFn = async (_, state) => {
     return new RedirectCommand(router.parseUrl('/unavailable'), { skipLocationChange: true });
   }
   if (session.member()) return true;
-  return router.createUrlTree(['/sign-in'], state.url === '/' ? {} : { queryParams: { return: state.url } });
+  // Whoever came to the front door is led to where they last worked; an address of its own is kept.
+  const frontDoor = state.url === '/' || state.url === '/programmes';
+  return router.createUrlTree(['/sign-in'], frontDoor ? {} : { queryParams: { return: state.url } });
 };
 
 /** Pages that need a permission: the server refuses anyway, this spares the person a broken page. */

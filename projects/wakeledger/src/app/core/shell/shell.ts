@@ -1,5 +1,16 @@
 import { DatePipe } from '@angular/common';
-import { ChangeDetectionStrategy, Component, DOCUMENT, computed, inject, signal } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  DOCUMENT,
+  ElementRef,
+  Injector,
+  afterNextRender,
+  computed,
+  inject,
+  signal,
+  viewChild,
+} from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { NavigationEnd, Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
 import { filter } from 'rxjs';
@@ -18,7 +29,7 @@ import { type Section, organisationSections, programmeSections } from './section
   templateUrl: './shell.html',
   styleUrl: './shell.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  host: { '(keydown.escape)': 'menuOpen.set(false)' },
+  host: { '(keydown.escape)': 'closeMenu()' },
 })
 export class Shell {
   private readonly session = inject(Session);
@@ -40,6 +51,10 @@ export class Shell {
     return next && { ...next, left: daysUntilWords(daysUntil(next.date, new Date())) };
   });
 
+  private readonly opener = viewChild.required<ElementRef<HTMLElement>>('opener');
+  private readonly closer = viewChild.required<ElementRef<HTMLElement>>('closer');
+  private readonly injector = inject(Injector);
+
   constructor() {
     this.router.events
       .pipe(
@@ -47,6 +62,18 @@ export class Shell {
         takeUntilDestroyed(),
       )
       .subscribe(() => this.menuOpen.set(false));
+  }
+
+  /** The spine on a narrow screen; the focus goes along, and comes back when it is closed. */
+  protected openMenu(): void {
+    this.menuOpen.set(true);
+    afterNextRender(() => this.closer().nativeElement.focus(), { injector: this.injector });
+  }
+
+  protected closeMenu(): void {
+    if (!this.menuOpen()) return;
+    this.menuOpen.set(false);
+    this.opener().nativeElement.focus();
   }
 
   /** A plain fragment link would change the address and with it the page's state. */

@@ -39,6 +39,7 @@ export class CycleFigures {
         min: timeS[0],
         max: timeS.at(-1),
         splitLine: { show: false },
+        axisLabel: { formatter: (time: number) => this.format.value(time, 'duration') },
       },
       yAxis: {
         type: 'value',

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, Directive, inject, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, Directive, computed, inject, input } from '@angular/core';
 
 let count = 0;
 
@@ -30,6 +30,10 @@ export class Field {
   readonly hint = input<string>();
   readonly error = input<string>();
   readonly optional = input(false);
+
+  protected readonly words = computed(() =>
+    this.optional() ? $localize`${this.label()}:LABEL:, optional` : this.label(),
+  );
 
   readonly id = `wl-field-${++count}`;
   readonly hintId = `${this.id}-hint`;

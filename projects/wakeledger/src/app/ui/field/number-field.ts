@@ -84,15 +84,20 @@ export class NumberField implements ControlValueAccessor, OnInit, Validator {
     return typed.kind === 'ambiguous' ? (this.chosen() ?? null) : null;
   });
 
-  protected readonly range = computed(() => {
+  private readonly range = computed(() => {
     const [minimum, maximum] = [this.minimum(), this.maximum()];
-    const unit = this.unit() ? `\u202f${this.unit()}` : '';
+    const unit = this.unit() ? `\u00a0${this.unit()}` : '';
     if (minimum !== undefined && maximum !== undefined) {
       return $localize`${this.plain(minimum)}:MINIMUM: to ${this.plain(maximum)}:MAXIMUM:${unit}:UNIT:`;
     }
     if (minimum !== undefined) return $localize`at least ${this.plain(minimum)}:MINIMUM:${unit}:UNIT:`;
     return maximum === undefined ? '' : $localize`at most ${this.plain(maximum)}:MAXIMUM:${unit}:UNIT:`;
   });
+
+  protected readonly help = computed(() => [this.hint(), this.range()].filter(Boolean).join('; '));
+  protected readonly words = computed(() =>
+    this.optional() ? $localize`${this.label()}:LABEL:, optional` : this.label(),
+  );
 
   protected readonly error = computed(() => {
     const server = this.serverError() ?? this.refused();

@@ -11,7 +11,7 @@ import type { QuantityKind } from './quantity-kinds';
         <span class="u">&nbsp;±&nbsp;{{ it.u }}</span>
       }
       @if (it.unit) {
-        <span [class.u]="it.u">&#8239;{{ it.unit }}</span>
+        <span class="unit" [class.u]="it.u">&#8239;{{ it.unit }}</span>
       }
     } @else {
       <span class="wl-heard" i18n>no figure</span><span aria-hidden="true">–</span>
@@ -19,6 +19,9 @@ import type { QuantityKind } from './quantity-kinds';
   styles: `
     :host {
       white-space: nowrap;
+    }
+    .unit {
+      margin-left: 0.08em;
     }
     .u {
       font-size: 0.83em;

@@ -32,6 +32,22 @@ export const routes: Routes = [
         loadChildren: () => import('./features/programmes/programme-form.routes').then((file) => file.routes),
       },
       {
+        path: 'programmes/:programmeId/ranking',
+        title: $localize`Which variant drags most?`,
+        canActivate: [needs('ranking-inputs.read', 'ranking-view.read')],
+        loadChildren: () => import('./features/rankings/rankings.routes').then((file) => file.routes),
+      },
+      {
+        path: 'programmes/:programmeId/variants',
+        canActivate: [needs('variants.read')],
+        loadChildren: () => import('./features/variants/variants.routes').then((file) => file.routes),
+      },
+      {
+        path: 'facilities',
+        canActivate: [needs('facilities.read')],
+        loadChildren: () => import('./features/facilities/facilities.routes').then((file) => file.routes),
+      },
+      {
         path: 'cycles',
         canActivate: [needs('cycles.read')],
         loadChildren: () => import('./features/cycles/cycles.routes').then((file) => file.routes),

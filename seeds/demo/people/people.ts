@@ -37,7 +37,26 @@ export const CORVANE: DemoOrganisation = {
   slug: 'corvane',
 };
 
-export const DEMO_ORGANISATIONS: readonly DemoOrganisation[] = [ALDERMERE, VELTHORPE, CORVANE];
+export const FENWICK: DemoOrganisation = {
+  id: '0a1d0000-0000-4000-8000-000000000004',
+  kind: 'supplier',
+  name: 'Fenwick & Rye Wheels',
+  slug: 'fenwick',
+};
+export const STOWMARCH: DemoOrganisation = {
+  id: '0a1d0000-0000-4000-8000-000000000005',
+  kind: 'supplier',
+  name: 'Stowmarch Plastics',
+  slug: 'stowmarch',
+};
+
+export const DEMO_ORGANISATIONS: readonly DemoOrganisation[] = [
+  ALDERMERE,
+  VELTHORPE,
+  CORVANE,
+  FENWICK,
+  STOWMARCH,
+];
 
 const person = (
   number: number,
@@ -96,5 +115,19 @@ export const DEMO_PEOPLE: readonly DemoPerson[] = [
     CORVANE,
     'supplier-engineer',
     'Work at a supplier: nothing of a maker’s is here.',
+  ),
+  person(
+    8,
+    'Jonas Ekwall',
+    FENWICK,
+    'supplier-engineer',
+    'Work at the wheel supplier: nothing of a maker’s is here.',
+  ),
+  person(
+    9,
+    'Alys Penrose',
+    STOWMARCH,
+    'supplier-engineer',
+    'Work at the underbody supplier: nothing of a maker’s is here.',
   ),
 ];

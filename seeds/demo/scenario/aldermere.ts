@@ -6,8 +6,7 @@ import { ALDERMERE_FACILITIES } from './facilities';
 import type { Scenario } from './scenario-types';
 
 /** Aldermere Motors with its programme Dunlin, as it stands late in 2026. Tourer and Crossback still go by their newest. */
-export const ALDERMERE: Scenario = {
-  organisation: 'aldermere',
+export const ALDERMERE_SCENARIO: Scenario = {
   facilities: ALDERMERE_FACILITIES,
   programme: DUNLIN,
   variants: DUNLIN_VARIANTS,

@@ -8,8 +8,6 @@ import type { VariantFields } from '#shared/contracts/variants';
  * the loader turns them into ids.
  */
 export interface Scenario {
-  /** The organisation’s slug, as the demo people know it. */
-  readonly organisation: string;
   readonly facilities: Readonly<Record<string, FacilityFields>>;
   readonly programme: ScenarioProgramme;
   readonly variants: Readonly<Record<string, VariantFields>>;

@@ -3,8 +3,7 @@ import { campaign, straight, sweep, type Scenario } from './scenario-types';
 import { electric } from './powertrains';
 
 /** A second maker with a small programme, present to show that one maker never learns of the other. */
-export const VELTHORPE: Scenario = {
-  organisation: 'velthorpe',
+export const VELTHORPE_SCENARIO: Scenario = {
   facilities: {
     ashgill: {
       name: 'Ashgill',

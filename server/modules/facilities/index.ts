@@ -1,6 +1,7 @@
 import type { ServerModule } from '../../http/module';
 import { facilitiesRoutes } from './facilities.routes';
 
+export { facilityIssues } from './facilities.policy';
 export { findFacility, knownFacilityIds, listFacilities } from './facilities.repository';
 
 export const facilitiesModule: ServerModule = { name: 'facilities', routes: facilitiesRoutes };

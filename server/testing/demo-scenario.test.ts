@@ -1,0 +1,161 @@
+import pg from 'pg';
+import { adoptionList, resultEnter, resultList } from '#shared/contracts/results';
+import { facilityList } from '#shared/contracts/facilities';
+import { programmeList, programmeRead } from '#shared/contracts/programmes';
+import { sessionRead } from '#shared/contracts/session';
+import { variantList } from '#shared/contracts/variants';
+import { evaluateRank } from '#shared/core/ranking/rank';
+import { seedDemo } from '../../seeds/demo/index';
+import { ALDERMERE, DEMO_PEOPLE, VELTHORPE, type DemoOrganisation } from '../../seeds/demo/people/people';
+import { ALDERMERE_SCENARIO } from '../../seeds/demo/scenario/aldermere';
+import { VELTHORPE_SCENARIO } from '../../seeds/demo/scenario/velthorpe';
+import { builtInCycle } from '../../seeds/reference/cycles/built-in-cycles';
+import { rankingInputOf } from '../../seeds/demo/scenario/ranking-input';
+import { facilityIssues } from '../modules/facilities';
+import { resultIssues } from '../modules/results';
+import { variantIssues } from '../modules/variants';
+import { startApi, type ApiHarness } from './api-harness';
+import { ApiMember } from './as-member';
+import type { TestOrganisation } from './test-members';
+
+function organisationOf(organisation: DemoOrganisation): TestOrganisation {
+  const places = DEMO_PEOPLE.flatMap((person) =>
+    person.places
+      .filter((place) => place.organisation.id === organisation.id)
+      .map((place) => [place.role, person.id] as const),
+  );
+  return { ...organisation, userIds: new Map(places) };
+}
+
+describe('the demo scenario in a database', () => {
+  let api: ApiHarness;
+  let aldermere: ApiMember;
+
+  beforeAll(async () => {
+    api = await startApi();
+    const client = new pg.Client({ connectionString: api.database.url('maintenance') });
+    await client.connect();
+    await seedDemo(client, { passwordHash: 'not a hash: nobody signs in with it here' });
+    await client.end();
+    aldermere = await ApiMember.signIn(api.caller, organisationOf(ALDERMERE), 'aerodynamicist');
+  });
+  afterAll(() => api.close());
+
+  const programmeId = async (member = aldermere) => {
+    const [programme] = (await member.ok(programmeList)).programmes;
+    if (programme === undefined) throw new Error('There is no programme.');
+    return programme.id;
+  };
+
+  it('shows the programme with its counts', async () => {
+    expect((await aldermere.ok(programmeList)).programmes).toEqual([
+      expect.objectContaining({
+        name: 'Dunlin',
+        variantCount: 5,
+        resultCount: 41,
+        variantsWithoutResult: 0,
+        latestResultDate: '2026-11-19',
+      }),
+    ]);
+  });
+
+  it('keeps every variant, facility and result as the scenario has them', async () => {
+    const params = { programmeId: await programmeId() };
+    const { variants } = await aldermere.ok(variantList, { params });
+    const { facilities } = await aldermere.ok(facilityList);
+    const { results } = await aldermere.ok(resultList, { params });
+    expect(variants.map(({ name }) => name).sort()).toEqual(
+      Object.values(ALDERMERE_SCENARIO.variants)
+        .map(({ name }) => name)
+        .sort(),
+    );
+    for (const fields of Object.values(ALDERMERE_SCENARIO.variants)) {
+      expect(variants.find(({ name }) => name === fields.name)).toMatchObject(fields);
+    }
+    for (const fields of Object.values(ALDERMERE_SCENARIO.facilities)) {
+      expect(facilities.find(({ name }) => name === fields.name)).toMatchObject(fields);
+    }
+    for (const [index, scenario] of ALDERMERE_SCENARIO.results.entries()) {
+      const { variant: _variant, facility: _facility, ...fields } = scenario;
+      const raw = JSON.parse(JSON.stringify(fields)) as object;
+      expect(results[index]).toMatchObject({ ...raw, entrySequence: index + 1, enteredBy: 'Ingrid Falk' });
+    }
+    const adopted = results.filter((result) => result.adopted).map(({ name }) => name);
+    expect(adopted).toEqual(['S-2608-04', 'H-2609-03', 'H-2609-06']);
+    expect((await aldermere.ok(adoptionList, { params })).adoptions).toHaveLength(4);
+    expect(results.filter((result) => result.withdrawn !== undefined)).toHaveLength(1);
+  });
+
+  it('would pass every rule that a person’s own entries have to pass', () => {
+    for (const scenario of [ALDERMERE_SCENARIO, VELTHORPE_SCENARIO]) {
+      const latestPastDay = '2026-12-01';
+      for (const facility of Object.values(scenario.facilities)) expect(facilityIssues(facility)).toEqual([]);
+      for (const variant of Object.values(scenario.variants)) {
+        expect(
+          variantIssues(variant, {
+            latestPastDay,
+            takenNames: new Map(),
+            configurationIds: new Set(),
+            pictureFound: true,
+          }),
+        ).toEqual([]);
+      }
+      for (const { variant, facility, ...fields } of scenario.results) {
+        const place = scenario.facilities[facility];
+        if (place === undefined) throw new Error(`${facility} is not in the scenario`);
+        expect(
+          resultIssues(
+            { ...fields, variantId: '', facilityId: '' },
+            {
+              latestPastDay,
+              facility: place,
+              frontalAreaM2: scenario.variants[variant]?.frontalAreas[0]?.areaM2 ?? 0,
+            },
+          ),
+        ).toEqual([]);
+      }
+    }
+  });
+
+  it('shows the reference, the common area of the Liftback and the next milestone', async () => {
+    const programme = await aldermere.ok(programmeRead, { params: { programmeId: await programmeId() } });
+    const { variants } = await aldermere.ok(variantList, { params: { programmeId: programme.id } });
+    const liftback = variants.find(({ name }) => name === 'Dunlin Liftback');
+    expect(programme.commonArea).toEqual({ kind: 'variant', variantId: liftback?.id });
+    expect(programme.milestones).toContainEqual(
+      expect.objectContaining({ name: 'Clay freeze', date: '2027-03-14' }),
+    );
+  });
+
+  it('leads everybody’s sign-in to the programme', async () => {
+    for (const role of ['aerodynamicist', 'stylist', 'viewer'] as const) {
+      const member = await ApiMember.signIn(api.caller, organisationOf(ALDERMERE), role);
+      expect((await member.ok(sessionRead)).member?.latestProgrammeId).toBe(await programmeId());
+    }
+  });
+
+  it('goes on counting entries where the scenario ends', async () => {
+    const id = await programmeId();
+    const { results } = await aldermere.ok(resultList, { params: { programmeId: id } });
+    const [first] = results;
+    if (first === undefined) throw new Error('There is no result.');
+    const { variantId, facilityId, testDate, quantity, scale, condition, points, air, speedKmh } = first;
+    const { quotedAreaM2, quotedAreaScale } = first;
+    const entered = await aldermere.ok(resultEnter, {
+      params: { programmeId: id },
+      body: {
+        ...{ variantId, facilityId, testDate, quantity, scale, condition, points, air, speedKmh },
+        ...{ quotedAreaM2, quotedAreaScale, name: 'One more' },
+      },
+    });
+    expect(entered.entrySequence).toBe(results.length + 1);
+  });
+
+  it('gives the other maker its own programme, and neither sees the other’s', async () => {
+    const velthorpe = await ApiMember.signIn(api.caller, organisationOf(VELTHORPE), 'aerodynamicist');
+    expect((await velthorpe.ok(programmeList)).programmes.map(({ name }) => name)).toEqual(['Wherry']);
+    const problem = await velthorpe.refused(programmeRead, { params: { programmeId: await programmeId() } });
+    expect(problem.code).toBe('not-found');
+    expect(evaluateRank(rankingInputOf(VELTHORPE_SCENARIO, 'adopted'), builtInCycle).ranking).toHaveLength(2);
+  });
+});

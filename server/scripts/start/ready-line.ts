@@ -15,8 +15,11 @@ export async function readyLine(
   if (demo === undefined) return `Wakeledger is ready at ${address}`;
   const people = await withClient(demo.maintenanceUrl, async (client) => {
     const { rows } = await client.query<DemoPerson>(
-      `select m.role, u.display_name, u.email from users u join memberships m on m.user_id = u.id
-       where u.demo and m.ended_at is null order by m.organisation_kind, u.created_at, u.display_name`,
+      `select role, display_name, email from (
+         select distinct on (u.id) m.role, u.display_name, u.email, u.created_at
+         from users u join memberships m on m.user_id = u.id
+         where u.demo and m.ended_at is null order by u.id, m.created_at
+       ) person order by created_at, display_name`,
     );
     return rows;
   });

@@ -28,14 +28,17 @@ type Undo = () => Promise<void> | void;
 /** Sets up whatever is missing, runs the product until it is asked to stop, and leaves everything in order. */
 export async function start(words: readonly string[]): Promise<void> {
   const undo: Undo[] = [];
-  const stopped = new Promise<number>((resolve) => {
-    process.on('SIGINT', () => resolve(0));
-    process.on('SIGTERM', () => resolve(0));
+  const stopped = new Promise<'stopped'>((resolve) => {
+    process.on('SIGINT', () => resolve('stopped'));
+    process.on('SIGTERM', () => resolve('stopped'));
   });
   let code = 1;
   try {
-    const failed = await bringUp(process.cwd(), words.includes('--dev'), undo);
-    code = await Promise.race([stopped, failed]);
+    const running = bringUp(process.cwd(), words.includes('--dev'), undo);
+    const first = await Promise.race([stopped, running]);
+    const died = first === 'stopped' ? first : await Promise.race([stopped, first.death]);
+    if (died === 'stopped') code = 0;
+    else process.stderr.write(`${died} has ended by itself. Start again: nothing that was stored is lost.\n`);
   } catch (error) {
     process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
   }
@@ -43,8 +46,12 @@ export async function start(words: readonly string[]): Promise<void> {
   process.exit(code);
 }
 
-/** Resolves once everything runs, with a promise that settles when a part of it dies by itself. */
-async function bringUp(root: string, development: boolean, undo: Undo[]): Promise<Promise<number>> {
+/** Resolves once everything runs; `death` names the part that ends by itself later. */
+async function bringUp(
+  root: string,
+  development: boolean,
+  undo: Undo[],
+): Promise<{ readonly death: Promise<string> }> {
   const host = process.env['HOST'] ?? '127.0.0.1';
   const port = Number(process.env['PORT'] ?? 4300);
   const user = clusterUser();
@@ -54,7 +61,7 @@ async function bringUp(root: string, development: boolean, undo: Undo[]): Promis
   await requirePort(host, port);
 
   const external = externalUrls(process.env);
-  const deaths: Promise<number>[] = [];
+  const deaths: Promise<string>[] = [];
   let urls: DatabaseUrls;
   if (external === undefined) {
     const place = clusterPlace(root, stateFolder);
@@ -65,7 +72,7 @@ async function bringUp(root: string, development: boolean, undo: Undo[]): Promis
       throwaway: false,
     });
     undo.push(() => stopCluster(place, 'fast'));
-    deaths.push(cluster.ended.then(() => reportDeath('The database')));
+    deaths.push(cluster.ended.then(() => 'The database'));
     const note = join(stateFolder, 'running.json');
     writePrivate(note, JSON.stringify({ databasePort: cluster.port, serverPort: port }));
     undo.push(() => rmSync(note, { force: true }));
@@ -90,13 +97,13 @@ async function bringUp(root: string, development: boolean, undo: Undo[]): Promis
     development ? undefined : join(stateFolder, 'server.log'),
   );
   undo.push(() => server.stop());
-  deaths.push(server.ended.then(() => reportDeath('The server')));
+  deaths.push(server.ended.then(() => 'The server'));
   if (development) undo.push(startDevelopmentClient(root));
 
   const demo =
     external === undefined ? { maintenanceUrl: urls.maintenance, password: secrets.demo } : undefined;
   say(await readyLine(process.env['PUBLIC_ORIGINS']?.split(',')[0] ?? `http://${host}:${port}`, demo));
-  return Promise.race(deaths);
+  return { death: Promise.race(deaths) };
 }
 
 function clusterPlace(root: string, stateFolder: string): ClusterPlace {
@@ -140,9 +147,4 @@ function serverEnvironment(
     SESSION_SECRET: process.env['SESSION_SECRET'] ?? secrets.session,
     DEMO: settings.demo ? '1' : '0',
   };
-}
-
-function reportDeath(what: string): number {
-  process.stderr.write(`${what} has ended by itself. Start again: nothing that was stored is lost.\n`);
-  return 1;
 }

@@ -1,0 +1,152 @@
+import * as m from './mathml';
+import type { Method } from './method';
+
+const CdA = m.row(m.sub('C', 'D'), m.times, m.mi('A'));
+
+/** Methods of sections 13 and 14: road load, cycle energy, comparisons. */
+export const ENERGY_METHODS = {
+  builtUpRoadLoad: {
+    id: 'road-load-built-up',
+    version: 1,
+    title: 'Road load, built up',
+    formulaMathml: m.math(
+      m.sub('f', '0'),
+      m.equals,
+      m.mi('m'),
+      m.mi('g'),
+      m.sub('C', 'rr'),
+      m.mo(','),
+      m.sub('f', '2'),
+      m.equals,
+      m.frac(m.row(m.mi('ρ'), m.times, CdA), m.row(m.mn(2), m.times, m.squared(m.mn('3.6')))),
+    ),
+    formulaText: 'f0 = m·g·C_rr, f1 = 0, f2 = ½·ρ·C_D·A/3.6²',
+    source: 'method section 13, form (a)',
+    validity: 'Rolling resistance without dependence on speed.',
+  },
+  measuredRoadLoad: {
+    id: 'road-load-measured',
+    version: 1,
+    title: 'Road load, from a measured one',
+    formulaMathml: m.math(
+      m.sub('f', '2'),
+      m.equals,
+      m.sub('f', '2,0'),
+      m.plus,
+      m.frac(
+        m.row(m.mi('ρ'), m.times, CdA, m.minus, m.sub('ρ', '0'), m.times, m.sub('CdA', '0')),
+        m.row(m.mn(2), m.times, m.squared(m.mn('3.6'))),
+      ),
+    ),
+    formulaText: 'f2 = f2₀ + (ρ·C_D·A − ρ₀·C_D·A₀)/(2·3.6²), f0 = f0₀ + (m − m₀)·g·C_rr or f0₀·m/m₀',
+    source: 'method section 13, form (b)',
+    validity: 'f1 as measured; f0 by the mass ratio where no rolling resistance is given.',
+  },
+  cycleEnergy: {
+    id: 'cycle-energy-gtr-15',
+    version: 1,
+    title: 'Energy at the wheel on the cycle',
+    formulaMathml: m.math(
+      m.mi('E'),
+      m.equals,
+      m.mo('∑'),
+      m.sub('F', 'i'),
+      m.sub('d', 'i'),
+      m.mo(','),
+      m.sub('F', 'i'),
+      m.equals,
+      m.sub('f', '0'),
+      m.plus,
+      m.sub('f', '1'),
+      m.mi('v'),
+      m.plus,
+      m.sub('f', '2'),
+      m.squared(m.mi('v')),
+      m.plus,
+      m.mi('k'),
+      m.mi('m'),
+      m.mi('a'),
+    ),
+    formulaText: 'E = Σ F_i·d_i over F_i > 0, F_i = f0 + f1·v̄ + f2·v̄² + k·m·a',
+    source: 'UN GTR No. 15, Annex 7, paragraph 5 (memory of the printed equation; figures agree)',
+    validity: 'Zero-yaw drag area, as the regulations do. A constant-speed cycle does not start from rest.',
+  },
+  exchangeRate: {
+    id: 'exchange-rate',
+    version: 1,
+    title: 'Exchange rate',
+    formulaMathml: m.math(
+      m.frac(m.row(m.mi('d'), m.mi('E')), m.row(m.mi('d'), CdA)),
+      m.equals,
+      m.frac(
+        m.row(m.mi('E'), m.bracketed(m.mo('+')), m.minus, m.mi('E'), m.bracketed(m.mo('−'))),
+        m.row(m.mn(2), m.times, m.mn('0.001')),
+      ),
+    ),
+    formulaText: 'dE/d(C_D·A) = (E(+0.001 m²) − E(−0.001 m²))/0.002 m²',
+    source: 'method section 13',
+    validity: 'Central difference of the whole calculation; holds for this variant, cycle and mass.',
+  },
+  energyUncertainty: {
+    id: 'energy-uncertainty',
+    version: 1,
+    title: 'Uncertainty of the energy',
+    formulaMathml: m.math(
+      m.sub('u', 'E'),
+      m.equals,
+      m.frac(m.row(m.mi('d'), m.mi('E')), m.row(m.mi('d'), CdA)),
+      m.times,
+      m.mi('u'),
+    ),
+    formulaText: 'u_E = |dE/d(C_D·A)|·u(C_D·A)',
+    source: 'method section 13',
+    validity: 'Of the drag area only; mass and rolling resistance carry none.',
+  },
+} as const satisfies { readonly [name: string]: Method };
+
+/** Methods that compare figures rather than make them: they have no step in a derivation. */
+export const COMPARISON_METHODS = {
+  separability: {
+    id: 'separability',
+    version: 1,
+    title: 'Probability that one is lower',
+    formulaMathml: m.math(
+      m.mi('P'),
+      m.equals,
+      m.sub('T', 'ν'),
+      m.bracketed(m.frac(m.row(m.sub('x', 'B'), m.minus, m.sub('x', 'A')), m.mi('u'))),
+    ),
+    formulaText: 'P(A < B) = T_ν((x_B − x_A)/u), u and ν of the difference by keys',
+    source: 'JCGM 100:2008; method section 14',
+    validity: 'Separable when max(P, 1 − P) reaches the programme’s confidence.',
+  },
+  probabilityLowest: {
+    id: 'probability-lowest',
+    version: 1,
+    title: 'Probability of being the lowest',
+    formulaMathml: m.math(m.mi('P'), m.equals, m.mtext('share of 20 000 seeded draws')),
+    formulaText: 'share of 20 000 seeded draws, normal amounts by key',
+    source: 'generator sfc32 (Doty-Humphrey, PractRand); normals AS 241 (Wichura, Appl. Stat. 37 (1988) 477)',
+    validity: 'Standard error of a share at most 0.0036.',
+  },
+  powertrain: {
+    id: 'powertrain-consumption',
+    version: 1,
+    title: 'Consumption of a powertrain',
+    formulaMathml: m.math(
+      m.sub('E', 'battery'),
+      m.equals,
+      m.frac(m.mi('E'), m.mi('η')),
+      m.mo(','),
+      m.mtext('fuel'),
+      m.equals,
+      m.frac(m.mi('E'), m.row(m.mi('e'), m.mi('η'))),
+      m.plus,
+      m.frac(m.sub('P', '0'), m.mi('e')),
+      m.sub('T', 'on'),
+    ),
+    formulaText: 'E_battery = E/η − η_regen·Σ min(|F|·d, P·Δt) + P_aux·T; fuel = E/(e·η) + (P_0/e)·T_on',
+    source: 'method section 13; Willans line',
+    validity: 'All efficiencies are the programme’s inputs; estimates, never certified values.',
+  },
+} as const satisfies { readonly [name: string]: Method };

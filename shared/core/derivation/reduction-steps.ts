@@ -1,0 +1,205 @@
+import { CELSIUS_ZERO_K, KMH_PER_MS } from '../constants';
+import { correctForBlockage } from '../reduction/blockage';
+import { measuredDragArea, pointFlow } from '../reduction/measured-value';
+import type { ReducedPoint, Reduction, ReductionContext, ResultParts } from '../reduction/reduction';
+import { fullScaleDragArea } from '../reduction/scale';
+import { differingItems } from '../similarity/condition';
+import type { PointInput, ResultInput } from '../ranking/ranking-input';
+import { isZeroYaw } from '../reduction/yaw/yaw-points';
+import { plain, stepOf, type DerivationStep } from './derivation';
+import { REDUCTION_METHODS as METHODS } from './reduction-methods';
+
+/** The cautions that belong to one step, in words. */
+function cautionIf(condition: boolean, words: string): string[] {
+  return condition ? [words] : [];
+}
+
+function airSteps({ result, air }: ResultParts): DerivationStep[] {
+  const { state, temperatureC, pressurePa, relativeHumidity } = result.air ?? {};
+  const named = state != null && state !== 'custom';
+  const density = named
+    ? stepOf(METHODS.referenceAir, {
+        values: `${state}: T = ${plain(air.temperatureK)} K`,
+        value: air.densityKgM3,
+        unit: 'kg/m³',
+        assumed: [`the source used the state ${state}`],
+      })
+    : stepOf(METHODS.moistAir, {
+        values: `t = ${temperatureC} °C, p = ${pressurePa} Pa, h = ${relativeHumidity}`,
+        value: air.densityKgM3,
+        unit: 'kg/m³',
+        assumed: ['400 µmol/mol CO2'],
+        cautions: cautionIf(
+          air.notes.includes('outside-cipm-2007-range'),
+          'outside the range of CIPM-2007, 15 to 27 °C and 600 to 1100 hPa',
+        ),
+      });
+  const viscosity = stepOf(METHODS.viscosity, {
+    values: `T = ${plain(air.temperatureK)} K (${plain(air.temperatureK - CELSIUS_ZERO_K)} °C), ρ = ${plain(air.densityKgM3)} kg/m³`,
+    value: air.kinematicViscosityM2S,
+    unit: 'm²/s',
+  });
+  return [density, viscosity];
+}
+
+function tareStep(point: PointInput, result: ResultInput, netForceN: number): DerivationStep[] {
+  if (result.quantity !== 'force' || result.tareAlreadySubtracted !== false) return [];
+  return [
+    stepOf(METHODS.tare, {
+      values: `${point.value} N − ${point.tareN ?? result.tareN} N`,
+      value: netForceN,
+      unit: 'N',
+    }),
+  ];
+}
+
+function pressureStep(parts: ResultParts, point: PointInput): DerivationStep[] {
+  if (parts.result.quantity !== 'force') return [];
+  const flow = pointFlow(point, parts);
+  const method = flow.dynamicPressureMeasured ? METHODS.measuredDynamicPressure : METHODS.dynamicPressure;
+  const values = flow.dynamicPressureMeasured
+    ? `q = ${plain(flow.dynamicPressurePa)} Pa`
+    : `½·${plain(parts.air.densityKgM3)} kg/m³·(${plain(flow.speedMs)} m/s)²`;
+  return [stepOf(method, { values, value: flow.dynamicPressurePa, unit: 'Pa' })];
+}
+
+function modelStep(parts: ResultParts, point: PointInput): DerivationStep {
+  const { result, scale, air } = parts;
+  const flow = pointFlow(point, parts);
+  const measured = measuredDragArea(point, parts, flow);
+  const outcome = { value: measured.modelDragAreaM2, unit: 'm²' };
+  switch (result.quantity) {
+    case 'force':
+      return stepOf(METHODS.forceToDragArea, {
+        ...outcome,
+        values: `${plain(measured.netForceN ?? NaN)} N/${plain(flow.dynamicPressurePa)} Pa`,
+        assumed: result.tareAlreadySubtracted === true ? ['the tare was subtracted by the source'] : [],
+      });
+    case 'coefficient':
+      return stepOf(METHODS.coefficientToDragArea, {
+        ...outcome,
+        values: `${point.value}·${result.quotedAreaM2} m²${result.quotedAreaScale === 'full' ? `·${plain(scale)}²` : ''}`,
+      });
+    case 'coastdown-f2':
+      return stepOf(METHODS.coastdown, {
+        ...outcome,
+        values: `2·3.6²·${point.value} N/(km/h)²/${plain(air.densityKgM3)} kg/m³`,
+        assumed: ['all of f2 is aerodynamic drag'],
+      });
+    default:
+      return stepOf(METHODS.statedDragArea, { ...outcome, values: `${point.value} m²·${plain(scale)}²` });
+  }
+}
+
+const BLOCKAGE_METHODS = {
+  none: METHODS.blockageNone,
+  'area-ratio': METHODS.blockageAreaRatio,
+  maskell: METHODS.blockageMaskell,
+  factor: METHODS.blockageFactor,
+} as const;
+
+/** The blockage step from the drag area of the step before; none outside tunnels or where the source has corrected. */
+function blockageSteps(
+  parts: ResultParts,
+  modelDragAreaM2: number,
+  cautions: readonly string[],
+): DerivationStep[] {
+  const { facility, tunnel, result } = parts;
+  const { blockage } = facility;
+  if (tunnel === null || blockage == null || result.blockageAlreadyCorrectedBy != null) return [];
+  const method = Object.entries(BLOCKAGE_METHODS).find(([name]) => name === blockage.method)?.[1];
+  if (method === undefined) return [];
+  const { blockageRatio, areaM2 } = tunnel;
+  const typed = [
+    ...(blockage.method === 'maskell' ? [`θ = ${blockage.theta}`] : []),
+    ...(blockage.method === 'factor' ? [`k = ${blockage.factor}`] : []),
+  ];
+  return [
+    stepOf(method, {
+      values: [
+        `x = ${plain(modelDragAreaM2)} m²`,
+        `β = ${plain(blockageRatio)}`,
+        `A_t = ${areaM2} m²`,
+        ...typed,
+      ].join(', '),
+      value: correctForBlockage(blockage, modelDragAreaM2, blockageRatio, areaM2).modelDragAreaM2,
+      unit: 'm²',
+      cautions,
+    }),
+  ];
+}
+
+function fullScaleStep({ scale, result, model }: ResultParts, correctedM2: number): DerivationStep {
+  return stepOf(METHODS.fullScale, {
+    values: `${plain(correctedM2)} m²/${plain(scale)}²`,
+    value: fullScaleDragArea(correctedM2, scale),
+    unit: 'm²',
+    assumed: [
+      ...(result.blockageAlreadyCorrectedBy == null
+        ? []
+        : [`blockage was already corrected by ${result.blockageAlreadyCorrectedBy}`]),
+      ...(model === null || model.scaleU != null ? [] : ['the model is exactly to scale']),
+    ],
+  });
+}
+
+function flowStep(reduction: Reduction, context: ReductionContext): DerivationStep {
+  const { parts, output, zeroYawPoints } = reduction;
+  const { speedMs } = zeroYawPoints[0]?.flow ?? { speedMs: NaN };
+  const { characteristicLengthM } = context.programme;
+  const differing = differingItems(context.referenceCondition, parts.result.condition);
+  return stepOf(METHODS.flow, {
+    values:
+      `U = ${plain(speedMs)} m/s (${plain(speedMs * KMH_PER_MS)} km/h), L = ${characteristicLengthM} m, s = ${plain(parts.scale)}, ` +
+      `ν_k = ${plain(parts.air.kinematicViscosityM2S)} m²/s; M = ${plain(output.mach)} (highest)`,
+    value: output.reynolds,
+    unit: '',
+    assumed: [
+      `the drag area is that at the reference Reynolds number ${plain(context.referenceReynolds)}: no correction between them`,
+    ],
+    cautions: [
+      ...cautionIf(
+        output.cautions.includes('mach'),
+        'compressibility: the Mach number is above the caution limit',
+      ),
+      ...cautionIf(output.cautions.includes('transition'), 'transition may sit in the wrong place'),
+      ...cautionIf(output.excludedBy.includes('mach'), 'excluded: the Mach number is above its limit'),
+      ...cautionIf(
+        differing.length > 0,
+        `not comparable: ${differing.join(', ')} differ from the reference condition`,
+      ),
+    ],
+  });
+}
+
+function meanStep(points: readonly ReducedPoint[]): DerivationStep[] {
+  if (points.length < 2) return [];
+  return [
+    stepOf(METHODS.zeroYawMean, {
+      values: `(${points.map((point) => plain(point.dragAreaM2)).join(' + ')}) m²/${points.length}`,
+      value: points.reduce((sum, point) => sum + point.dragAreaM2, 0) / points.length,
+      unit: 'm²',
+    }),
+  ];
+}
+
+/** The steps from the first zero-yaw reading to the zero-yaw drag area at full scale, each from the value of the one before. */
+export function zeroYawSteps(reduction: Reduction, context: ReductionContext): DerivationStep[] {
+  const { parts, zeroYawPoints, output } = reduction;
+  const point = (parts.result.points ?? []).find((one) => isZeroYaw(one.yawDeg ?? 0)) ?? {};
+  const model = modelStep(parts, point);
+  const blockage = blockageSteps(parts, model.value, [
+    ...cautionIf(output.cautions.includes('blockage'), 'the blockage ratio is above the caution limit'),
+    ...cautionIf(output.excludedBy.includes('blockage'), 'excluded: the blockage ratio is above its limit'),
+  ]);
+  return [
+    ...airSteps(parts),
+    ...tareStep(point, parts.result, zeroYawPoints[0]?.netForceN ?? NaN),
+    ...pressureStep(parts, point),
+    flowStep(reduction, context),
+    model,
+    ...blockage,
+    fullScaleStep(parts, (blockage.at(-1) ?? model).value),
+    ...meanStep(zeroYawPoints),
+  ];
+}

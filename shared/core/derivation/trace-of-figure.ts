@@ -1,0 +1,137 @@
+import type { Basis, RankingInput } from '../ranking/ranking-input';
+import { checkAvailability } from '../reduction/not-available';
+import { reduceResult } from '../reduction/reduce-result';
+import type { Reduction, ReductionContext } from '../reduction/reduction';
+import { reductionContextOf } from '../reduction/reduction-context';
+import { refuse } from '../refusal';
+import { figureOf, type KeyedFigure } from '../uncertainty/budget';
+import type { Contribution } from '../uncertainty/figure';
+import { plain, stepOf, type BudgetShare, type Derivation, type DerivationStep } from './derivation';
+import { keyLabel, type KeyNames } from './key-labels';
+import { REDUCTION_METHODS as METHODS } from './reduction-methods';
+import { zeroYawSteps } from './reduction-steps';
+
+/** A budget in words, largest share first; amounts times a factor where the figure is not a drag area. */
+export function budgetShares(
+  contributions: readonly Contribution[],
+  names: KeyNames,
+  factor = 1,
+): BudgetShare[] {
+  return contributions
+    .map(({ key, amountM2, degreesOfFreedom, shareOfVariance }) => ({
+      key,
+      label: keyLabel(key, names),
+      amount: amountM2 * factor,
+      degreesOfFreedom,
+      shareOfVariance,
+    }))
+    .sort((a, b) => b.shareOfVariance - a.shareOfVariance);
+}
+
+function namesIn({ facilities, models, variants, results }: RankingInput): KeyNames {
+  const named = [...facilities, ...(models ?? []), ...variants, ...results];
+  return new Map(named.flatMap(({ id, name }) => (name == null ? [] : [[id, name] as const])));
+}
+
+function windSteps({ windAverage, output }: Reduction, zeroYawM2: number): DerivationStep[] {
+  const { yaw } = windAverage;
+  if (yaw === null) {
+    return refuse(
+      windAverage.refusal,
+      `result:${output.resultId}`,
+      'There is no wind average of this result.',
+    );
+  }
+  const points = yaw.foldedYawDeg.map(
+    (angle, i) => `${plain(angle)}°: ${plain(yaw.foldedDragAreaM2[i] ?? NaN)} m²`,
+  );
+  return [
+    stepOf(METHODS.yawRatio, {
+      values: points.join(', '),
+      value: yaw.yawRatio,
+      unit: '',
+      assumed: ['the wind comes from every direction alike'],
+      cautions: yaw.cautions.map(
+        () => 'an angle was measured on one side only, and the body is not symmetrical',
+      ),
+    }),
+    stepOf(METHODS.windAveraged, {
+      values: `${plain(yaw.yawRatio)}·${plain(zeroYawM2)} m²`,
+      value: zeroYawM2 * yaw.yawRatio,
+      unit: 'm²',
+    }),
+  ];
+}
+
+function uncertaintyStep(figure: KeyedFigure): DerivationStep {
+  const { standardUncertaintyM2, coverageFactor, expandedUncertaintyM2, effectiveDegreesOfFreedom } =
+    figureOf(figure);
+  const nu = effectiveDegreesOfFreedom === null ? 'infinite' : plain(effectiveDegreesOfFreedom);
+  return stepOf(METHODS.budget, {
+    values: `u = ${plain(standardUncertaintyM2)} m², ν_eff = ${nu}, t = ${plain(coverageFactor)}`,
+    value: expandedUncertaintyM2,
+    unit: 'm²',
+  });
+}
+
+/** The derivation of a reduction that is at hand. @throws {Refused} the code why there is no wind average */
+export function traceOfReduction(
+  reduction: Reduction,
+  context: ReductionContext,
+  basis: Basis,
+  names: KeyNames,
+): Derivation {
+  const toZeroYaw = zeroYawSteps(reduction, context);
+  const zeroYawM2 = toZeroYaw.at(-1)?.value ?? NaN;
+  const steps = [...toZeroYaw, ...(basis === 'wind-averaged' ? windSteps(reduction, zeroYawM2) : [])];
+  const keyed = (basis === 'wind-averaged' ? reduction.windAverage.figure : null) ?? reduction.zeroYaw;
+  const figure = figureOf(keyed);
+  const { id, name } = reduction.parts.result;
+  return {
+    title: `Drag area C_D·A of ${name ?? id}, ${basis === 'wind-averaged' ? 'wind-averaged' : 'zero yaw'}`,
+    value: steps.at(-1)?.value ?? NaN,
+    unit: 'm²',
+    standardUncertainty: figure.standardUncertaintyM2,
+    expandedUncertainty: figure.expandedUncertaintyM2,
+    coverageFactor: figure.coverageFactor,
+    steps: [...steps, uncertaintyStep(keyed)],
+    budget: budgetShares(figure.contributions, names),
+  };
+}
+
+/**
+ * How one result's drag area came about, from the raw value to the reference figure, by the same functions that the ranking
+ * uses.
+ *
+ * @throws {Refused} unknown-result, the codes of `reduceResults` and of the result itself
+ */
+export function traceOfFigure(input: RankingInput, resultId: string, basis: Basis): Derivation {
+  const context = reductionContextOf(input);
+  checkAvailability(input);
+  const result =
+    input.results.find(({ id }) => id === resultId) ??
+    refuse('unknown-result', resultId, `There is no result “${resultId}”.`);
+  return traceOfReduction(reduceResult(result, context), context, basis, namesIn(input));
+}
+
+/** A figure's derivation carried on to the coefficient on the common area [m²]. */
+export function onCommonArea(derivation: Derivation, commonAreaM2: number): Derivation {
+  const { value, standardUncertainty, expandedUncertainty, steps, budget } = derivation;
+  return {
+    ...derivation,
+    title: `${derivation.title}, as a coefficient on ${plain(commonAreaM2)} m²`,
+    value: value / commonAreaM2,
+    unit: '',
+    standardUncertainty: standardUncertainty / commonAreaM2,
+    expandedUncertainty: expandedUncertainty / commonAreaM2,
+    steps: [
+      ...steps,
+      stepOf(METHODS.commonArea, {
+        values: `${plain(value)} m²/${plain(commonAreaM2)} m²`,
+        value: value / commonAreaM2,
+        unit: '',
+      }),
+    ],
+    budget: budget.map((share) => ({ ...share, amount: share.amount / commonAreaM2 })),
+  };
+}

@@ -27,6 +27,8 @@ const server = {
   rootDir: '.',
   testMatch: ['<rootDir>/server/**/*.{spec,test}.ts'],
   testEnvironment: 'node',
+  // Each file makes a database of its own; on two busy cores that alone may take seconds.
+  testTimeout: 30_000,
   globalSetup: '<rootDir>/server/testing/global-setup.ts',
   globalTeardown: '<rootDir>/server/testing/global-teardown.ts',
   transform: swc,

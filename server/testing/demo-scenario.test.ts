@@ -35,7 +35,9 @@ describe('the demo scenario in a database', () => {
     api = await startApi();
     const client = new pg.Client({ connectionString: api.database.url('maintenance') });
     await client.connect();
+    await client.query('begin');
     await seedDemo(client, { passwordHash: 'not a hash: nobody signs in with it here' });
+    await client.query('commit');
     await client.end();
     aldermere = await ApiMember.signIn(api.caller, organisationOf(ALDERMERE), 'aerodynamicist');
   });

@@ -1,4 +1,4 @@
-import type { Refusal } from '../../../shared/core/refusal';
+import type { Refusal } from '#shared/core/refusal';
 import { REFUSAL_TITLES } from './refusal-titles';
 
 /** Problem object (RFC 9457) as the machine entry prints it. */

@@ -1,5 +1,5 @@
 import type * as z from 'zod';
-import { Refused, refuse } from '../../../shared/core/refusal';
+import { Refused, refuse } from '#shared/core/refusal';
 
 type Issue = z.core.$ZodIssue;
 type Path = readonly PropertyKey[];

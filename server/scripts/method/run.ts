@@ -1,11 +1,6 @@
-import { Refused, refuse } from '../../../shared/core/refusal';
-import {
-  NOT_YET_AVAILABLE,
-  OPERATION_NAMES,
-  isOperationName,
-  loadOperation,
-  type Operation,
-} from './operations';
+import { Refused, refuse } from '#shared/core/refusal';
+import { NOT_YET_AVAILABLE, OPERATION_NAMES, isOperationName, loadOperation } from './operations';
+import type { Operation } from './operation';
 import { problemOfRefusal } from './problem-of-refusal';
 import { parseJson, readInput } from './read-input';
 

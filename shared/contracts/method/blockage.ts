@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import type { BlockageInput } from '../../core/reduction/blockage-operation';
+import type { BlockageInput } from '#shared/core/reduction/blockage-operation';
 import { blockageMethodSchema } from './ranking-input';
 
 /** Input of the operation `blockage`. */

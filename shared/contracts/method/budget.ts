@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import type { BudgetInput } from '../../core/uncertainty/budget-operation';
+import type { BudgetInput } from '#shared/core/uncertainty/budget-operation';
 import { figureInputSchema } from './figure';
 
 /** Input of the operation `budget`. */

@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import type { RankingInput } from '../../core/ranking/ranking-input';
+import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import { airInputSchema } from './air';
 import { cycleInputSchema } from './cycle';
 import { degreesOfFreedomSchema, uncertaintySchema } from './figure';

@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import type { RankOutput, ReduceOutput } from '../../core/ranking/ranking-output';
+import type { RankOutput, ReduceOutput } from '#shared/core/ranking/ranking-output';
 import { figureSchema } from './figure';
 
 const number = z.number();

@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import type { YawInput } from '../../core/reduction/yaw/yaw-ratio';
+import type { YawInput } from '#shared/core/reduction/yaw/yaw-ratio';
 import { degreesOfFreedomSchema, uncertaintySchema } from './figure';
 
 /** Input of the operation `yaw`. */

@@ -1,5 +1,5 @@
-import { budgetInputSchema } from '../../../../shared/contracts/method/budget';
-import { evaluateBudget } from '../../../../shared/core/uncertainty/budget-operation';
-import { operation } from '../operations';
+import { budgetInputSchema } from '#shared/contracts/method/budget';
+import { evaluateBudget } from '#shared/core/uncertainty/budget-operation';
+import { operation } from '../operation';
 
 export const budget = operation(budgetInputSchema, evaluateBudget);

@@ -1,6 +1,6 @@
-import { studentQuantileInputSchema } from '../../../../shared/contracts/method/student-quantile';
-import { studentQuantile as quantileOf } from '../../../../shared/core/uncertainty/student';
-import { operation } from '../operations';
+import { studentQuantileInputSchema } from '#shared/contracts/method/student-quantile';
+import { studentQuantile as quantileOf } from '#shared/core/uncertainty/student';
+import { operation } from '../operation';
 
 export const studentQuantile = operation(
   studentQuantileInputSchema,

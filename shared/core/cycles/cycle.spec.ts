@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { Refused } from '../refusal';
+import { type Refused } from '../refusal';
 import { constantSpeedCycle, prepareCycle } from './cycle';
 import { traceOf } from './cycle-input';
 

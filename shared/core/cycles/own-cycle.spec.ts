@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { Refused } from '../refusal';
+import { type Refused } from '../refusal';
 import { checkOwnCycle, type OwnCycleRows } from './own-cycle';
 
 const rows = (given: Partial<OwnCycleRows>): OwnCycleRows => ({

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { constantSpeedCycle, prepareCycle, type CycleTrace } from '../cycles/cycle';
-import { Refused } from '../refusal';
+import { type Refused } from '../refusal';
 import { cycleEnergy, whPerKm } from './cycle-energy';
 import { evaluateCycleEnergy } from './cycle-energy-operation';
 import { energiesOnCycle } from './energies-on-cycle';

@@ -1,5 +1,5 @@
 import { constantSpeedCycle, prepareCycle } from '../cycles/cycle';
-import { Refused } from '../refusal';
+import { type Refused } from '../refusal';
 import { cycleEnergy } from './cycle-energy';
 import {
   combustionConsumption,

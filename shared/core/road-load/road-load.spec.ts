@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { Refused } from '../refusal';
+import { type Refused } from '../refusal';
 import { dragAreaOfF2, f2OfDragArea, roadLoadOf, type RoadLoadReference } from './road-load';
 
 const REFERENCE: RoadLoadReference = {

@@ -3,7 +3,7 @@ import {
   ChangeDetectionStrategy,
   Component,
   DOCUMENT,
-  ElementRef,
+  type ElementRef,
   Injector,
   afterNextRender,
   computed,

@@ -39,7 +39,7 @@ export const cyclesFeature = createFeature({
       ...state,
       loading: { kind: 'failed', problem },
     })),
-    on(CyclesApiActions.retired, CycleUploadPageActions.stored, (state, { cycle }) =>
+    on(CyclesApiActions.retired, CycleUploadPageActions.stored, (state, { cycle }): CyclesState =>
       withCycle(state, cycle),
     ),
     on(CyclesApiActions.refused, (state, { problem }): CyclesState => ({ ...state, refusal: problem })),

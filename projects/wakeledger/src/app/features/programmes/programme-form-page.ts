@@ -108,6 +108,11 @@ export class ProgrammeFormPage implements HoldsChanges {
       untracked(() => this.begin(programmeId));
     });
     effect(() => {
+      const programmeId = this.programmeId();
+      if (programmeId) this.store.dispatch(VariantNamesActions.needed({ programmeId }));
+    });
+    effect(() => this.store.dispatch(FacilityNamesActions.needed()));
+    effect(() => {
       const { opened } = this.page();
       if (opened && opened.id === this.programmeId()) untracked(() => this.show(opened));
     });
@@ -180,8 +185,6 @@ export class ProgrammeFormPage implements HoldsChanges {
 
   private begin(programmeId: string | undefined): void {
     this.store.dispatch(ProgrammeFormPageActions.opened({ programmeId }));
-    this.store.dispatch(FacilityNamesActions.needed());
-    if (programmeId) this.store.dispatch(VariantNamesActions.needed({ programmeId }));
     this.before = undefined;
     fillProgrammeForm(this.form, newProgrammeValues(), this.builder);
     this.enableForMember();

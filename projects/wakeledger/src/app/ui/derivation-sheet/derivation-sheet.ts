@@ -16,7 +16,7 @@ import { derivationText, percent } from './derivation-text';
 })
 export class DerivationSheet {
   protected readonly derivation = inject<Derivation>(DIALOG_DATA);
-  private readonly dialog = inject<DialogRef<void, DerivationSheet>>(DialogRef);
+  private readonly dialog = inject<DialogRef<undefined, DerivationSheet>>(DialogRef);
   private readonly clipboard = inject(Clipboard);
   protected readonly copied = signal<'no' | 'yes' | 'failed'>('no');
 
@@ -42,8 +42,8 @@ export class DerivationOpener {
   private readonly dialog = inject(Dialog);
   private readonly overlay = inject(Overlay);
 
-  open(derivation: Derivation): DialogRef<void, DerivationSheet> {
-    return this.dialog.open<void, Derivation, DerivationSheet>(DerivationSheet, {
+  open(derivation: Derivation): DialogRef<undefined, DerivationSheet> {
+    return this.dialog.open<undefined, Derivation, DerivationSheet>(DerivationSheet, {
       data: derivation,
       ariaLabelledBy: 'wl-derivation-title',
       autoFocus: '#wl-derivation-title',

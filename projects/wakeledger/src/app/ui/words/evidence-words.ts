@@ -1,6 +1,6 @@
-import { BLOCKAGE_METHODS, FACILITY_KINDS } from '#shared/contracts/facilities';
-import { QUANTITIES } from '#shared/contracts/results';
-import { AIR_STATES } from '#shared/contracts/condition';
+import { type BLOCKAGE_METHODS, type FACILITY_KINDS } from '#shared/contracts/facilities';
+import { type QUANTITIES } from '#shared/contracts/results';
+import { type AIR_STATES } from '#shared/contracts/condition';
 
 type Word<Keys extends readonly string[]> = Readonly<Record<Keys[number], string>>;
 

@@ -3,6 +3,7 @@ import { attachmentsModule } from './attachments';
 import { auditModule } from './audit';
 import { cyclesModule } from './cycles';
 import { facilitiesModule } from './facilities';
+import { importsModule } from './imports';
 import { organisationsModule } from './organisations';
 import { programmesModule } from './programmes';
 import { rankingsModule } from './rankings';
@@ -21,5 +22,6 @@ export const MODULES: readonly ServerModule[] = [
   cyclesModule,
   resultsModule,
   attachmentsModule,
+  importsModule,
   rankingsModule,
 ];

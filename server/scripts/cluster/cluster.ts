@@ -99,6 +99,12 @@ export async function startCluster(place: ClusterPlace, options: StartOptions): 
   return { port: options.port, superuserUrl, pid: child.pid ?? 0, ended };
 }
 
+/** Stops the cluster that stands here and forgets all that it held. */
+export async function removeCluster(place: ClusterPlace): Promise<void> {
+  await stopCluster(place, 'immediate');
+  rmSync(place.folder, { recursive: true, force: true });
+}
+
 /** Stops the cluster if one runs here: `fast` ends sessions cleanly, `immediate` is for throwaway ones. */
 export async function stopCluster(place: ClusterPlace, mode: 'fast' | 'immediate'): Promise<void> {
   const pid = postmasterPid(place);

@@ -43,7 +43,7 @@ export function ensurePostgres(say: (line: string) => void): string {
 }
 
 /** What goes before a command that needs root; undefined when root is out of reach. */
-function installerPrefix(): readonly string[] | undefined {
+export function installerPrefix(): readonly string[] | undefined {
   if (process.getuid?.() === 0) return [];
   try {
     execFileSync('sudo', ['-n', 'true'], { stdio: 'ignore' });

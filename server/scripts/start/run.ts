@@ -6,6 +6,7 @@ import {
   clusterExists,
   createCluster,
   freePort,
+  removeCluster,
   startCluster,
   stopCluster,
 } from '../cluster/cluster';
@@ -18,7 +19,15 @@ import { readyLine } from './ready-line';
 import { seedDemoOnce, seedReference } from './seeding';
 import { requirePort, startServer } from './server-process';
 import { takeStartLock } from './start-lock';
-import { clusterFolder, openSecrets, openStateFolder, type Secrets, writePrivate } from './state-folder';
+import {
+  clusterFolder,
+  openSecrets,
+  openStateFolder,
+  type Secrets,
+  STATE_FOLDER,
+  THROWAWAY_FOLDER,
+  writePrivate,
+} from './state-folder';
 
 const say = (line: string) => process.stdout.write(`${line}\n`);
 
@@ -34,7 +43,8 @@ export async function start(words: readonly string[]): Promise<void> {
   });
   let code = 1;
   try {
-    const running = bringUp(process.cwd(), words.includes('--dev'), undo);
+    const manner = { development: words.includes('--dev'), throwaway: words.includes('--throwaway') };
+    const running = bringUp(process.cwd(), manner, undo);
     const first = await Promise.race([stopped, running]);
     const died = first === 'stopped' ? first : await Promise.race([stopped, first.death]);
     if (died === 'stopped') code = 0;
@@ -46,16 +56,22 @@ export async function start(words: readonly string[]): Promise<void> {
   process.exit(code);
 }
 
+interface Manner {
+  readonly development: boolean;
+  /** For the browser tests: an installation of its own that begins with the bare demo every time. */
+  readonly throwaway: boolean;
+}
+
 /** Resolves once everything runs; `death` names the part that ends by itself later. */
 async function bringUp(
   root: string,
-  development: boolean,
+  { development, throwaway }: Manner,
   undo: Undo[],
 ): Promise<{ readonly death: Promise<string> }> {
   const host = process.env['HOST'] ?? '127.0.0.1';
   const port = Number(process.env['PORT'] ?? 4300);
-  const user = clusterUser();
-  const stateFolder = openStateFolder(root, user);
+  const stateName = throwaway ? THROWAWAY_FOLDER : STATE_FOLDER;
+  const stateFolder = openStateFolder(root, stateName, clusterUser());
   undo.push(takeStartLock(stateFolder));
   const secrets = openSecrets(stateFolder);
   await requirePort(host, port);
@@ -64,12 +80,13 @@ async function bringUp(
   const deaths: Promise<string>[] = [];
   let urls: DatabaseUrls;
   if (external === undefined) {
-    const place = clusterPlace(root, stateFolder);
+    const place = clusterPlace(root, stateName, stateFolder);
+    if (throwaway) await removeCluster(place);
     if (!clusterExists(place)) createCluster(place, secrets.superuser);
     const cluster = await startCluster(place, {
       superuserPassword: secrets.superuser,
       port: await freePort(),
-      throwaway: false,
+      throwaway,
     });
     undo.push(() => stopCluster(place, 'fast'));
     deaths.push(cluster.ended.then(() => 'The database'));
@@ -106,12 +123,12 @@ async function bringUp(
   return { death: Promise.race(deaths) };
 }
 
-function clusterPlace(root: string, stateFolder: string): ClusterPlace {
+function clusterPlace(root: string, stateName: string, stateFolder: string): ClusterPlace {
   const bin = ensurePostgres(say);
   // Asked again: the installation may just have created the user.
   const user = clusterUser();
-  openStateFolder(root, user);
-  const { folder, notice } = clusterFolder(root, stateFolder, user);
+  openStateFolder(root, stateName, user);
+  const { folder, notice } = clusterFolder(stateFolder, user);
   if (notice !== undefined) say(notice);
   return { bin, folder, user };
 }

@@ -8,6 +8,9 @@ import type { ClusterUser } from '../cluster/find-postgres';
 /** Everything that belongs to this installation and not to the repository. */
 export const STATE_FOLDER = '.data';
 
+/** The browser tests' own installation: made anew for every run, never the developer's data. */
+export const THROWAWAY_FOLDER = '.data/throwaway';
+
 const secrets = z.object({
   session: z.string(),
   superuser: z.string(),
@@ -20,11 +23,13 @@ const secrets = z.object({
 });
 export type Secrets = z.infer<typeof secrets>;
 
-export function openStateFolder(root: string, clusterUser: ClusterUser | undefined): string {
-  const folder = join(root, STATE_FOLDER);
+export function openStateFolder(root: string, name: string, clusterUser: ClusterUser | undefined): string {
+  const folder = join(root, name);
   mkdirSync(folder, { recursive: true });
   // Another user runs the database below it: may pass through, may not look around.
-  chmodSync(folder, clusterUser === undefined ? 0o700 : 0o711);
+  const mode = clusterUser === undefined ? 0o700 : 0o711;
+  chmodSync(join(root, STATE_FOLDER), mode);
+  chmodSync(folder, mode);
   return folder;
 }
 
@@ -61,15 +66,11 @@ export interface ClusterFolder {
 }
 
 /** `.data/cluster`, unless the user that runs the database cannot get there: then a folder of that user's. */
-export function clusterFolder(
-  root: string,
-  stateFolder: string,
-  user: ClusterUser | undefined,
-): ClusterFolder {
+export function clusterFolder(stateFolder: string, user: ClusterUser | undefined): ClusterFolder {
   if (user === undefined || canPass(user, stateFolder)) {
     return { folder: join(stateFolder, 'cluster'), notice: undefined };
   }
-  const name = `wakeledger-${createHash('sha256').update(root).digest('hex').slice(0, 12)}`;
+  const name = `wakeledger-${createHash('sha256').update(stateFolder).digest('hex').slice(0, 12)}`;
   const folder = join(existsSync(user.home) ? user.home : '/var/tmp', name);
   return {
     folder,

@@ -3,14 +3,20 @@ import { mkdtemp, readFile, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { add, NOTHING, type Tally } from './tally';
+import { ensurePostgres } from '../start/install-postgres';
+import { ensureChromium } from './install-chromium';
 import { testSteps, type Step } from './steps';
 
 /**
  * Runs every check of the project and ends with one line, `N passed, N failed`, summed over all of them.
  * `--quick` leaves out what needs a database or a browser.
  */
-async function main(): Promise<void> {
-  const quick = process.argv.includes('--quick');
+export async function runAllChecks(words: readonly string[]): Promise<void> {
+  const quick = words.includes('--quick');
+  if (!quick) {
+    ensurePostgres((line) => process.stdout.write(`${line}\n`));
+    ensureChromium();
+  }
   const reports = await mkdtemp(join(tmpdir(), 'wakeledger-reports-'));
   let total: Tally = NOTHING;
   const failures: string[] = [];
@@ -61,5 +67,3 @@ async function readReport(path: string): Promise<unknown> {
     return undefined;
   }
 }
-
-await main();

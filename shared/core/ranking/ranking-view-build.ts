@@ -4,7 +4,7 @@ import { figureOf } from '../uncertainty/budget';
 import { excludedResults, type ReducedSet } from '../reduction/reduce';
 import { probabilityLowerOf, type Comparables } from './comparables';
 import { confidenceOf } from './rank';
-import type { RankingChoices } from './ranking-choices';
+import type { RankingChoices, RankingOrder } from './ranking-choices';
 import type { ContextCycle, RankingContext } from './ranking-context';
 import type { RankingInput } from './ranking-input';
 import type { IgnoredChoice, RankingView, ViewGroup, ViewOffers, ViewRow } from './ranking-view';
@@ -64,8 +64,8 @@ export function chosenCycle(cycles: readonly ContextCycle[], key: string): Conte
 }
 
 /** Whether the energies decide the order: they were asked for, and there are some. */
-export function ordersByEnergy(choices: RankingChoices, energy: EnergyStage | null): energy is EnergyStage {
-  return choices.order === 'energy' && energy !== null && energy.order.length > 0;
+export function ordersByEnergy(order: RankingOrder, energy: EnergyStage | null): energy is EnergyStage {
+  return order === 'energy' && energy !== null && energy.order.length > 0;
 }
 
 const places = (order: readonly string[]): ReadonlyMap<string, number> =>
@@ -96,7 +96,7 @@ function rowSources(parts: ViewParts, commonAreaM2: number): RowSources {
 function viewRows(parts: ViewParts, commonAreaM2: number): readonly ViewRow[] {
   const { choices, drag, energy } = parts;
   const sources = rowSources(parts, commonAreaM2);
-  const byEnergy = ordersByEnergy(choices, energy);
+  const byEnergy = ordersByEnergy(choices.order, energy);
   const ranked = new Map(drag.ranking.map((row) => [row.variantId, row]));
   // Those without energy follow in the order by drag area: they are named, not dropped.
   const order = byEnergy
@@ -188,7 +188,7 @@ function ignoredChoices(parts: ViewParts): readonly IgnoredChoice[] {
   if (configuration !== null && !configurationNames(context.variants).includes(configuration)) {
     ignored.push('configuration');
   }
-  if (choices.order === 'energy' && !ordersByEnergy(choices, energy)) ignored.push('order');
+  if (choices.order === 'energy' && !ordersByEnergy(choices.order, energy)) ignored.push('order');
   return ignored;
 }
 
@@ -209,7 +209,7 @@ export function assembleView(parts: ViewParts): RankingView {
   const own = programmeArea(inputs, context);
   const area = chosenArea(choices.area, own, inputs.variants) ?? { areaM2: own.areaM2, of: own.variantName };
   const { programme, referenceAir, referenceReynolds } = reduced.context;
-  const byEnergy = ordersByEnergy(choices, energy);
+  const byEnergy = ordersByEnergy(choices.order, energy);
   const rows = viewRows(parts, area.areaM2);
   const named = (variantId: string) => ({ variantId, name: variantName(names, variantId) });
   return {
@@ -265,7 +265,7 @@ export function buildRankingView(
   const energy =
     prepared && energyStage(drag, configured, prepared, densityKgM3, inputs.programme.rotatingFactor);
   const confidence = choices.confidence ?? confidenceOf(inputs.programme);
-  const groups = groupStage(ordersByEnergy(choices, energy) ? energy.set : drag.set, confidence);
+  const groups = groupStage(ordersByEnergy(choices.order, energy) ? energy.set : drag.set, confidence);
   const names = namesIn(inputs, context);
   return assembleView({
     inputs,

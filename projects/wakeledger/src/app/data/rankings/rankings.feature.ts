@@ -1,0 +1,66 @@
+import { createFeature, createReducer, on } from '@ngrx/store';
+import type { ChoiceQuery } from '#shared/core/ranking/ranking-choices';
+import type { RankingView } from '#shared/core/ranking/ranking-view';
+import { type Loading, NOT_ASKED } from '../loading';
+import type { RankingSources } from './rankings-api';
+import { type RankingMode, RankingPageActions, RankingsApiActions } from './rankings.actions';
+
+export interface RankingsState {
+  readonly programmeId: string;
+  readonly mode: RankingMode;
+  /** The choices as they stand in the address. */
+  readonly address: ChoiceQuery;
+  readonly loading: Loading;
+  /** For those who compute: everything that any choice needs. */
+  readonly sources: RankingSources | null;
+  /** For the others: the server's view of the latest choices. */
+  readonly given: RankingView | null;
+}
+
+const initialState: RankingsState = {
+  programmeId: '',
+  mode: 'is-given',
+  address: {},
+  loading: NOT_ASKED,
+  sources: null,
+  given: null,
+};
+
+export const rankingsFeature = createFeature({
+  name: 'rankings',
+  reducer: createReducer(
+    initialState,
+    on(RankingPageActions.opened, (state, { programmeId, mode, address }): RankingsState => {
+      const same = state.programmeId === programmeId && state.mode === mode;
+      return {
+        programmeId,
+        mode,
+        address,
+        loading: { kind: 'loading' },
+        sources: same ? state.sources : null,
+        given: same ? state.given : null,
+      };
+    }),
+    on(RankingPageActions.addressChanged, (state, { address }): RankingsState => ({
+      ...state,
+      address,
+      loading: state.mode === 'is-given' ? { kind: 'loading' } : state.loading,
+    })),
+    on(RankingPageActions.retryPressed, (state): RankingsState => ({
+      ...state,
+      loading: { kind: 'loading' },
+    })),
+    on(RankingsApiActions.sourcesLoaded, (state, { programmeId, sources }): RankingsState =>
+      programmeId === state.programmeId ? { ...state, sources, loading: { kind: 'ready' } } : state,
+    ),
+    on(RankingsApiActions.viewLoaded, (state, { programmeId, view }): RankingsState =>
+      programmeId === state.programmeId ? { ...state, given: view, loading: { kind: 'ready' } } : state,
+    ),
+    on(
+      RankingsApiActions.sourcesFailed,
+      RankingsApiActions.viewFailed,
+      (state, { programmeId, problem }): RankingsState =>
+        programmeId === state.programmeId ? { ...state, loading: { kind: 'failed', problem } } : state,
+    ),
+  ),
+});

@@ -1,0 +1,127 @@
+import type { RankingView, ViewContribution, ViewRow, ViewStep } from '#shared/core/ranking/ranking-view';
+import type { BudgetShare, Derivation, DerivationStep } from '../../../ui/derivation-sheet/derivation';
+import type { QuantityFormat } from '../../../ui/quantity/quantity-format';
+import { evidenceWords } from '../evidence-line';
+import type { FigureKind } from '../figure-kind';
+import { cautionWords, contributionWords, stepWords } from '../method-words';
+import { commonAreaStep, energySteps, ownAreaStep } from './figure-steps';
+
+/** Digits of amounts of uncertainty [m²]. */
+const AMOUNT_DIGITS = 4;
+
+export function budgetShares(
+  contributions: readonly ViewContribution[],
+  format: QuantityFormat,
+): readonly BudgetShare[] {
+  return contributions.map((each) => ({
+    label: contributionWords(each),
+    share: each.shareOfVariance,
+    u: format.text(Math.abs(each.amountM2), 'drag-area', { digits: AMOUNT_DIGITS }),
+  }));
+}
+
+function outlineStep(
+  { step, dragAreaM2 }: ViewStep,
+  row: ViewRow,
+  format: QuantityFormat,
+  last: boolean,
+): DerivationStep {
+  return {
+    title: stepWords(step),
+    result: format.text(dragAreaM2, 'drag-area', { digits: 4 }),
+    formulaMathml: '<mrow><msub><mi>C</mi><mi>D</mi></msub><mi>A</mi></mrow>',
+    formulaText: 'C_D·A',
+    values: '',
+    source: $localize`the raw readings are kept with the result, for those who may see them`,
+    method: `${step}@1`,
+    assumed: [],
+    cautions: last ? row.cautions.map(cautionWords) : [],
+  };
+}
+
+/** The end of a figure's derivation, from the drag area on: the same for everybody. */
+export function closingSteps(
+  kind: FigureKind,
+  row: ViewRow,
+  view: RankingView,
+  format: QuantityFormat,
+): readonly DerivationStep[] {
+  if (kind === 'common-area') return [commonAreaStep(row, view, format)];
+  if (kind === 'own-area') return [ownAreaStep(row, format)];
+  return kind === 'energy' ? energySteps(row, view, format) : [];
+}
+
+/** The figure at the head of the sheet, and what it is. */
+export function headOf(
+  kind: FigureKind,
+  row: ViewRow,
+  view: RankingView,
+  format: QuantityFormat,
+): Pick<Derivation, 'figure' | 'summary'> {
+  const value = (number: number, of: 'drag-area' | 'coefficient' | 'energy-per-distance'): string =>
+    format.value(number, of);
+  const basis = view.basis === 'zero-yaw' ? $localize`zero yaw` : $localize`wind-averaged`;
+  const freedom = row.figure.effectiveDegreesOfFreedom;
+  const k = format.value(row.figure.coverageFactor, 'number', { digits: 2 });
+  const coverage =
+    freedom === null
+      ? $localize`U = ${k}:K: u`
+      : $localize`U = ${k}:K: u, ${Math.floor(freedom)}:NU: degrees of freedom`;
+  const from = $localize`${row.name}:VARIANT:, opened by ${evidenceWords(row)}:EVIDENCE:`;
+  switch (kind) {
+    case 'drag-area':
+      return {
+        figure: {
+          value: value(row.figure.dragAreaM2, 'drag-area'),
+          expandedU: value(row.figure.expandedUncertaintyM2, 'drag-area'),
+          unit: 'm²',
+        },
+        summary: $localize`${from}:FROM:. Carried figure, ${basis}:BASIS:. ${coverage}:COVERAGE:.`,
+      };
+    case 'common-area':
+      return {
+        figure: {
+          value: value(row.onCommonArea.value, 'coefficient'),
+          expandedU: value(row.onCommonArea.expandedUncertainty, 'coefficient'),
+          unit: '',
+        },
+        summary: $localize`${from}:FROM:. Drag coefficient on the common area of ${format.text(view.commonAreaM2, 'area')}:AREA:, ${basis}:BASIS:. ${coverage}:COVERAGE:.`,
+      };
+    case 'own-area':
+      return {
+        figure: {
+          value: value(row.onOwnArea.value, 'coefficient'),
+          expandedU: value(row.onOwnArea.expandedUncertainty, 'coefficient'),
+          unit: '',
+        },
+        summary: $localize`${from}:FROM:. Drag coefficient on its own frontal area of ${format.text(row.onOwnArea.areaM2, 'area')}:AREA:, ${basis}:BASIS:. ${coverage}:COVERAGE:.`,
+      };
+    case 'energy':
+      return {
+        figure: {
+          value: value(row.energy?.wheelEnergyWhPerKm ?? 0, 'energy-per-distance'),
+          expandedU: value(row.energy?.expandedUncertaintyWhPerKm ?? 0, 'energy-per-distance'),
+          unit: format.display('energy-per-distance').unit,
+        },
+        summary: $localize`${from}:FROM:. Energy at the wheel on ${view.cycle?.name ?? ''}:CYCLE:, from the zero-yaw drag area; an estimate.`,
+      };
+  }
+}
+
+/** The derivation as it may be shown without the raw evidence: steps by name and result, and the budget. */
+export function outlineDerivation(
+  kind: FigureKind,
+  row: ViewRow,
+  view: RankingView,
+  format: QuantityFormat,
+): Derivation {
+  const steps = row.steps.map((step, index) =>
+    outlineStep(step, row, format, index === row.steps.length - 1),
+  );
+  return {
+    ...headOf(kind, row, view, format),
+    steps: [...steps, ...closingSteps(kind, row, view, format)],
+    budget: budgetShares(row.contributions, format),
+    budgetNote: $localize`Shares of the variance of the drag area.`,
+  };
+}

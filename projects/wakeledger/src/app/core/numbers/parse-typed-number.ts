@@ -18,7 +18,7 @@ export interface Accepted {
 }
 
 const SPACES = /[\s\u00a0\u2009\u202f'’]/g;
-const MINUSES = /^[-\u2212\u2013\u2012\ufe63\uff0d]/;
+const MINUSES = /[\u2212\u2013\u2012\ufe63\uff0d]/g;
 const SHAPE = /^[-+]?(\d[\d.,]*|[.,]\d+)([eE][-+]?\d{1,3})?$/;
 const GROUPS = /^\d{1,3}([.,]\d{3})+$/;
 

@@ -45,6 +45,8 @@ export class NumberField implements ControlValueAccessor, OnInit, Validator {
   readonly unit = input('');
   /** Off where a choice of units is projected in its place (`unitChoice`). */
   readonly unitBeside = input(true);
+  /** For a cell of a table, whose head says what it is: label and range are there, but not seen. */
+  readonly bare = input(false);
   readonly hint = input<string>();
   readonly minimum = input<number>();
   readonly maximum = input<number>();

@@ -1,0 +1,34 @@
+import { formatForInput, formatNumber, formatSigned } from './format-number';
+import { NUMBER_LOCALES } from './number-locale';
+import { parseTypedNumber } from './parse-typed-number';
+
+describe('a written number', () => {
+  it('has fixed digits, a real minus and threes from 10 000 on', () => {
+    expect(formatNumber(0.5942, 3, 'en-GB')).toBe('0.594');
+    expect(formatNumber(-12345.6, 1, 'en-GB')).toBe('\u221212,345.6');
+    expect(formatNumber(1234.5, 1, 'en-GB')).toBe('1234.5');
+  });
+
+  it('follows the person’s locale, apart from the language', () => {
+    expect(formatNumber(12345.6, 1, 'de-DE')).toBe('12.345,6');
+    expect(formatNumber(12345.6, 1, 'fr-FR')).toBe('12\u202f345,6');
+  });
+
+  it('gives a zero no sign, whatever it was rounded from', () => {
+    expect(formatNumber(-0.0001, 3, 'en-GB')).toBe('0.000');
+    expect(formatSigned(0.0001, 3, 'en-GB')).toBe('0.000');
+  });
+
+  it('writes the sign of a change', () => {
+    expect(formatSigned(0.0166, 4, 'en-GB')).toBe('+0.0166');
+    expect(formatSigned(-0.005, 3, 'en-GB')).toBe('\u22120.005');
+  });
+
+  it('is read back from an input without loss in every locale', () => {
+    for (const locale of NUMBER_LOCALES) {
+      for (const value of [0.123456789, -17.25, 1500.5, 98765.4321, 3e-7]) {
+        expect(parseTypedNumber(formatForInput(value, locale))).toEqual({ kind: 'number', value });
+      }
+    }
+  });
+});

@@ -43,6 +43,11 @@ export const routes: Routes = [
         loadChildren: () => import('./features/variants/variants.routes').then((file) => file.routes),
       },
       {
+        path: 'programmes/:programmeId/results',
+        canActivate: [needs('results.read')],
+        loadChildren: () => import('./features/results/results.routes').then((file) => file.routes),
+      },
+      {
         path: 'facilities',
         canActivate: [needs('facilities.read')],
         loadChildren: () => import('./features/facilities/facilities.routes').then((file) => file.routes),

@@ -1,4 +1,4 @@
-import { isTable, pastedPoints } from './pasted-points';
+import { decimalMarkOf, isTable, pastedPoints, readCell } from './pasted-points';
 
 describe('pastedPoints', () => {
   it('reads rows without a header as yaw and value', () => {
@@ -36,5 +36,27 @@ describe('isTable', () => {
     ['0.274\n0.275', true],
   ])('says of %j: %s', (text, table) => {
     expect(isTable(text)).toBe(table);
+  });
+});
+
+describe('decimalMarkOf', () => {
+  it('lets one clear cell decide for those that could be read in two ways', () => {
+    const points = pastedPoints('0\t539.612\n5\t541.1');
+    expect(decimalMarkOf(points)).toBe('.');
+    expect(readCell('539.612', '.')).toBe(539.612);
+    expect(decimalMarkOf(pastedPoints('0\t539,612\n5\t541,1'))).toBe(',');
+  });
+
+  it('is unclear where every cell can be read in two ways', () => {
+    expect(decimalMarkOf(pastedPoints('0\t539.612\n5\t541.118'))).toBe('unclear');
+  });
+
+  it('takes thousands for what they are beside the other mark', () => {
+    expect(decimalMarkOf(pastedPoints('0\t1.234\n5\t0,5'))).toBe(',');
+    expect(readCell('1.234', ',')).toBe(1234);
+  });
+
+  it('needs no mark for whole numbers', () => {
+    expect(decimalMarkOf(pastedPoints('0\t539\n5\t541'))).toBe('either');
   });
 });

@@ -1,3 +1,5 @@
+import { parseTypedNumber } from '../../../core/numbers/parse-typed-number';
+
 /** The columns that a pasted table may hold, in the order of the form. */
 export const POINT_COLUMNS = ['yawDeg', 'value', 's', 'n', 'speedKmh', 'tareN'] as const;
 export type PointColumn = (typeof POINT_COLUMNS)[number];
@@ -52,4 +54,33 @@ function typedPoint(cells: readonly string[], columns: readonly (PointColumn | u
     if (column !== undefined && cell !== '') point[column] = cell;
   });
   return point;
+}
+
+export type DecimalMark = '.' | ',';
+
+/**
+ * Which mark a pasted table writes its decimals with. One cell that can be read in one way only decides for all; where
+ * none does, it is unclear and has to be asked.
+ */
+export function decimalMarkOf(points: readonly TypedPoint[]): DecimalMark | 'either' | 'unclear' {
+  let open = false;
+  for (const text of points.flatMap((point) => Object.values(point))) {
+    const typed = parseTypedNumber(text);
+    if (typed.kind === 'ambiguous') open = true;
+    if (typed.kind !== 'number' || !/[.,]/.test(text)) continue;
+    const last = Math.max(text.lastIndexOf('.'), text.lastIndexOf(','));
+    const isDecimal = !Number.isInteger(typed.value) || text.replace(/[^.,]/g, '').length === 1;
+    const mark = text[last] === ',' ? ',' : '.';
+    return isDecimal ? mark : mark === ',' ? '.' : ',';
+  }
+  return open ? 'unclear' : 'either';
+}
+
+/** A cell read with the mark that the table writes its decimals with; null where it is no number. */
+export function readCell(text: string, mark: DecimalMark | 'either'): number | null {
+  const typed = parseTypedNumber(text);
+  if (typed.kind === 'number') return typed.value;
+  if (typed.kind !== 'ambiguous') return null;
+  const decimalMeant = mark === 'either' || text.includes(mark);
+  return decimalMeant ? typed.readings.decimal : typed.readings.grouped;
 }

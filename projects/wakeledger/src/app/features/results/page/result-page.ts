@@ -1,0 +1,299 @@
+import { DatePipe } from '@angular/common';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  Injector,
+  computed,
+  effect,
+  inject,
+  input,
+  runInInjectionContext,
+  signal,
+  untracked,
+} from '@angular/core';
+import { RouterLink } from '@angular/router';
+import { Store } from '@ngrx/store';
+import { traceOfReduction } from '#shared/core/derivation/trace-of-figure';
+import type { ApiProblem } from '../../../core/api/api-problem';
+import { Undo } from '../../../core/editing/undo';
+import { Preferences } from '../../../core/preferences/preferences';
+import { Session } from '../../../core/session/session';
+import { FacilityNamesActions } from '../../../data/facilities/facilities.actions';
+import { facilitiesFeature } from '../../../data/facilities/facilities.feature';
+import { ResultPageActions } from '../../../data/results/results.actions';
+import { resultsFeature } from '../../../data/results/results.feature';
+import { VariantNamesActions } from '../../../data/variants/variants.actions';
+import { variantsFeature } from '../../../data/variants/variants.feature';
+import { Busy } from '../../../ui/busy/busy';
+import { compareConditions } from '../../../ui/condition/compare-conditions';
+import { askInDialog } from '../../../ui/confirm-dialog/confirm-dialog';
+import { DerivationOpener } from '../../../ui/derivation-sheet/derivation-sheet';
+import { derivationFromTrace } from '../../../ui/derivation-sheet/from-trace';
+import { ProblemBanner } from '../../../ui/problem-banner/problem-banner';
+import { QuantityFormat } from '../../../ui/quantity/quantity-format';
+import { FACILITY_KIND_WORDS } from '../../../ui/words/evidence-words';
+import { CHECK_INKS, CHECK_SHAPES, CHECK_WORDS, checkOf, reynoldsWords } from '../result-check';
+import { AttachmentLine } from './attachment-line';
+import { pointRows, pointColumns } from './point-rows';
+import { rawLines } from './raw-lines';
+import { YawChart } from './yaw-chart';
+
+const VERDICT_WORDS = {
+  same: $localize`● the same`,
+  differs: $localize`▲ differs`,
+  'not-stated': $localize`▲ not stated, counts as different`,
+  'not-compared': $localize`not compared`,
+} as const;
+
+/** What does this result say? Raw values, derivation, checks, attachment, adoption and withdrawal. */
+@Component({
+  selector: 'wl-result-page',
+  imports: [AttachmentLine, Busy, DatePipe, ProblemBanner, RouterLink, YawChart],
+  templateUrl: './result-page.html',
+  styleUrl: './result-page.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ResultPage {
+  readonly programmeId = input.required<string>();
+  readonly resultId = input.required<string>();
+
+  private readonly store = inject(Store);
+  private readonly undo = inject(Undo);
+  private readonly injector = inject(Injector);
+  private readonly format = inject(QuantityFormat);
+  private readonly preferences = inject(Preferences);
+  private readonly derivations = inject(DerivationOpener);
+  private readonly session = inject(Session);
+
+  protected readonly mayAdopt = computed(() => this.session.may('results.adopt'));
+  protected readonly mayWithdraw = computed(() => this.session.may('results.withdraw'));
+  protected readonly loading = this.store.selectSignal(resultsFeature.selectLoading);
+  private readonly results = this.store.selectSignal(resultsFeature.selectResults);
+  private readonly adoptions = this.store.selectSignal(resultsFeature.selectAdoptions);
+  private readonly standing = this.store.selectSignal(resultsFeature.selectStanding);
+  private readonly programme = this.store.selectSignal(resultsFeature.selectProgramme);
+  private readonly reduced = this.store.selectSignal(resultsFeature.selectReduced);
+  private readonly deed = this.store.selectSignal(resultsFeature.selectDeed);
+  private readonly variants = this.store.selectSignal(variantsFeature.selectById);
+  private readonly facilities = this.store.selectSignal(facilitiesFeature.selectById);
+
+  protected readonly busy = computed(() => this.deed().kind === 'under-way');
+  protected readonly refusal = signal<ApiProblem | undefined>(undefined);
+  protected readonly loadingProblem = computed(() => {
+    const loading = this.loading();
+    return loading.kind === 'failed' ? loading.problem : undefined;
+  });
+  protected readonly result = computed(() => this.results().find(({ id }) => id === this.resultId()));
+  protected readonly variant = computed(() => this.variants().get(this.result()?.variantId ?? ''));
+  protected readonly facility = computed(() => {
+    const found = this.facilities().get(this.result()?.facilityId ?? '');
+    return found && { ...found, words: FACILITY_KIND_WORDS[found.kind] };
+  });
+  protected readonly reduction = computed(() => {
+    const result = this.result();
+    return result?.withdrawn ? undefined : this.reduced().reductions.get(this.resultId());
+  });
+  protected readonly figure = computed(() => {
+    const output = this.reduction()?.output;
+    if (!output) return undefined;
+    const { zeroYaw } = output;
+    return {
+      value: this.format.value(zeroYaw.dragAreaM2, 'drag-area'),
+      u: this.format.value(zeroYaw.expandedUncertaintyM2, 'drag-area'),
+      reynolds: reynoldsWords(output.reynolds, this.format),
+      mach: this.format.value(output.mach, 'number', { digits: 2 }),
+      blockage:
+        output.blockageRatio === null
+          ? undefined
+          : this.format.text(output.blockageRatio * 100, 'percent', { digits: 1 }),
+      windAveraged:
+        output.windAveragedDragAreaM2 === null
+          ? undefined
+          : this.format.text(output.windAveragedDragAreaM2, 'drag-area'),
+    };
+  });
+  protected readonly check = computed(() => {
+    const result = this.result();
+    if (!result) return undefined;
+    const { context, refused, refusal } = this.reduced();
+    const check = checkOf(
+      result,
+      {
+        context,
+        reduction: this.reduction(),
+        refused: refused.get(result.id),
+        unchecked: refusal?.detail,
+      },
+      { format: this.format, locale: this.preferences.numberLocale() },
+    );
+    return {
+      ...check,
+      words: CHECK_WORDS[check.state],
+      shape: CHECK_SHAPES[check.state],
+      ink: CHECK_INKS[check.state],
+    };
+  });
+  protected readonly raw = computed(() => {
+    const result = this.result();
+    return result ? rawLines(result, this.format) : [];
+  });
+  protected readonly points = computed(() => {
+    const result = this.result();
+    return result
+      ? { columns: pointColumns(result), rows: pointRows(result, this.reduction(), this.format) }
+      : { columns: [], rows: [] };
+  });
+  protected readonly isSweep = computed(
+    () => new Set(this.result()?.points.map(({ yawDeg }) => yawDeg)).size > 1,
+  );
+  protected readonly condition = computed(() => {
+    const result = this.result();
+    const programme = this.programme();
+    if (!result || !programme) return [];
+    return compareConditions(
+      programme.referenceCondition,
+      result.condition,
+      this.preferences.numberLocale(),
+    ).map((row) => ({
+      ...row,
+      says: VERDICT_WORDS[row.verdict],
+      ink: row.verdict === 'same' ? 'wl-moss' : row.verdict === 'not-compared' ? '' : 'wl-rust',
+    }));
+  });
+  /** The result that the variant rests on now, if it is another one. */
+  protected readonly replaced = computed(() => {
+    const result = this.result();
+    const adoptedId = result && this.standing().get(result.variantId)?.resultId;
+    return adoptedId === undefined || adoptedId === result?.id
+      ? undefined
+      : this.results().find(({ id }) => id === adoptedId);
+  });
+  protected readonly history = computed(() => {
+    const variantId = this.result()?.variantId;
+    return this.adoptions()
+      .filter((each) => each.variantId === variantId)
+      .map((each) => ({
+        ...each,
+        name: this.results().find(({ id }) => id === each.resultId)?.name,
+      }));
+  });
+
+  constructor() {
+    effect(() => {
+      const programmeId = this.programmeId();
+      untracked(() => {
+        this.store.dispatch(ResultPageActions.opened({ programmeId }));
+        this.store.dispatch(VariantNamesActions.needed({ programmeId }));
+        this.store.dispatch(FacilityNamesActions.needed());
+      });
+    });
+    effect(() => {
+      const deed = this.deed();
+      untracked(() => {
+        if (deed.kind === 'none' || deed.kind === 'under-way') return;
+        this.store.dispatch(ResultPageActions.outcomeSeen());
+        if (deed.kind === 'refused') this.onRefused(deed.problem);
+        if (deed.kind === 'adopted') {
+          this.undo.say(
+            deed.adoption.resultId === undefined
+              ? $localize`The adoption is released; the newest result counts again.`
+              : $localize`${this.result()?.name ?? ''}:NAME: is adopted.`,
+          );
+        }
+        if (deed.kind === 'withdrawn') this.undo.say($localize`${deed.result.name}:NAME: is withdrawn.`);
+      });
+    });
+  }
+
+  protected openDerivation(): void {
+    const reduction = this.reduction();
+    const { context } = this.reduced();
+    const result = this.result();
+    if (!reduction || !context || !result) return;
+    const names = new Map(
+      [...this.variants().values(), ...this.facilities().values(), ...this.results()].map(
+        ({ id, name }) => [id, name] as const,
+      ),
+    );
+    const trace = traceOfReduction(reduction, context, 'zero-yaw', names);
+    const summary = $localize`${result.name}:RESULT:, ${this.variant()?.name ?? ''}:VARIANT:, ${this.facility()?.name ?? ''}:FACILITY:, tested ${result.testDate}:DATE:. At the programme’s reference, zero yaw; k = ${this.format.value(trace.coverageFactor, 'number', { digits: 2 })}:K:.`;
+    this.derivations.open(derivationFromTrace(trace, summary, this.format));
+  }
+
+  protected async adopt(): Promise<void> {
+    const result = this.result();
+    if (!result) return;
+    const replaced = this.replaced();
+    const variant = this.variant()?.name ?? '';
+    const comment = await this.ask({
+      title: $localize`Adopt ${result.name}:RESULT: for ${variant}:VARIANT:?`,
+      detail: replaced
+        ? $localize`It replaces ${replaced.name}:OTHER:, tested ${replaced.testDate}:DATE:, for everybody. The earlier choice stays in the history.`
+        : $localize`From now on ${variant}:VARIANT: rests on it for everybody, whatever newer result comes in.`,
+      confirm: $localize`Adopt`,
+      cancel: $localize`Cancel`,
+      reasonLabel: $localize`Why this result (at least three characters)`,
+    });
+    if (comment !== undefined) this.order(result.variantId, comment, result.id);
+  }
+
+  protected async release(): Promise<void> {
+    const result = this.result();
+    if (!result) return;
+    const comment = await this.ask({
+      title: $localize`Release the adoption of ${result.name}:RESULT:?`,
+      detail: $localize`Until another result is adopted, the newest usable one counts for ${this.variant()?.name ?? ''}:VARIANT:.`,
+      confirm: $localize`Release`,
+      cancel: $localize`Cancel`,
+      reasonLabel: $localize`Why it is released (at least three characters)`,
+    });
+    if (comment !== undefined) this.order(result.variantId, comment);
+  }
+
+  protected async withdraw(): Promise<void> {
+    const result = this.result();
+    if (!result) return;
+    const reason = await this.ask({
+      title: $localize`Withdraw ${result.name}:RESULT:?`,
+      detail: result.adopted
+        ? $localize`It is the adopted result of ${this.variant()?.name ?? ''}:VARIANT:: withdrawing it releases the adoption too. It stays readable and counts for nothing. This cannot be undone; a withdrawn result is entered anew.`
+        : $localize`It stays readable and counts for nothing. This cannot be undone; a withdrawn result is entered anew.`,
+      confirm: $localize`Withdraw`,
+      cancel: $localize`Keep it`,
+      severe: true,
+      reasonLabel: $localize`Why it is withdrawn (at least three characters)`,
+    });
+    if (reason === undefined) return;
+    this.refusal.set(undefined);
+    this.store.dispatch(
+      ResultPageActions.withdrawalConfirmed({
+        programmeId: this.programmeId(),
+        resultId: result.id,
+        reason,
+      }),
+    );
+  }
+
+  private order(variantId: string, comment: string, resultId?: string): void {
+    this.refusal.set(undefined);
+    const expectedCurrentResultId = this.standing().get(variantId)?.resultId;
+    this.store.dispatch(
+      ResultPageActions.adoptionConfirmed({
+        programmeId: this.programmeId(),
+        order: { variantId, comment, resultId, expectedCurrentResultId },
+      }),
+    );
+  }
+
+  /** A colleague chose meanwhile: show what stands now, and let the person decide again. */
+  private onRefused(problem: ApiProblem): void {
+    this.refusal.set(problem);
+    if (problem.code === 'conflict' || problem.code === 'wrong-state') {
+      this.store.dispatch(ResultPageActions.opened({ programmeId: this.programmeId() }));
+    }
+  }
+
+  private ask(question: Parameters<typeof askInDialog>[0]): Promise<string | undefined> {
+    return runInInjectionContext(this.injector, () => askInDialog(question));
+  }
+}

@@ -1,0 +1,45 @@
+import { csvText } from '../../core/export/csv';
+import { CHECK_WORDS } from './result-check';
+import type { ResultRow } from './result-rows';
+
+/** The rows that are shown, in their order, as a file: plain numbers, units in the heads. */
+export function resultsCsv(rows: readonly ResultRow[]): string {
+  return csvText([
+    [
+      $localize`Result`,
+      $localize`Variant`,
+      $localize`Facility`,
+      $localize`Tested`,
+      $localize`Quantity`,
+      $localize`Value at zero yaw`,
+      $localize`Unit of the value`,
+      $localize`Yaw angles`,
+      $localize`Speed in km/h`,
+      $localize`Scale`,
+      $localize`C_D·A at the reference in m²`,
+      $localize`U in m²`,
+      $localize`Check`,
+      $localize`Why`,
+      $localize`Adopted`,
+      $localize`Session`,
+    ],
+    ...rows.map((row) => [
+      row.name,
+      row.variant,
+      row.facility,
+      row.testDate,
+      row.quantity,
+      row.value,
+      row.unit,
+      row.angles,
+      row.speedKmh,
+      row.scale,
+      row.dragAreaM2,
+      row.expandedUM2,
+      CHECK_WORDS[row.check.state],
+      row.check.reasons.join('; '),
+      row.adopted ? $localize`adopted` : '',
+      row.session,
+    ]),
+  ]);
+}

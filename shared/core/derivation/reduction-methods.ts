@@ -272,4 +272,14 @@ export const REDUCTION_METHODS = {
     source: 'definition',
     validity: 'The choice of area is arbitrary and never changes the order.',
   },
+  ownArea: {
+    id: 'own-area-coefficient',
+    version: 1,
+    title: 'Coefficient on its own frontal area',
+    formulaMathml: m.math(m.sub('C', 'D'), m.equals, m.frac(CdA, m.sub('A', 'own'))),
+    formulaText: 'C_D = C_D·A/A_own',
+    source: 'definition; method section 3',
+    validity:
+      'The uncertainty of the frontal area enters: −C_D·A/A²·u(A) under its own key. The order can differ from that by drag area.',
+  },
 } as const satisfies { readonly [name: string]: Method };

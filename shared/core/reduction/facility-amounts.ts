@@ -24,18 +24,21 @@ function biasAmount({ facility }: ResultParts, dragAreaM2: number): number {
 
 /**
  * A source's own U/k stands for repeatability, installation and session; if the facility's bias is in it, the bias keeps its
- * key and the stated amount is √(u² − u_bias²), 0 if that is negative (method section 9).
+ * key and the stated amount is √(u² − u_bias²), 0 if that is negative (method section 9). Of several zero-yaw points each has
+ * its own amount, at its own drag area; like every other key theirs is their mean.
  */
-function statedAmount(parts: ResultParts, points: readonly ReducedPoint[], dragAreaM2: number): Amount[] {
+function statedAmount(parts: ResultParts, points: readonly ReducedPoint[]): Amount[] {
   const { result } = parts;
   const { stated } = result;
   if (stated == null) return [];
   const uValue = needed(stated.expandedU, 'stated.expandedU') / neededPositive(stated.k, 'stated.k');
-  const perValue = points.reduce((sum, point) => sum + point.perValue, 0) / points.length;
-  const u = uValue * perValue;
-  const bias = stated.includesFacilityBias ? biasAmount(parts, dragAreaM2) : 0;
-  const own = Math.sqrt(Math.max(0, u * u - bias * bias));
-  return [amount(`stated:${result.id}`, own, stated.degreesOfFreedom)];
+  const ownAmounts = points.map(({ perValue, dragAreaM2 }) => {
+    const u = uValue * perValue;
+    const bias = stated.includesFacilityBias ? biasAmount(parts, dragAreaM2) : 0;
+    return Math.sqrt(Math.max(0, u * u - bias * bias));
+  });
+  const mean = ownAmounts.reduce((sum, own) => sum + own, 0) / points.length;
+  return [amount(`stated:${result.id}`, mean, stated.degreesOfFreedom)];
 }
 
 /**
@@ -94,6 +97,6 @@ export function facilityAmounts(
   dragAreaM2: number,
 ): Amount[] {
   const bias = amount(biasKey(parts.facility), biasAmount(parts, dragAreaM2));
-  if (parts.result.stated != null) return [bias, ...statedAmount(parts, points, dragAreaM2)];
+  if (parts.result.stated != null) return [bias, ...statedAmount(parts, points)];
   return [bias, repeatabilityAmount(parts, points), ...sessionAndInstallation(parts, dragAreaM2)];
 }

@@ -29,7 +29,7 @@ export function repeatabilityOf(
 ): ReducedPoint['repeatability'] {
   const n = readingsOf(point);
   if (point.s != null) {
-    return { amountM2: (point.s / Math.sqrt(n)) * perValue, degreesOfFreedom: n > 1 ? n - 1 : Infinity };
+    return { amountM2: (point.s / Math.sqrt(n)) * perValue, degreesOfFreedom: n - 1 };
   }
   if (facility.repeatabilityURelative == null) return null;
   return {

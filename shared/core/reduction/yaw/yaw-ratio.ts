@@ -1,4 +1,4 @@
-import { ANGLE_TOLERANCE_DEG, DEFAULT_WIND_SPEED_MS, KMH_PER_MS } from '../../constants';
+import { AMOUNT_FLOOR_M2, ANGLE_TOLERANCE_DEG, DEFAULT_WIND_SPEED_MS, KMH_PER_MS } from '../../constants';
 import { refuse } from '../../refusal';
 import { evenInterpolant } from './even-interpolant';
 import { windAverage, windNodes, type WindNode } from './wind-average';
@@ -29,6 +29,9 @@ export interface YawOutput {
 
 const orNull = (degreesOfFreedom: number): number | null =>
   degreesOfFreedom === Infinity ? null : degreesOfFreedom;
+
+/** Rounding error is no amount: without wind every ratio is 1, whatever a reading is changed by. */
+const withoutRounding = (amount: number): number => (Math.abs(amount) < AMOUNT_FLOOR_M2 ? 0 : amount);
 
 function checkSweep(points: readonly FoldedPoint[], windRatio: number, nodes: readonly WindNode[]): void {
   if (points.length < 3) {
@@ -69,7 +72,7 @@ export function evaluateYaw(input: YawInput): YawOutput {
     ratioOf(values.map((value, i) => (i === index ? value + change : value)));
 
   const parts = folded.map((point, i) => ({
-    amount: point.uM2 === 0 ? 0 : (ratioWith(i, point.uM2) - ratioWith(i, -point.uM2)) / 2,
+    amount: withoutRounding((ratioWith(i, point.uM2) - ratioWith(i, -point.uM2)) / 2),
     degreesOfFreedom: point.degreesOfFreedom,
   }));
   const [zero, ...others] = parts;

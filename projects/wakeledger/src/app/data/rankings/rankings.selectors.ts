@@ -3,7 +3,11 @@ import { choicesOfQuery, type ChoiceName, type RankingChoices } from '#shared/co
 import { confidenceOf } from '#shared/core/ranking/rank';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
 import { assembleView, chosenCycle, ordersByEnergy } from '#shared/core/ranking/ranking-view-build';
-import { chosenAir, configuredVariants } from '#shared/core/ranking/ranking-view-input';
+import {
+  chosenAir,
+  configuredVariants,
+  type ConfiguredVariant,
+} from '#shared/core/ranking/ranking-view-input';
 import { namesIn } from '#shared/core/ranking/ranking-view-names';
 import {
   cycleStage,
@@ -12,8 +16,13 @@ import {
   evidenceStage,
   groupStage,
   reduceStage,
+  type DragStage,
 } from '#shared/core/ranking/ranking-view-stages';
 import { Refused } from '#shared/core/refusal';
+import type { PreparedCycle } from '#shared/core/cycles/cycle';
+import type { RankingContext } from '#shared/core/ranking/ranking-context';
+import type { RankingInput } from '#shared/core/ranking/ranking-input';
+import type { ReducedSet } from '#shared/core/reduction/reduce';
 import { rankingsFeature } from './rankings.feature';
 
 const { selectAddress, selectSources, selectGiven, selectMode } = rankingsFeature;
@@ -167,4 +176,26 @@ export const selectRankingView = createSelector(
 /** Why the method refuses to rank at all, for those who compute. */
 export const selectRankingRefusal = createSelector(selectReduced, (reduced) =>
   reduced instanceof Refused ? reduced : null,
+);
+
+/** What the derivation of a figure is made from, by those who hold the inputs; null for the others. */
+export interface DerivationSources {
+  readonly inputs: RankingInput;
+  readonly context: RankingContext;
+  readonly reduced: ReducedSet;
+  readonly drag: DragStage;
+  readonly configured: readonly ConfiguredVariant[];
+  readonly cycle: PreparedCycle | null;
+}
+
+export const selectDerivationSources = createSelector(
+  selectSources,
+  selectReduced,
+  selectDrag,
+  selectConfigured,
+  selectCycle,
+  (sources, reduced, drag, configured, cycle): DerivationSources | null =>
+    sources && reduced && !(reduced instanceof Refused) && drag && configured
+      ? { ...sources, reduced, drag, configured, cycle: cycle && cycle.prepared }
+      : null,
 );

@@ -9,7 +9,7 @@ import { commonAreaStep, energySteps, ownAreaStep } from './figure-steps';
 /** Digits of amounts of uncertainty [m²]. */
 const AMOUNT_DIGITS = 4;
 
-export function budgetShares(
+function budgetShares(
   contributions: readonly ViewContribution[],
   format: QuantityFormat,
 ): readonly BudgetShare[] {
@@ -18,6 +18,14 @@ export function budgetShares(
     share: each.shareOfVariance,
     u: format.text(Math.abs(each.amountM2), 'drag-area', { digits: AMOUNT_DIGITS }),
   }));
+}
+
+/** The budget of the drag area that every figure of a row stands on. */
+export function sharesOfRow(row: ViewRow, format: QuantityFormat): Pick<Derivation, 'budget' | 'budgetNote'> {
+  return {
+    budget: budgetShares(row.contributions, format),
+    budgetNote: $localize`Shares of the variance of the drag area.`,
+  };
 }
 
 function outlineStep(
@@ -121,7 +129,6 @@ export function outlineDerivation(
   return {
     ...headOf(kind, row, view, format),
     steps: [...steps, ...closingSteps(kind, row, view, format)],
-    budget: budgetShares(row.contributions, format),
-    budgetNote: $localize`Shares of the variance of the drag area.`,
+    ...sharesOfRow(row, format),
   };
 }

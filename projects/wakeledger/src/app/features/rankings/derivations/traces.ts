@@ -1,0 +1,64 @@
+import type { DerivationStep as TracedStep, Derivation as Trace } from '#shared/core/derivation/derivation';
+import type { KeyNames } from '#shared/core/derivation/key-labels';
+import { traceOfEnergy } from '#shared/core/derivation/trace-of-energy';
+import { traceOfReduction } from '#shared/core/derivation/trace-of-figure';
+import type { RankingView, ViewRow } from '#shared/core/ranking/ranking-view';
+import type { DerivationSources } from '../../../data/rankings/rankings.selectors';
+import type { DerivationStep } from '../../../ui/derivation-sheet/derivation';
+import { decimalsOf } from '../../../ui/derivation-sheet/from-trace';
+import type { QuantityFormat } from '../../../ui/quantity/quantity-format';
+import type { FigureKind } from '../figure-kind';
+
+/** Whatever a key of a budget can belong to, by its id. */
+function keyNames({ inputs, context }: DerivationSources): KeyNames {
+  const named = [
+    ...inputs.facilities,
+    ...(inputs.models ?? []),
+    ...inputs.variants,
+    ...inputs.results,
+    ...context.sessions,
+  ];
+  return new Map(named.flatMap(({ id, name }) => (name == null ? [] : [[id, name] as const])));
+}
+
+/** The trace from the raw value to the drag area that a row stands on. */
+export function dragTrace(
+  kind: FigureKind,
+  row: ViewRow,
+  view: RankingView,
+  sources: DerivationSources,
+): Trace | null {
+  const resultId = row.evidence.at(-1)?.resultId;
+  const reduction = sources.reduced.reductions.find(({ output }) => output.resultId === resultId);
+  if (!reduction) return null;
+  // Energy stands on the zero-yaw drag area, as the regulations do.
+  const basis = kind === 'energy' ? 'zero-yaw' : view.basis;
+  return traceOfReduction(reduction, sources.reduced.context, basis, keyNames(sources));
+}
+
+/** From the zero-yaw drag area on to the energy at the wheel. */
+export function energyTrace(row: ViewRow, sources: DerivationSources): Trace | null {
+  const { configured, drag, cycle, reduced, inputs } = sources;
+  const variant = configured.find(({ input }) => input.id === row.variantId)?.input;
+  const zeroYaw = drag.zeroYaw.get(row.variantId);
+  if (!variant || !zeroYaw || !cycle) return null;
+  const { densityKgM3: airDensityKgM3 } = reduced.context.referenceAir;
+  const { rotatingFactor } = inputs.programme;
+  return traceOfEnergy({ variant, zeroYaw }, { cycle, airDensityKgM3, rotatingFactor }, keyNames(sources));
+}
+
+/** A traced step as the sheet shows it, in the person's marks. */
+export function shownStep(step: TracedStep, format: QuantityFormat): DerivationStep {
+  const value = format.value(step.value, 'number', { digits: decimalsOf(step.value) });
+  return {
+    title: step.title,
+    result: step.unit === '' ? value : `${value}\u202f${step.unit}`,
+    formulaMathml: step.formulaMathml,
+    formulaText: step.formulaText,
+    values: step.values,
+    source: step.source,
+    method: `${step.methodId}@${step.version}`,
+    assumed: step.assumed,
+    cautions: step.cautions,
+  };
+}

@@ -104,6 +104,11 @@ export default tseslint.config(
     rules: { '@typescript-eslint/no-non-null-assertion': 'off', 'max-lines': 'off' },
   },
   {
+    // A component that a test draws around what it tests is scenery.
+    files: [`${CLIENT}/**/*.spec.ts`],
+    rules: { '@angular-eslint/prefer-on-push-component-change-detection': 'off' },
+  },
+  {
     // These tools read a default export.
     files: ['**/*.config.ts', 'server/testing/global-*.ts'],
     rules: { 'no-restricted-syntax': 'off' },

@@ -3,6 +3,7 @@ import { HttpTestingController, provideHttpClientTesting } from '@angular/common
 import { TestBed } from '@angular/core/testing';
 import { Router, type UrlTree, provideRouter } from '@angular/router';
 import { Store, createAction, createReducer, createSelector, on, props, provideStore } from '@ngrx/store';
+import type { Permission } from '#shared/access/permissions';
 import { OTHER_ORGANISATION_ID, signedInAs } from '../../../testing/members';
 import { forgetOnMemberChange } from './forget-on-member-change';
 import { Session } from './session';
@@ -90,7 +91,7 @@ describe('the session', () => {
 
   it('opens a page to those who hold any of its permissions', async () => {
     await load(signedInAs('stylist'));
-    const open = (...permissions: Parameters<typeof needs>): unknown =>
+    const open = (...permissions: readonly Permission[]): unknown =>
       TestBed.runInInjectionContext(() => needs(...permissions)({} as never, {} as never));
     expect(open('ranking-inputs.read', 'ranking-view.read')).toBe(true);
     expect(open('results.read')).not.toBe(true);

@@ -83,18 +83,16 @@ describe('the sign-in page', () => {
   it('says how long to wait after too many attempts', async () => {
     const host = await open();
     signIn(host);
-    http
-      .expectOne('/api/v1/session/password')
-      .flush(
-        {
-          type: '/problems/too-many-attempts',
-          title: 'x',
-          status: 429,
-          code: 'too-many-attempts',
-          retryAfterS: 40,
-        },
-        { status: 429, statusText: 'Too Many Requests' },
-      );
+    http.expectOne('/api/v1/session/password').flush(
+      {
+        type: '/problems/too-many-attempts',
+        title: 'x',
+        status: 429,
+        code: 'too-many-attempts',
+        retryAfterS: 40,
+      },
+      { status: 429, statusText: 'Too Many Requests' },
+    );
     await settle();
     expect(host.querySelector('[role="alert"]')?.textContent).toContain('Try again in 40 seconds.');
   });

@@ -7,9 +7,12 @@ export type WithoutNulls<Row> = {
 
 /** Leaves out the properties that are NULL: in the product a missing figure is absent, never null and never 0. */
 export function withoutNulls<Row extends object>(row: Row): WithoutNulls<Row> {
-  return Object.fromEntries(
-    Object.entries(row).filter(([, value]) => value !== null && value !== undefined),
-  ) as WithoutNulls<Row>;
+  // A plain loop: lists hold tens of thousands of rows.
+  const kept: { [column: string]: unknown } = {};
+  for (const [column, value] of Object.entries(row)) {
+    if (value !== null && value !== undefined) kept[column] = value;
+  }
+  return kept as WithoutNulls<Row>;
 }
 
 /** The other way: every property that may be absent becomes NULL, so that an update clears what was cleared. */

@@ -2,7 +2,6 @@ import { and, asc, eq, sql, type SQL } from 'drizzle-orm';
 import type { Result, ResultFields } from '#shared/contracts/results';
 import type { Work } from '../../http/context';
 import { nextNumbers } from '../../db/counters';
-import { grouped } from '../../db/grouped';
 import type { Tx } from '../../db/pools';
 import { present } from '../../db/returned-row';
 import { testSessions } from '../../db/tables/facilities';
@@ -62,14 +61,7 @@ async function select(tx: Tx, where: SQL | undefined): Promise<readonly Result[]
     .where(where)
     .orderBy(asc(results.entrySequence));
   if (rows.length === 0) return [];
-  // Joined, not listed by id: a programme can hold more results than a statement can hold parameters.
-  const points = await tx
-    .select({ point: resultPoints })
-    .from(resultPoints)
-    .innerJoin(results, eq(results.id, resultPoints.resultId))
-    .where(where)
-    .orderBy(asc(resultPoints.position));
-  const pointsOf = grouped(points, ({ point }) => point.resultId);
+  const points = await pointsOf(tx, where);
   const withdrawals = await withdrawalsOf(tx, where);
   const adopted = new Set(
     [...(await currentAdoptions(tx, [...new Set(rows.map(({ result }) => result.variantId))])).values()].map(
@@ -79,7 +71,7 @@ async function select(tx: Tx, where: SQL | undefined): Promise<readonly Result[]
   return rows.map(({ result, session, enteredBy }) => ({
     ...rawValues(result),
     ...(session === null ? {} : { session }),
-    points: (pointsOf.get(result.id) ?? []).map(({ point }) => pointOf(point)),
+    points: [...(points.get(result.id) ?? [])],
     enteredBy,
     adopted: adopted.has(result.id),
     withdrawn: withdrawals.get(result.id),
@@ -103,9 +95,27 @@ function rawValues(row: typeof results.$inferSelect) {
   };
 }
 
-function pointOf(row: typeof resultPoints.$inferSelect): Result['points'][number] {
-  const { organisationId: _organisationId, id: _id, resultId: _resultId, position: _position, ...rest } = row;
-  return withoutNulls(rest);
+/**
+ * The points of the results that a condition picks. Joined, not listed by id: a programme can hold more results than a
+ * statement can hold parameters. Each result’s points arrive as one value, which is far quicker than a row for each.
+ */
+async function pointsOf(tx: Tx, where: SQL | undefined): Promise<ReadonlyMap<string, Result['points']>> {
+  const fields = sql.join(
+    POINT_COLUMNS.map((column) => sql`${sql.raw(`'${column}'`)}, ${resultPoints[column]}`),
+    sql`, `,
+  );
+  const rows = await tx
+    .select({
+      resultId: resultPoints.resultId,
+      points: sql<
+        Result['points']
+      >`jsonb_agg(jsonb_strip_nulls(jsonb_build_object(${fields})) order by ${resultPoints.position})`,
+    })
+    .from(resultPoints)
+    .innerJoin(results, eq(results.id, resultPoints.resultId))
+    .where(where)
+    .groupBy(resultPoints.resultId);
+  return new Map(rows.map(({ resultId, points }) => [resultId, points]));
 }
 
 /** All results of a programme in the order in which they were entered, withdrawn ones included. */

@@ -48,6 +48,11 @@ export const routes: Routes = [
         loadChildren: () => import('./features/results/results.routes').then((file) => file.routes),
       },
       {
+        path: 'programmes/:programmeId/import',
+        canActivate: [needs('imports.run')],
+        loadChildren: () => import('./features/imports/imports.routes').then((file) => file.routes),
+      },
+      {
         path: 'facilities',
         canActivate: [needs('facilities.read')],
         loadChildren: () => import('./features/facilities/facilities.routes').then((file) => file.routes),

@@ -1,0 +1,13 @@
+import type { BODY_SHAPES } from '#shared/contracts/variants';
+
+export const BODY_SHAPE_WORDS: Readonly<Record<(typeof BODY_SHAPES)[number], string>> = {
+  hatch: $localize`Hatch`,
+  liftback: $localize`Liftback`,
+  saloon: $localize`Saloon`,
+  estate: $localize`Estate`,
+  crossover: $localize`Crossover`,
+  coupe: $localize`Coupé`,
+  van: $localize`Van`,
+  pickup: $localize`Pick-up`,
+  other: $localize`Other`,
+};

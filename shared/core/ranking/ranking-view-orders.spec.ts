@@ -34,6 +34,15 @@ describe('noticeOf', () => {
     ]);
   });
 
+  it('names no cause that would speak against what it shall explain', () => {
+    const light = [variant('a', 9, 1500), variant('b', 2, 2000)];
+    expect(noticeOf('energy', light, ['b', 'a'])?.inversions[0]).toMatchObject({
+      direction: 'behind',
+      extreme: null,
+    });
+    expect(noticeOf('own-area', light, ['b', 'a'])?.inversions[0]?.extreme).toBe('smallest');
+  });
+
   it('says that a variant comes ahead of those before it', () => {
     const notice = noticeOf('own-area', [variant('a', 2), variant('b', 3), variant('c', 1)], ['c', 'a', 'b']);
     expect(notice?.inversions[0]).toMatchObject({ variantId: 'c', direction: 'ahead', extreme: null });

@@ -13,13 +13,23 @@ export interface OrderedVariant {
   readonly cause: number | null;
 }
 
-function extremeOf(variant: OrderedVariant, others: readonly OrderedVariant[]): ViewInversion['extreme'] {
+/**
+ * The cause where it explains the direction, else null. A small area makes a high coefficient, a large mass a high energy:
+ * that puts a variant behind; the contrary puts it ahead.
+ */
+function extremeOf(
+  order: ViewNotice['order'],
+  behind: boolean,
+  variant: OrderedVariant,
+  others: readonly OrderedVariant[],
+): ViewInversion['extreme'] {
   const causes = others.map(({ cause }) => cause);
   const own = variant.cause;
   if (own === null) return null;
-  if (causes.every((cause) => cause !== null && own < cause)) return 'smallest';
-  if (causes.every((cause) => cause !== null && own > cause)) return 'largest';
-  return null;
+  if ((order === 'own-area') === behind) {
+    return causes.every((cause) => cause !== null && own < cause) ? 'smallest' : null;
+  }
+  return causes.every((cause) => cause !== null && own > cause) ? 'largest' : null;
 }
 
 /**
@@ -56,7 +66,7 @@ export function noticeOf(
     const most = sizes.reduce((a, b) => Math.max(a, b), 0);
     if (most === 0) break;
     const index = sizes.indexOf(most);
-    inversions.push(inversionAt(index, placed, contradictions));
+    inversions.push(inversionAt(order, index, placed, contradictions));
   }
   if (inversions.length === 0) return null;
   return { order, inversions: inversions.slice(0, NAMED), more: Math.max(0, inversions.length - NAMED) };
@@ -64,6 +74,7 @@ export function noticeOf(
 
 /** Takes one variant's contradictions out of the account, as a sentence's worth of data. */
 function inversionAt(
+  order: ViewNotice['order'],
   index: number,
   placed: readonly { readonly variant: OrderedVariant; readonly at: number }[],
   contradictions: readonly Set<number>[],
@@ -85,6 +96,6 @@ function inversionAt(
     direction: behind ? 'behind' : 'ahead',
     value: variant.value,
     others: others.map(({ variantId, name, value }) => ({ variantId, name, value })),
-    extreme: extremeOf(variant, others),
+    extreme: extremeOf(order, behind, variant, others),
   };
 }

@@ -28,17 +28,20 @@ export class RankingChart {
   );
   protected readonly options = computed((): EChartsCoreOption => {
     const { rows } = this.view();
-    const bars = rows.flatMap(({ figure }, index): readonly (readonly [number, number] | null)[] => [
-      [figure.dragAreaM2 - figure.expandedUncertaintyM2, index],
-      [figure.dragAreaM2 + figure.expandedUncertaintyM2, index],
-      null,
+    // A line through three points and a gap: one bar of U a variant, its disc in the middle.
+    const end = { symbol: 'rect', symbolSize: [1.5, 10] };
+    const bars = rows.flatMap(({ figure }, index) => [
+      { value: [figure.dragAreaM2 - figure.expandedUncertaintyM2, index], ...end },
+      { value: [figure.dragAreaM2, index], symbol: 'circle', symbolSize: 10 },
+      { value: [figure.dragAreaM2 + figure.expandedUncertaintyM2, index], ...end },
+      { value: [null, null] },
     ]);
     return {
       grid: { left: 8, right: 24, top: 8, bottom: 44, containLabel: true },
       xAxis: {
         type: 'value',
         scale: true,
-        name: $localize`Drag area C_D·A in m²`,
+        name: $localize`Drag area in m²`,
         nameLocation: 'middle',
         nameGap: 28,
         axisLabel: { formatter: (value: number) => this.format.value(value, 'drag-area', { digits: 2 }) },
@@ -49,21 +52,7 @@ export class RankingChart {
         data: rows.map(({ rank, name }) => `${rank}  ${name}`),
       },
       series: [
-        // A line through pairs with gaps between: one bar of U a variant.
-        {
-          type: 'line',
-          data: bars.map((point) => point ?? [null, null]),
-          connectNulls: false,
-          symbol: 'rect',
-          symbolSize: [1.5, 10],
-          showSymbol: true,
-          lineStyle: { width: 1.5 },
-        },
-        {
-          type: 'scatter',
-          data: rows.map(({ figure }, index) => [figure.dragAreaM2, index]),
-          symbolSize: 10,
-        },
+        { type: 'line', data: bars, connectNulls: false, showSymbol: true, lineStyle: { width: 1.5 } },
       ],
     };
   });

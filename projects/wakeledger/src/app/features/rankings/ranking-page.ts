@@ -103,6 +103,9 @@ export class RankingPage {
     ),
   );
 
+  protected readonly reynolds = computed(() =>
+    this.format.value((this.view()?.referenceReynolds ?? 0) / 1e6, 'number', { digits: 1 }),
+  );
   protected readonly notices = computed(() =>
     (this.view()?.notices ?? []).map((notice) => ({
       order: notice.order,

@@ -8,10 +8,10 @@ export function listWords(parts: readonly string[]): string {
   return `${parts.slice(0, -1).join(', ')} ${LIST_END} ${parts.at(-1)}`;
 }
 
-/** A probability as it is read: two digits, never 0 or 1 for what is neither. */
+/** A probability as it is read: two digits, and never certainty. */
 export function probabilityWords(probability: number, format: QuantityFormat): string {
-  if (probability > 0.995 && probability < 1) return `> ${format.value(0.99, 'number', { digits: 2 })}`;
-  if (probability < 0.005 && probability > 0) return `< ${format.value(0.01, 'number', { digits: 2 })}`;
+  if (probability > 0.995) return `> ${format.value(0.99, 'number', { digits: 2 })}`;
+  if (probability < 0.005) return `< ${format.value(0.01, 'number', { digits: 2 })}`;
   return format.value(probability, 'number', { digits: 2 });
 }
 

@@ -6,12 +6,7 @@ let count = 0;
 @Component({
   selector: 'wl-field',
   template: `
-    <label [attr.for]="id"
-      >{{ label() }}
-      @if (optional()) {
-        <span class="optional" i18n>, if known</span>
-      }
-    </label>
+    <label [attr.for]="id">{{ words() }}</label>
     <ng-content />
     @if (hint(); as words) {
       <span class="hint" [id]="hintId">{{ words }}</span>

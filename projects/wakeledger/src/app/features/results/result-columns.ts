@@ -55,7 +55,7 @@ export function resultColumns(
       headerName: $localize`C_D·A at the reference, m²`,
       headerComponentParams: { innerHeaderComponent: DragAreaHead },
       ...number,
-      width: 150,
+      width: 215,
       cellRenderer: (params: ICellRendererParams<ResultRow>) => figureCell(params, format),
     },
     { field: 'quantity', headerName: $localize`Quantity`, filter: 'agTextColumnFilter', width: 140 },

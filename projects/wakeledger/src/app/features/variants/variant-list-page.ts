@@ -1,3 +1,4 @@
+import { DatePipe } from '@angular/common';
 import {
   ChangeDetectionStrategy,
   Component,
@@ -30,7 +31,7 @@ import { AREA_METHOD_WORDS, BODY_SHAPE_WORDS, configurationWords, standingArea }
 /** Which variants does this programme compare? Each with its picture, dimensions, frontal area and configurations. */
 @Component({
   selector: 'wl-variant-list-page',
-  imports: [Busy, EmptyState, Picture, ProblemBanner, RouterLink],
+  imports: [Busy, DatePipe, EmptyState, Picture, ProblemBanner, RouterLink],
   templateUrl: './variant-list-page.html',
   styleUrl: './variant-list-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

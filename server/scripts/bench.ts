@@ -3,9 +3,10 @@ import { coreEnergy } from './bench/core-energy';
 import { coreLowest } from './bench/core-lowest';
 import { coreRanking } from './bench/core-ranking';
 import { imports } from './bench/imports';
+import { rankings } from './bench/rankings';
 
 /** All parts in the order in which they run; `npm run bench -- core-energy` runs the named ones only. */
-const PARTS: readonly BenchPart[] = [coreEnergy, coreRanking, coreLowest, imports];
+const PARTS: readonly BenchPart[] = [coreEnergy, coreRanking, coreLowest, rankings, imports];
 
 const wanted = process.argv.slice(2);
 const unknown = wanted.filter((name) => !PARTS.some((part) => part.name === name));

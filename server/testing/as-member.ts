@@ -30,7 +30,7 @@ export interface CallInput {
 export class ApiMember {
   constructor(
     private readonly caller: Caller,
-    private readonly cookie: string | undefined,
+    readonly cookie: string | undefined,
     readonly organisation?: TestOrganisation,
     readonly userId?: string,
   ) {}

@@ -31,6 +31,7 @@ describe('What is wrong with an input is told apart', () => {
   it.each<readonly [string, Json | string, string, string]>([
     ['air', '{', 'not-json', 'input'],
     ['air', '[]', 'malformed-input', 'input'],
+    ['air', 'null', 'malformed-input', 'input'],
     ['air', { ...air, temperature: 20 }, 'malformed-input', 'temperature'],
     ['air', { ...air, temperatureC: '20' }, 'malformed-input', 'temperatureC'],
     ['air', '{"temperatureC":1e999,"pressurePa":1e5,"relativeHumidity":0.5}', 'not-a-number', 'temperatureC'],
@@ -91,6 +92,12 @@ describe('What is wrong with an input is told apart', () => {
       { ...cycle, cycle: { timeS: [0, 1], speedKmh: [0, 1], unit: 's' } },
       'malformed-input',
       'cycle.unit',
+    ],
+    [
+      'cycle-energy',
+      { ...cycle, cycle: { timeS: [0, 1], speedKmh: [0, 1], constantSpeedKmh: 9 } },
+      'malformed-input',
+      'cycle.constantSpeedKmh',
     ],
     [
       'budget',
@@ -161,6 +168,24 @@ describe('The command', () => {
       expect(call([one?.operation ?? ''], input)).toEqual({ stdout: inside.stdout, stderr: '', status: 0 });
     },
   );
+
+  it('waits for an input that comes late, also where reading at once would fail', () => {
+    // What touches its standard input turns the pipe that it shares with the command into one that does not wait.
+    const parent = `require('node:child_process').spawn(process.execPath, [${JSON.stringify(launcher)}, 'air'], { stdio: 'inherit' });
+      process.stdin.pause();`;
+    const late = `setTimeout(() => process.stdout.write('{"state":"un-gtr-15"}'), 2000)`;
+    const { stdout, stderr } = spawnSync(
+      'sh',
+      ['-c', '"$0" -e "$1" | "$0" -e "$2"', process.execPath, late, parent],
+      {
+        encoding: 'utf8',
+      },
+    );
+    expect({ stderr, air: JSON.parse(stdout) as unknown }).toMatchObject({
+      stderr: '',
+      air: { densityKgM3: 1.189 },
+    });
+  });
 
   it('refuses on standard error with exit code 2', () => {
     const { stdout, stderr, status } = call(['air'], '{"temperatureC":20,"pressurePa":101325}');

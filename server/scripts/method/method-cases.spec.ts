@@ -1,5 +1,6 @@
 import { run } from './run';
 import { differences, type CaseTolerance } from './testing/compare';
+import independent from './testing/independent-cases.json';
 import fixture from './testing/method-cases.json';
 
 /** A worked case: computed apart from this code, in another language, to 12 digits. */
@@ -13,7 +14,7 @@ interface MethodCase {
   readonly tolerance?: CaseTolerance | null;
 }
 
-const cases = fixture.cases as unknown as readonly MethodCase[];
+const cases = [...fixture.cases, ...independent.cases] as unknown as readonly MethodCase[];
 const refusedCode = ({ expected }: MethodCase): string | undefined =>
   (expected['refusal'] as { readonly code: string } | undefined)?.code;
 const titled = (list: readonly MethodCase[]) => list.map((one) => [one.id, one.about, one] as const);

@@ -35,10 +35,11 @@ function likeliestBranch(branches: readonly (readonly Issue[])[], value: unknown
   return [...branches].sort((a, b) => distance(a) - distance(b))[0] ?? [];
 }
 
-function codeOf(issue: Issue, value: unknown): string {
+/** Null is the same as absent, but for the whole input: that is no object. */
+function codeOf(issue: Issue, value: unknown, path: Path): string {
   if (OWN_CODES.has(issue.message)) return issue.message;
   if (issue.code === 'invalid_type' || issue.code === 'invalid_value' || issue.code === 'invalid_union') {
-    if (value == null) return 'missing-input';
+    if (value == null && path.length > 0) return 'missing-input';
     return typeof value === 'number' && !Number.isFinite(value) ? 'not-a-number' : 'malformed-input';
   }
   if (issue.code === 'too_small' && issue.origin === 'number') {
@@ -55,7 +56,7 @@ function refusalOf(issue: Issue, root: unknown, above: Path = []): Refused {
     if (inner !== undefined) return refusalOf(inner, root, path);
   }
   const where = pathOf(issue.code === 'unrecognized_keys' ? [...path, issue.keys[0] ?? ''] : path);
-  const code = codeOf(issue, value);
+  const code = codeOf(issue, value, path);
   return new Refused(code, where, code === 'missing-input' ? `${where} is missing.` : issue.message);
 }
 

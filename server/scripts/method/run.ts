@@ -1,3 +1,4 @@
+import * as z from 'zod';
 import { Refused, refuse } from '#shared/core/refusal';
 import { NOT_YET_AVAILABLE, OPERATION_NAMES, isOperationName, loadOperation } from './operations';
 import type { Operation } from './operation';
@@ -31,9 +32,8 @@ async function operationOf(name: string): Promise<Operation> {
   );
 }
 
-async function schemaOf(operation: Operation): Promise<unknown> {
-  const { toJSONSchema } = await import('zod');
-  return toJSONSchema(operation.schema, { target: 'draft-2020-12', io: 'input' });
+function schemaOf(operation: Operation): unknown {
+  return z.toJSONSchema(operation.schema, { target: 'draft-2020-12', io: 'input' });
 }
 
 /** Numbers that no JSON can hold are no answer: an input that leads there is refused. @throws {Refused} not-a-number */
@@ -46,19 +46,22 @@ function checkNumbers(value: unknown, where = 'output'): void {
   }
 }
 
-async function answerTo(args: readonly string[], readText: () => string): Promise<string> {
+/** Where the input comes from; asked only when an operation needs one. */
+type ReadText = () => string | Promise<string>;
+
+async function answerTo(args: readonly string[], readText: ReadText): Promise<string> {
   const [name = '', option] = args;
   if (name === '--list') return OPERATION_NAMES.map((one) => `${one}\n`).join('');
   const operation = await operationOf(name);
-  if (option === '--schema') return printed(await schemaOf(operation));
-  const input = readInput(operation.schema, parseJson(readText()));
+  if (option === '--schema') return printed(schemaOf(operation));
+  const input = readInput(operation.schema, parseJson(await readText()));
   const output = operation.evaluate(input);
   checkNumbers(output);
   return printed(output);
 }
 
 /** One call of the machine entry. A refusal is an answer, any other failure is thrown. */
-export async function run(args: readonly string[], readText: () => string): Promise<Answer> {
+export async function run(args: readonly string[], readText: ReadText): Promise<Answer> {
   try {
     return { stdout: await answerTo(args, readText), stderr: '', exitCode: 0 };
   } catch (error) {

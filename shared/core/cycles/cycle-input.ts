@@ -4,8 +4,18 @@ import { constantSpeedCycle, type CycleTrace } from './cycle';
 /** A cycle as it is named or given: a built-in one, one constant speed, or rows of one's own. */
 export type CycleInput =
   | string
-  | { readonly constantSpeedKmh: number; readonly durationS: number }
-  | { readonly timeS: readonly number[]; readonly speedKmh: readonly number[] };
+  | {
+      readonly constantSpeedKmh: number;
+      readonly durationS: number;
+      readonly timeS?: null | undefined;
+      readonly speedKmh?: null | undefined;
+    }
+  | {
+      readonly timeS: readonly number[];
+      readonly speedKmh: readonly number[];
+      readonly constantSpeedKmh?: null | undefined;
+      readonly durationS?: null | undefined;
+    };
 
 /** Finds a built-in cycle by its name. The core holds none: whoever calls brings the collection. */
 export type BuiltInCycles = (name: string) => CycleTrace | undefined;
@@ -19,5 +29,5 @@ export function traceOf(input: CycleInput, builtIn: BuiltInCycles): CycleTrace {
   if (typeof input === 'string') {
     return builtIn(input) ?? refuse('unknown-cycle', 'cycle', `There is no built-in cycle “${input}”.`);
   }
-  return 'constantSpeedKmh' in input ? constantSpeedCycle(input.constantSpeedKmh, input.durationS) : input;
+  return input.constantSpeedKmh == null ? input : constantSpeedCycle(input.constantSpeedKmh, input.durationS);
 }

@@ -19,7 +19,10 @@ test('it is ready while the database stands at this version’s migrations', asy
 });
 
 test('it is not ready, and says so as a Problem, when a migration is missing', async () => {
-  await api.database.query('superuser', 'update drizzle.__drizzle_migrations set created_at = created_at - 1');
+  await api.database.query(
+    'superuser',
+    'update drizzle.__drizzle_migrations set created_at = created_at - 1',
+  );
   const answer = await supertest(api.server).get('/readyz');
   expect(answer.status).toBe(503);
   expect(answer.headers['content-type']).toMatch('application/problem+json');

@@ -8,7 +8,7 @@ import { TEMPLATE, type TestCluster, roleUrl, runStatements } from './test-clust
 export interface TestDatabase {
   readonly url: (role: DatabaseRole) => string;
   readonly superuserUrl: string;
-  /** Runs one statement as a role, on a connection of its own. */
+  /** Runs one statement as a role; statements do not share a session. */
   readonly query: <Row extends pg.QueryResultRow>(
     role: DatabaseRole | 'superuser',
     text: string,
@@ -26,6 +26,7 @@ export async function createTestDatabase(): Promise<TestDatabase> {
   ]);
   const superuserUrl = cluster.superuserUrl.replace(/\/postgres$/, `/${name}`);
   const url = (role: DatabaseRole) => roleUrl(cluster, role, name);
+  const pools = new Map<DatabaseRole | 'superuser', pg.Pool>();
   return {
     url,
     superuserUrl,
@@ -34,15 +35,15 @@ export async function createTestDatabase(): Promise<TestDatabase> {
       text: string,
       values: readonly unknown[] = [],
     ) => {
-      const client = new pg.Client({ connectionString: role === 'superuser' ? superuserUrl : url(role) });
-      await client.connect();
-      try {
-        return (await client.query<Row>(text, [...values])).rows;
-      } finally {
-        await client.end();
-      }
+      const connectionString = role === 'superuser' ? superuserUrl : url(role);
+      const pool = pools.get(role) ?? new pg.Pool({ connectionString, max: 2 });
+      pools.set(role, pool);
+      return (await pool.query<Row>(text, [...values])).rows;
     },
-    drop: () => runStatements(cluster.superuserUrl, [`DROP DATABASE ${name} WITH (FORCE)`]),
+    drop: async () => {
+      await Promise.all([...pools.values()].map((pool) => pool.end()));
+      await runStatements(cluster.superuserUrl, [`DROP DATABASE ${name} WITH (FORCE)`]);
+    },
   };
 }
 

@@ -6,15 +6,39 @@ import type { Column, TenantTable } from './catalogue';
 export type Row = Readonly<Record<string, unknown>>;
 export type RowsByTable = ReadonlyMap<string, Row>;
 
+const IMPORT = {
+  options: null,
+  encoding: 'utf-8',
+  delimiter: ';',
+  decimal: null,
+  mapping: JSON.stringify({ columns: [], constants: [], variants: [], facilities: [] }),
+  summary: JSON.stringify({
+    encoding: 'utf-8',
+    delimiter: ';',
+    blankLines: 0,
+    notes: [],
+    columns: [],
+    mappingRemembered: false,
+  }),
+};
+
 /** Values that no rule can guess: what a JSON column must hold so that the product can read the row. */
 const BY_HAND: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
-  programmes: { confidence: 0.9, reference_air: '{}', reference_condition: '{}', common_area: null },
+  programmes: { confidence: 0.9, reference_air: '{}', reference_condition: '{}', common_area: '{"kind":"fixed","areaM2":2}' },
   facilities: { usual_condition: '{}', blockage: null },
-  configurations: { road_load_reference: null, electric: null, combustion: null, sales_share: 1 },
+  configurations: {
+    rolling_resistance: 0.008,
+    road_load_reference: null,
+    electric: null,
+    combustion: null,
+    sales_share: 1,
+  },
+  variants: { body_shape: 'hatch' },
+  frontal_areas: { area_m2: 2, u_m2: 0.01 },
   attachments: { content: Buffer.from('x'), bytes: 1, media_type: 'image/png', purpose: 'picture' },
   results: { air: null, stated: null, condition: '{}', scale: 1 },
   result_points: { yaw_deg: 0 },
-  imports: { header: '["a"]', mapping: null, options: null, summary: null, failure: null },
+  imports: { header: '["a"]', ...IMPORT, failure: null },
   import_rows: { cells: '["a"]', reasons: '[]', fixes: '{}' },
   cycles: {
     time_s: [0, 1],

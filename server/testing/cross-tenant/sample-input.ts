@@ -5,12 +5,23 @@ type Schema = Readonly<Record<string, unknown>>;
 /** Chooses a value for a property by its name, or leaves it to the rules below. */
 export type Chooser = (property: string) => unknown;
 
-/** A valid value of a contract's schema, as full as it can be: optional fields are filled too. */
-export function sampleOf(type: z.ZodType, choose: Chooser): unknown {
-  const value = sample(z.toJSONSchema(type, { io: 'input' }) as Schema, '', choose);
+/**
+ * A valid value of a contract's schema. Full: optional fields are filled too. Lean: only what is required, and what the
+ * chooser has a value for.
+ */
+export function sampleOf(type: z.ZodType, choose: Chooser, extent: 'full' | 'lean' = 'full'): unknown {
+  const schema = z.toJSONSchema(type, { io: 'input' }) as Schema;
+  const value = sample(extent === 'full' ? schema : leanSchema(schema, choose), '', choose);
   const parsed = type.safeParse(value);
   if (!parsed.success) throw new Error(`no valid sample could be made: ${parsed.error.message}`);
   return value;
+}
+
+function leanSchema(schema: Schema, choose: Chooser): Schema {
+  const required = (schema['required'] ?? []) as readonly string[];
+  const properties = Object.entries((schema['properties'] ?? {}) as Readonly<Record<string, Schema>>);
+  const kept = properties.filter(([name]) => required.includes(name) || choose(name) !== undefined);
+  return { ...schema, properties: Object.fromEntries(kept) };
 }
 
 function sample(schema: Schema, property: string, choose: Chooser): unknown {

@@ -1,6 +1,7 @@
 /**
  * Starts the machine entry of the method from a bundle, because compiling some sixty files at every call would take longer than
- * the answer may. The bundle is kept beside the packages and made again when any file that went into it has changed.
+ * the answer may. The bundle is kept beside the packages and made again when any file that went into it has changed. Who may not
+ * write there gets the same answer from a bundle of their own, made for the one call.
  */
 import { mkdirSync, readFileSync, renameSync, statSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
@@ -34,6 +35,7 @@ function writeWhole(path, text) {
   renameSync(draft, path);
 }
 
+/** Makes the bundle and keeps it if it may. @returns the address to load it from */
 async function makeBundle() {
   const { build } = await import('esbuild');
   const made = await build({
@@ -51,10 +53,16 @@ async function makeBundle() {
     const { mtimeMs, size } = statSync(join(root, path));
     return [path, mtimeMs, size];
   });
-  mkdirSync(folder, { recursive: true });
-  writeWhole(bundle, made.outputFiles[0].text);
-  writeWhole(sources, JSON.stringify(files));
+  const { text } = made.outputFiles[0];
+  try {
+    mkdirSync(folder, { recursive: true });
+    writeWhole(bundle, text);
+    writeWhole(sources, JSON.stringify(files));
+    return pathToFileURL(bundle).href;
+  } catch (error) {
+    if (error.code !== 'EACCES' && error.code !== 'EROFS' && error.code !== 'EPERM') throw error;
+    return `data:text/javascript,${encodeURIComponent(text)}`;
+  }
 }
 
-if (!isFresh()) await makeBundle();
-await import(pathToFileURL(bundle).href);
+await import(isFresh() ? pathToFileURL(bundle).href : await makeBundle());

@@ -9,6 +9,12 @@ export const STANDARD_GRAVITY_M_PER_S2 = 9.80665;
 /** Kilometres per hour in one metre per second (exact). */
 export const KMH_PER_MS = 3.6;
 
+/** Joules in one watt-hour (exact). */
+export const JOULES_PER_WATT_HOUR = 3600;
+
+/** Metres in one kilometre, watt-hours in one kilowatt-hour: the SI prefix kilo. */
+export const KILO = 1000;
+
 /** Kilometres in one international mile: international yard and pound agreement 1959 (exact). */
 export const KM_PER_MILE = 1.609344;
 
@@ -64,6 +70,9 @@ export const DEFAULT_WIND_SPEED_MS = 3.12928;
 
 /** Angles equal to this many degrees are one: method section 7. */
 export const ANGLE_TOLERANCE_DEG = 1e-9;
+
+/** Two speeds are one when they differ by no more than this fraction: rounding of units, never a setting of a facility. */
+export const SPEED_TOLERANCE = 1e-9;
 
 /** Amounts and uncertainties below this [m²] count as none: method section 9. */
 export const AMOUNT_FLOOR_M2 = 1e-15;

@@ -1,4 +1,4 @@
-import { DEFAULT_ROTATING_FACTOR } from '../constants';
+import { DEFAULT_ROTATING_FACTOR, EXCHANGE_RATE_STEP_M2 } from '../constants';
 import {
   loadedVehicle,
   variantEnergies,
@@ -65,12 +65,12 @@ export function traceOfEnergy(
     steps: [
       roadLoadStep(candidate, airDensityKgM3),
       stepOf(METHODS.cycleEnergy, {
-        values: `${cycle.steps} steps, ${plain(distanceM)} m, ${plain(cycle.durationS)} s, k = ${plain(rotatingFactor)}: ${plain(wheelEnergyJ / 3.6 / distanceM)} Wh/km`,
+        values: `${cycle.steps} steps, ${plain(distanceM)} m, ${plain(cycle.durationS)} s, k = ${plain(rotatingFactor)}: ${plain(energy.wheelEnergyWhPerKm)} Wh/km`,
         value: wheelEnergyJ,
         unit: 'J',
       }),
       stepOf(METHODS.exchangeRate, {
-        values: `at C_D·A = ${plain(candidate.zeroYaw.dragAreaM2)} ± 0.001 m²`,
+        values: `at C_D·A = ${plain(candidate.zeroYaw.dragAreaM2)} ± ${EXCHANGE_RATE_STEP_M2} m²`,
         value: exchangeRateJPerM2,
         unit: 'J/m²',
       }),

@@ -1,3 +1,4 @@
+import { SPEED_TOLERANCE } from '../constants';
 import { Refused, refuse } from '../refusal';
 import { amount, budgetOf, scaled, type KeyedFigure } from '../uncertainty/budget';
 import type { ReducedPoint, ReductionContext, ResultParts, WindAverage } from './reduction';
@@ -6,7 +7,7 @@ import { isZeroYaw, type YawPoint } from './yaw/yaw-points';
 
 /** Two speeds are one when they differ by no more than rounding. */
 export function sameSpeed(a: ReducedPoint, b: ReducedPoint): boolean {
-  return Math.abs(a.flow.speedMs - b.flow.speedMs) <= 1e-9 * b.flow.speedMs;
+  return Math.abs(a.flow.speedMs - b.flow.speedMs) <= SPEED_TOLERANCE * b.flow.speedMs;
 }
 
 /**

@@ -1,4 +1,4 @@
-import { DEFAULT_ROTATING_FACTOR } from '../constants';
+import { DEFAULT_ROTATING_FACTOR, JOULES_PER_WATT_HOUR, KILO } from '../constants';
 import type { PreparedCycle } from '../cycles/cycle';
 import type { RoadLoad } from './road-load';
 
@@ -11,9 +11,9 @@ export interface CycleEnergy {
   readonly distanceM: number;
 }
 
-/** J over m, as Wh over km. */
+/** Energy [J] over distance [m] as Wh over km. */
 export function whPerKm(energyJ: number, distanceM: number): number {
-  return energyJ / 3.6 / distanceM;
+  return (energyJ / JOULES_PER_WATT_HOUR / distanceM) * KILO;
 }
 
 /**

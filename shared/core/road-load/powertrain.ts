@@ -1,3 +1,4 @@
+import { KILO } from '../constants';
 import type { PreparedCycle } from '../cycles/cycle';
 import { refuse } from '../refusal';
 import { cycleEnergy, whPerKm } from './cycle-energy';
@@ -120,7 +121,7 @@ export function electricConsumption(demand: Demand, electric: ElectricPowertrain
   return {
     batteryEnergyWhPerKm,
     plugEnergyWhPerKm: batteryEnergyWhPerKm / electric.chargingEfficiency,
-    rangeKm: (1000 * electric.usableEnergyKWh) / batteryEnergyWhPerKm,
+    rangeKm: (KILO * electric.usableEnergyKWh) / batteryEnergyWhPerKm,
   };
 }
 

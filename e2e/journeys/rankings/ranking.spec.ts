@@ -3,12 +3,13 @@ import { readFile } from 'node:fs/promises';
 import { resolve } from 'node:path';
 import { expectAccessible } from '../../fixtures/accessibility';
 import { continueAs, programmeNamed } from '../../fixtures/people';
+import type { Page } from '@playwright/test';
 import { expect, test } from '../../fixtures/test';
 
 const ROOT = resolve(import.meta.dirname, '../../..');
 const ORDER = ['Dunlin Liftback', 'Dunlin Hatch', 'Dunlin Sport', 'Dunlin Tourer', 'Dunlin Crossback'];
 
-async function openRanking(page: import('@playwright/test').Page, role: string, query = ''): Promise<string> {
+async function openRanking(page: Page, role: string, query = ''): Promise<string> {
   await continueAs(page, role);
   const id = await programmeNamed(page, 'Dunlin');
   await page.goto(`/programmes/${id}/ranking${query}`);
@@ -18,8 +19,7 @@ async function openRanking(page: import('@playwright/test').Page, role: string, 
 }
 
 /** Names in the order of the rows. */
-const order = (page: import('@playwright/test').Page) =>
-  page.locator('[role=rowheader] .name').allInnerTexts();
+const order = (page: Page) => page.locator('[role=rowheader] .name').allInnerTexts();
 
 test('the demo is ranked and understood by the keyboard alone', async ({ page }) => {
   const id = await openRanking(page, 'aerodynamicist');
@@ -160,6 +160,8 @@ test('a stylist is given the ranking without the raw evidence', async ({ page })
 
 for (const colorScheme of ['light', 'dark'] as const) {
   test(`nothing stands in anybody’s way, ${colorScheme}`, async ({ page }) => {
+    // Axe looks at everything twice here, which takes its time on a busy machine.
+    test.slow();
     await page.emulateMedia({ colorScheme });
     await openRanking(page, 'aerodynamicist');
     await expectAccessible(page);

@@ -1,0 +1,57 @@
+import { TestBed } from '@angular/core/testing';
+import { provideEffects } from '@ngrx/effects';
+import { Store, provideStore } from '@ngrx/store';
+import { NEVER } from 'rxjs';
+import { fiveVariants } from '#shared/testing/ranking-scenario';
+import { provideRankings } from '../../../data/rankings/provide-rankings';
+import { RankingPageActions, RankingsApiActions } from '../../../data/rankings/rankings.actions';
+import { RankingsApi } from '../../../data/rankings/rankings-api';
+import { selectRankingView } from '../../../data/rankings/rankings.selectors';
+import { FigureDerivations } from './figure-derivations';
+
+function derive(kind: Parameters<FigureDerivations['of']>[0], basis = 'zero-yaw') {
+  TestBed.configureTestingModule({
+    providers: [
+      provideStore(),
+      provideEffects(),
+      provideRankings(),
+      { provide: RankingsApi, useValue: { sources: () => NEVER, view: () => NEVER } },
+    ],
+  });
+  const store = TestBed.inject(Store);
+  const address = { cycle: 'short', basis };
+  store.dispatch(RankingPageActions.opened({ programmeId: 'p', mode: 'computes', address }));
+  store.dispatch(RankingsApiActions.sourcesLoaded({ programmeId: 'p', sources: fiveVariants() }));
+  const view = store.selectSignal(selectRankingView)();
+  const row = view?.rows.find(({ variantId }) => variantId === 'sport');
+  if (!view || !row) throw new Error('There is no ranking.');
+  return { row, derivation: TestBed.inject(FigureDerivations).of(kind, row, view) };
+}
+
+describe('the derivation of a figure, for those who hold the inputs', () => {
+  it('goes down to the raw reading, and its last drag area is the figure', () => {
+    const { row, derivation } = derive('drag-area');
+    expect(derivation.steps.some(({ values }) => values.includes('0.287'))).toBe(true);
+    expect(derivation.steps.every(({ formulaText, source, method }) => formulaText && source && method)).toBe(
+      true,
+    );
+    const full = derivation.steps.find(({ method }) => method === 'full-scale-drag-area@1');
+    expect(Number.parseFloat(full?.result ?? '')).toBeCloseTo(row.figure.dragAreaM2, 4);
+  });
+
+  it('ends in the wind average on that basis, but energy keeps to zero yaw', () => {
+    expect(derive('drag-area', 'wind-averaged').derivation.steps.map(({ method }) => method)).toContain(
+      'wind-averaged-drag-area@1',
+    );
+    TestBed.resetTestingModule();
+    const methods = derive('energy', 'wind-averaged').derivation.steps.map(({ method }) => method);
+    expect(methods).not.toContain('wind-averaged-drag-area@1');
+    expect(methods).toContain('cycle-energy-gtr-15@1');
+  });
+
+  it('ends in the coefficient on the area asked for', () => {
+    expect(derive('common-area').derivation.steps.at(-1)?.method).toBe('common-area-coefficient@1');
+    TestBed.resetTestingModule();
+    expect(derive('own-area').derivation.steps.at(-1)?.method).toBe('own-area-coefficient@1');
+  });
+});

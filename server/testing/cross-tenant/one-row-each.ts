@@ -24,7 +24,12 @@ const IMPORT = {
 
 /** Values that no rule can guess: what a JSON column must hold so that the product can read the row. */
 const BY_HAND: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
-  programmes: { confidence: 0.9, reference_air: '{}', reference_condition: '{}', common_area: '{"kind":"fixed","areaM2":2}' },
+  programmes: {
+    confidence: 0.9,
+    reference_air: '{"state":"iso-2533-sea-level"}',
+    reference_condition: '{}',
+    common_area: '{"kind":"fixed","areaM2":2}',
+  },
   facilities: { usual_condition: '{}', blockage: null },
   configurations: {
     rolling_resistance: 0.008,
@@ -41,10 +46,10 @@ const BY_HAND: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
   imports: { header: '["a"]', ...IMPORT, failure: null },
   import_rows: { cells: '["a"]', reasons: '[]', fixes: '{}' },
   cycles: {
-    time_s: [0, 1],
-    speed_kmh: [0, 0],
+    time_s: [0, 10, 20],
+    speed_kmh: [0, 30, 0],
     totals:
-      '{"durationS":1,"distanceM":0,"maximumSpeedKmh":0,"meanSpeedKmh":0,"maximumAccelerationMs2":0,"cautions":[]}',
+      '{"durationS":20,"distanceM":83.3,"maximumSpeedKmh":30,"meanSpeedKmh":15,"maximumAccelerationMs2":0.83,"cautions":[]}',
   },
   audit_events: { summary: '[]' },
 };

@@ -103,6 +103,8 @@ export class ResultListPage {
     const state = this.chosen();
     return this.rows().filter((row) => state === undefined || row.check.state === state);
   });
+  /** A short list takes the room that it needs; a long one scrolls within the page. */
+  protected readonly isShort = computed(() => this.shown().length <= 12);
   protected readonly chips = computed(() => {
     const counts = new Map<CheckState, number>();
     for (const { check } of this.rows()) counts.set(check.state, (counts.get(check.state) ?? 0) + 1);

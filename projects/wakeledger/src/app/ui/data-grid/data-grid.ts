@@ -2,6 +2,7 @@ import { CSP_NONCE, inject } from '@angular/core';
 import {
   CellApiModule,
   CellStyleModule,
+  ClientSideRowModelApiModule,
   ClientSideRowModelModule,
   ColumnApiModule,
   ColumnAutoSizeModule,
@@ -41,6 +42,7 @@ function registerParts(): void {
   ModuleRegistry.registerModules([
     CellApiModule,
     CellStyleModule,
+    ClientSideRowModelApiModule,
     ClientSideRowModelModule,
     ColumnApiModule,
     ColumnAutoSizeModule,

@@ -3,7 +3,7 @@ import {
   Component,
   DestroyRef,
   Injector,
-  type OnInit,
+  type AfterContentInit,
   computed,
   forwardRef,
   inject,
@@ -40,7 +40,7 @@ let count = 0;
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class NumberField implements ControlValueAccessor, OnInit, Validator {
+export class NumberField implements ControlValueAccessor, AfterContentInit, Validator {
   readonly label = input.required<string>();
   readonly unit = input('');
   /** Off where a choice of units is projected in its place (`unitChoice`). */
@@ -124,8 +124,9 @@ export class NumberField implements ControlValueAccessor, OnInit, Validator {
       .join(' '),
   );
 
-  ngOnInit(): void {
-    // Asked for late: the control needs this field as its validator before it exists.
+  ngAfterContentInit(): void {
+    // Asked for late: the control needs this field as its validator before it exists, and a control that is found by its
+    // name is there only once all directives of this element have been set up.
     const control = this.injector.get(NgControl, null, { optional: true, self: true })?.control;
     control?.events.pipe(takeUntilDestroyed(this.destroyed)).subscribe(() => {
       this.left.set(control.touched);

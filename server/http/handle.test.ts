@@ -103,7 +103,7 @@ const routes = [
     if (body.how === 'double')
       await tx.insert(counters).values({ series: 'left behind by double', value: 1 });
     if (body.how === 'undeclared') fail('still-in-use');
-    if (body.how === 'reply') return { secret: 1 } as Record<string, never>;
+    if (body.how === 'reply') return JSON.parse('{"secret":1}') as Record<string, never>;
     throw new Error('secret detail of the inside');
   }),
   uploadRoute(upload, 1024, async ({ file }) => ({

@@ -1,6 +1,6 @@
 import { evaluateCycleEnergy, type CycleEnergyInput } from '#shared/core/road-load/cycle-energy-operation';
 import { evaluatePowertrain, type PowertrainInput } from '#shared/core/road-load/powertrain-operation';
-import { Refused } from '#shared/core/refusal';
+import { type Refused } from '#shared/core/refusal';
 import { cycleEnergyInputSchema } from '#shared/contracts/method/cycle-energy';
 import { powertrainInputSchema } from '#shared/contracts/method/powertrain';
 import { builtInCycle } from './built-in-cycles';

@@ -12,6 +12,7 @@ declare module 'autocannon' {
     readonly non2xx: number;
     readonly errors: number;
   }
-  // The package exports one function and nothing else.
-  export default function autocannon(options: Options): Promise<Result>;
+  // The package is one function, as CommonJS knows it.
+  function autocannon(options: Options): Promise<Result>;
+  export = autocannon;
 }

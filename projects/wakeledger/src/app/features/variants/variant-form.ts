@@ -1,5 +1,5 @@
 import { type NonNullableFormBuilder, Validators } from '@angular/forms';
-import { BODY_SHAPES, type FrontalArea, type VariantFields } from '#shared/contracts/variants';
+import { type BODY_SHAPES, type FrontalArea, type VariantFields } from '#shared/contracts/variants';
 import { withoutBlanks } from '../../core/editing/without-blanks';
 import { configurationForm, configurationOf, type ConfigurationForm } from './configuration-form';
 

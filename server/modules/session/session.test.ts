@@ -82,15 +82,17 @@ describe('signing in with a password', () => {
     ['an unknown address', { email: 'nobody@example.org' }],
     ['an organisation that one does not belong to', { organisationSlug: 'elsewhere' }],
     ['a person without a password', { email: 'viewer' }],
-  ])('%s is refused in the same words', async (_name, change) => {
-    const answer = await signIn(
-      newAddress(),
-      change.email === 'viewer' ? { email: `viewer@${slug}.example` } : change,
-    );
-    expect(answer.status).toBe(401);
-    expect(JSON.parse(answer.text)).toMatchObject({ code: 'sign-in-refused' });
-    expect(JSON.parse(answer.text)).not.toHaveProperty('detail');
-  });
+  ] as readonly (readonly [name: string, change: { readonly email?: string }])[])(
+    '%s is refused in the same words',
+    async (_name, change) => {
+      // The organisation's own addresses are not known before it has been founded.
+      const body = change.email === 'viewer' ? { email: `viewer@${slug}.example` } : change;
+      const answer = await signIn(newAddress(), body);
+      expect(answer.status).toBe(401);
+      expect(JSON.parse(answer.text)).toMatchObject({ code: 'sign-in-refused' });
+      expect(JSON.parse(answer.text)).not.toHaveProperty('detail');
+    },
+  );
 
   test('a person of one organisation cannot sign in to another by naming it', async () => {
     expect((await signIn(newAddress(), { organisationSlug: api.second.slug })).status).toBe(401);

@@ -1,0 +1,53 @@
+import { TestBed } from '@angular/core/testing';
+import { NonNullableFormBuilder } from '@angular/forms';
+import { facilityFields as contract, type FacilityFields } from '#shared/contracts/facilities';
+import { facilityFields } from '#shared/testing/domain-fields';
+import { QuantityFormat } from '../../ui/quantity/quantity-format';
+import { facilityFieldsOf, facilityForm, setFacility } from './facility-form';
+import { uncertaintyLines } from './facility-words';
+
+describe('a facility’s form', () => {
+  const filled = (fields: FacilityFields) => {
+    const form = facilityForm(TestBed.inject(NonNullableFormBuilder));
+    setFacility(form, fields);
+    return form;
+  };
+
+  it('gives back what it was filled with, though shares are typed in per cent', () => {
+    const fields = facilityFields({ sessionURelative: 0.0015, sessionDegreesOfFreedom: 9, biasUM2: 0.001 });
+    const form = filled(fields);
+    expect(form.value.biasURelative).toBe(0.6);
+    expect(facilityFieldsOf(form)).toEqual(fields);
+    expect(contract.safeParse(facilityFieldsOf(form)).success).toBe(true);
+    expect(form.dirty).toBe(false);
+  });
+
+  it('asks a proving ground for no section and no blockage', () => {
+    const form = filled(facilityFields());
+    form.controls.kind.setValue('road');
+    expect(facilityFieldsOf(form)).not.toHaveProperty('areaM2');
+    expect(facilityFieldsOf(form)).not.toHaveProperty('blockage');
+  });
+
+  it('sends only what the chosen blockage method uses', () => {
+    const form = filled(facilityFields());
+    form.controls.blockage.patchValue({ method: 'maskell', theta: 0.96 });
+    expect(facilityFieldsOf(form).blockage).toEqual({
+      method: 'maskell',
+      theta: 0.96,
+      uFractionOfCorrection: 0.3,
+    });
+    form.controls.blockage.patchValue({ method: 'none', uRelative: 1.5 });
+    expect(facilityFieldsOf(form).blockage).toEqual({ method: 'none', uRelative: 0.015 });
+  });
+});
+
+describe('uncertaintyLines', () => {
+  it('says only what is stated', () => {
+    const format = TestBed.inject(QuantityFormat);
+    expect(uncertaintyLines(facilityFields(), format)).toEqual([
+      { label: 'bias', words: '0.60\u202f%' },
+      { label: 'repeatability', words: '0.20\u202f%, ν 12' },
+    ]);
+  });
+});

@@ -135,7 +135,7 @@ describe('A derivation', () => {
   it('can be copied as text, with formulas in symbols and in values, sources and the budget', () => {
     const text = derivationAsText(traceOfFigure(input, 'coefficient', 'wind-averaged'));
     expect(text).toContain('x = C_D·A_q');
-    expect(text).toContain('0.28·2.24 m²');
+    expect(text).toContain('0.28 × 2.24 m²');
     expect(text).toContain('SAE J1252 (memory)');
     expect(text).toContain('Bias of the facility: Full-size tunnel');
     expect(text).not.toContain('NaN');

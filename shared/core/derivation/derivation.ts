@@ -1,3 +1,4 @@
+import { plain, valuesAsText, type InValues } from './in-values';
 import type { Method } from './method';
 
 /** One step of a derivation, in the order in which it is carried out. */
@@ -8,8 +9,7 @@ export interface DerivationStep {
   /** In symbols, as MathML and as plain text. */
   readonly formulaMathml: string;
   readonly formulaText: string;
-  /** In values. */
-  readonly values: string;
+  readonly values: InValues;
   /** The step's result, unrounded. */
   readonly value: number;
   readonly unit: string;
@@ -47,7 +47,7 @@ export interface Derivation {
 export function stepOf(
   method: Method,
   outcome: {
-    readonly values: string;
+    readonly values: InValues;
     readonly value: number;
     readonly unit: string;
     readonly assumed?: readonly string[];
@@ -72,16 +72,11 @@ export function methodChain({ steps }: Derivation): string[] {
   return steps.map(({ methodId, version }) => `${methodId}@${version}`);
 }
 
-/** A number with at most seven significant digits, plain and machine-readable. */
-export function plain(value: number): string {
-  return String(Number(value.toPrecision(7)));
-}
-
 function stepAsText(step: DerivationStep, index: number): string[] {
   return [
     `${index + 1}. ${step.title}: ${plain(step.value)}${step.unit === '' ? '' : ` ${step.unit}`}`,
     `   ${step.formulaText}`,
-    `   ${step.values}`,
+    `   ${valuesAsText(step.values)}`,
     `   source: ${step.source} (${step.methodId}@${step.version})`,
     ...step.assumed.map((words) => `   assumed: ${words}`),
     ...step.cautions.map((words) => `   caution: ${words}`),

@@ -6,7 +6,8 @@ import { fullScaleDragArea } from '../reduction/scale';
 import { differingItems } from '../similarity/condition';
 import type { PointInput, ResultInput } from '../ranking/ranking-input';
 import { isZeroYaw } from '../reduction/yaw/yaw-points';
-import { plain, stepOf, type DerivationStep } from './derivation';
+import { stepOf, type DerivationStep } from './derivation';
+import { inValues, joined } from './in-values';
 import { REDUCTION_METHODS as METHODS } from './reduction-methods';
 
 /** The cautions that belong to one step, in words. */
@@ -19,13 +20,13 @@ function airSteps({ result, air }: ResultParts): DerivationStep[] {
   const named = state != null && state !== 'custom';
   const density = named
     ? stepOf(METHODS.referenceAir, {
-        values: `${state}: T = ${plain(air.temperatureK)} K`,
+        values: inValues`${state}: T = ${air.temperatureK} K`,
         value: air.densityKgM3,
         unit: 'kg/m³',
         assumed: [`the source used the state ${state}`],
       })
     : stepOf(METHODS.moistAir, {
-        values: `t = ${temperatureC} °C, p = ${pressurePa} Pa, h = ${relativeHumidity}`,
+        values: inValues`t = ${temperatureC} °C, p = ${pressurePa} Pa, h = ${relativeHumidity}`,
         value: air.densityKgM3,
         unit: 'kg/m³',
         assumed: ['400 µmol/mol CO2'],
@@ -35,7 +36,7 @@ function airSteps({ result, air }: ResultParts): DerivationStep[] {
         ),
       });
   const viscosity = stepOf(METHODS.viscosity, {
-    values: `T = ${plain(air.temperatureK)} K (${plain(air.temperatureK - CELSIUS_ZERO_K)} °C), ρ = ${plain(air.densityKgM3)} kg/m³`,
+    values: inValues`T = ${air.temperatureK} K (${air.temperatureK - CELSIUS_ZERO_K} °C), ρ = ${air.densityKgM3} kg/m³`,
     value: air.kinematicViscosityM2S,
     unit: 'm²/s',
   });
@@ -46,7 +47,7 @@ function tareStep(point: PointInput, result: ResultInput, netForceN: number): De
   if (result.quantity !== 'force' || result.tareAlreadySubtracted !== false) return [];
   return [
     stepOf(METHODS.tare, {
-      values: `${point.value} N − ${point.tareN ?? result.tareN} N`,
+      values: inValues`${point.value} N − ${point.tareN ?? result.tareN} N`,
       value: netForceN,
       unit: 'N',
     }),
@@ -58,8 +59,8 @@ function pressureStep(parts: ResultParts, point: PointInput): DerivationStep[] {
   const flow = pointFlow(point, parts);
   const method = flow.dynamicPressureMeasured ? METHODS.measuredDynamicPressure : METHODS.dynamicPressure;
   const values = flow.dynamicPressureMeasured
-    ? `q = ${plain(flow.dynamicPressurePa)} Pa`
-    : `½·${plain(parts.air.densityKgM3)} kg/m³·(${plain(flow.speedMs)} m/s)²`;
+    ? inValues`q = ${flow.dynamicPressurePa} Pa`
+    : inValues`½ × ${parts.air.densityKgM3} kg/m³ × (${flow.speedMs} m/s)²`;
   return [stepOf(method, { values, value: flow.dynamicPressurePa, unit: 'Pa' })];
 }
 
@@ -72,22 +73,22 @@ function modelStep(parts: ResultParts, point: PointInput): DerivationStep {
     case 'force':
       return stepOf(METHODS.forceToDragArea, {
         ...outcome,
-        values: `${plain(measured.netForceN ?? NaN)} N/${plain(flow.dynamicPressurePa)} Pa`,
+        values: inValues`${measured.netForceN} N / ${flow.dynamicPressurePa} Pa`,
         assumed: result.tareAlreadySubtracted === true ? ['the tare was subtracted by the source'] : [],
       });
     case 'coefficient':
       return stepOf(METHODS.coefficientToDragArea, {
         ...outcome,
-        values: `${point.value}·${result.quotedAreaM2} m²${result.quotedAreaScale === 'full' ? `·${plain(scale)}²` : ''}`,
+        values: inValues`${point.value} × ${result.quotedAreaM2} m²${result.quotedAreaScale === 'full' ? inValues` × ${scale}²` : null}`,
       });
     case 'coastdown-f2':
       return stepOf(METHODS.coastdown, {
         ...outcome,
-        values: `2·3.6²·${point.value} N/(km/h)²/${plain(air.densityKgM3)} kg/m³`,
+        values: inValues`2 × 3.6² × ${point.value} N/(km/h)² / ${air.densityKgM3} kg/m³`,
         assumed: ['all of f2 is aerodynamic drag'],
       });
     default:
-      return stepOf(METHODS.statedDragArea, { ...outcome, values: `${point.value} m²·${plain(scale)}²` });
+      return stepOf(METHODS.statedDragArea, { ...outcome, values: inValues`${point.value} m² × ${scale}²` });
   }
 }
 
@@ -111,17 +112,15 @@ function blockageSteps(
   if (method === undefined) return [];
   const { blockageRatio, areaM2 } = tunnel;
   const typed = [
-    ...(blockage.method === 'maskell' ? [`θ = ${blockage.theta}`] : []),
-    ...(blockage.method === 'factor' ? [`k = ${blockage.factor}`] : []),
+    ...(blockage.method === 'maskell' ? [inValues`θ = ${blockage.theta}`] : []),
+    ...(blockage.method === 'factor' ? [inValues`k = ${blockage.factor}`] : []),
   ];
   return [
     stepOf(method, {
-      values: [
-        `x = ${plain(modelDragAreaM2)} m²`,
-        `β = ${plain(blockageRatio)}`,
-        `A_t = ${areaM2} m²`,
-        ...typed,
-      ].join(', '),
+      values: joined(
+        [inValues`x = ${modelDragAreaM2} m², β = ${blockageRatio}, A_t = ${areaM2} m²`, ...typed],
+        ', ',
+      ),
       value: correctForBlockage(blockage, modelDragAreaM2, blockageRatio, areaM2).modelDragAreaM2,
       unit: 'm²',
       cautions,
@@ -131,7 +130,7 @@ function blockageSteps(
 
 function fullScaleStep({ scale, result, model }: ResultParts, correctedM2: number): DerivationStep {
   return stepOf(METHODS.fullScale, {
-    values: `${plain(correctedM2)} m²/${plain(scale)}²`,
+    values: inValues`${correctedM2} m² / ${scale}²`,
     value: fullScaleDragArea(correctedM2, scale),
     unit: 'm²',
     assumed: [
@@ -149,14 +148,17 @@ function flowStep(reduction: Reduction, context: ReductionContext): DerivationSt
   const { characteristicLengthM } = context.programme;
   const differing = differingItems(context.referenceCondition, parts.result.condition);
   return stepOf(METHODS.flow, {
-    values:
-      `U = ${plain(speedMs)} m/s (${plain(speedMs * KMH_PER_MS)} km/h), L = ${characteristicLengthM} m, s = ${plain(parts.scale)}, ` +
-      `ν_k = ${plain(parts.air.kinematicViscosityM2S)} m²/s; M = ${plain(output.mach)} (highest)`,
+    values: joined(
+      [
+        inValues`U = ${speedMs} m/s (${speedMs * KMH_PER_MS} km/h), L = ${characteristicLengthM} m`,
+        inValues`s = ${parts.scale}, ν_k = ${parts.air.kinematicViscosityM2S} m²/s`,
+        inValues`M = ${output.mach} (highest), Re_ref = ${context.referenceReynolds}`,
+      ],
+      ', ',
+    ),
     value: output.reynolds,
     unit: '',
-    assumed: [
-      `the drag area is that at the reference Reynolds number ${plain(context.referenceReynolds)}: no correction between them`,
-    ],
+    assumed: ['the drag area is that at the reference Reynolds number: no correction between them'],
     cautions: [
       ...cautionIf(
         output.cautions.includes('mach'),
@@ -176,7 +178,10 @@ function meanStep(points: readonly ReducedPoint[]): DerivationStep[] {
   if (points.length < 2) return [];
   return [
     stepOf(METHODS.zeroYawMean, {
-      values: `(${points.map((point) => plain(point.dragAreaM2)).join(' + ')}) m²/${points.length}`,
+      values: inValues`(${joined(
+        points.map(({ dragAreaM2 }) => [dragAreaM2]),
+        ' + ',
+      )}) m² / ${points.length}`,
       value: points.reduce((sum, point) => sum + point.dragAreaM2, 0) / points.length,
       unit: 'm²',
     }),

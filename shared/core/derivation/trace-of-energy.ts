@@ -8,8 +8,9 @@ import {
 import { refuse } from '../refusal';
 import { cycleEnergy } from '../road-load/cycle-energy';
 import { figureOf } from '../uncertainty/budget';
-import { plain, stepOf, type Derivation, type DerivationStep } from './derivation';
+import { stepOf, type Derivation, type DerivationStep } from './derivation';
 import { ENERGY_METHODS as METHODS } from './energy-methods';
+import { inValues } from './in-values';
 import type { KeyNames } from './key-labels';
 import { budgetShares } from './trace-of-figure';
 
@@ -17,20 +18,20 @@ function roadLoadStep(candidate: EnergyCandidate, airDensityKgM3: number): Deriv
   const { variant, zeroYaw } = candidate;
   const { load, massKg } = loadedVehicle(candidate, airDensityKgM3);
   const { roadLoadReference: reference, rollingResistance } = variant;
-  const air = `ρ = ${plain(airDensityKgM3)} kg/m³, C_D·A = ${plain(zeroYaw.dragAreaM2)} m², m = ${plain(massKg)} kg`;
-  const rolling = rollingResistance == null ? '' : `, C_rr = ${rollingResistance}`;
-  const found = `f0 = ${plain(load.f0N)} N, f1 = ${plain(load.f1NPerKmh)} N/(km/h), f2 = ${plain(load.f2NPerKmh2)} N/(km/h)²`;
+  const air = inValues`ρ = ${airDensityKgM3} kg/m³, C_D·A = ${zeroYaw.dragAreaM2} m², m = ${massKg} kg`;
+  const rolling = rollingResistance == null ? null : inValues`, C_rr = ${rollingResistance}`;
+  const found = inValues`f_0 = ${load.f0N} N, f_1 = ${load.f1NPerKmh} N/(km/h), f_2 = ${load.f2NPerKmh2} N/(km/h)²`;
   const outcome = { value: load.f2NPerKmh2, unit: 'N/(km/h)²' };
   if (reference == null) {
     return stepOf(METHODS.builtUpRoadLoad, {
       ...outcome,
-      values: `${air}${rolling}: ${found}`,
+      values: inValues`${air}${rolling}: ${found}`,
       assumed: ['rolling resistance does not depend on speed'],
     });
   }
   return stepOf(METHODS.measuredRoadLoad, {
     ...outcome,
-    values: `${air}${rolling}; measured: f0 = ${reference.f0N} N, f1 = ${reference.f1NPerKmh} N/(km/h), f2 = ${reference.f2NPerKmh2} N/(km/h)² at ${reference.dragAreaM2} m², ${reference.massKg} kg, ${reference.airDensityKgM3} kg/m³: ${found}`,
+    values: inValues`${air}${rolling}; measured: f_0 = ${reference.f0N} N, f_1 = ${reference.f1NPerKmh} N/(km/h), f_2 = ${reference.f2NPerKmh2} N/(km/h)² at ${reference.dragAreaM2} m², ${reference.massKg} kg, ${reference.airDensityKgM3} kg/m³: ${found}`,
     assumed: rollingResistance == null ? ['f0 grows with mass in proportion'] : [],
   });
 }
@@ -65,17 +66,17 @@ export function traceOfEnergy(
     steps: [
       roadLoadStep(candidate, airDensityKgM3),
       stepOf(METHODS.cycleEnergy, {
-        values: `${cycle.steps} steps, ${plain(distanceM)} m, ${plain(cycle.durationS)} s, k = ${plain(rotatingFactor)}: ${plain(energy.wheelEnergyWhPerKm)} Wh/km`,
+        values: inValues`${cycle.steps} steps, ${distanceM} m, ${cycle.durationS} s, k = ${rotatingFactor}: ${energy.wheelEnergyWhPerKm} Wh/km`,
         value: wheelEnergyJ,
         unit: 'J',
       }),
       stepOf(METHODS.exchangeRate, {
-        values: `at C_D·A = ${plain(candidate.zeroYaw.dragAreaM2)} ± ${EXCHANGE_RATE_STEP_M2} m²`,
+        values: inValues`at C_D·A = ${candidate.zeroYaw.dragAreaM2} ± ${EXCHANGE_RATE_STEP_M2} m²`,
         value: exchangeRateJPerM2,
         unit: 'J/m²',
       }),
       stepOf(METHODS.energyUncertainty, {
-        values: `${plain(Math.abs(exchangeRateJPerM2))} J/m²·${plain(figure.standardUncertaintyM2)} m²`,
+        values: inValues`${Math.abs(exchangeRateJPerM2)} J/m² × ${figure.standardUncertaintyM2} m²`,
         value: standardUncertaintyJ,
         unit: 'J',
         assumed: ['mass and rolling resistance are exactly known'],

@@ -6,7 +6,8 @@ import { reductionContextOf } from '../reduction/reduction-context';
 import { refuse } from '../refusal';
 import { figureOf, type KeyedFigure } from '../uncertainty/budget';
 import type { Contribution } from '../uncertainty/figure';
-import { plain, stepOf, type BudgetShare, type Derivation, type DerivationStep } from './derivation';
+import { stepOf, type BudgetShare, type Derivation, type DerivationStep } from './derivation';
+import { inValues, joined, plain } from './in-values';
 import { keyLabel, type KeyNames } from './key-labels';
 import { REDUCTION_METHODS as METHODS } from './reduction-methods';
 import { zeroYawSteps } from './reduction-steps';
@@ -42,12 +43,10 @@ function windSteps({ windAverage, output }: Reduction, zeroYawM2: number): Deriv
       'There is no wind average of this result.',
     );
   }
-  const points = yaw.foldedYawDeg.map(
-    (angle, i) => `${plain(angle)}°: ${plain(yaw.foldedDragAreaM2[i] ?? NaN)} m²`,
-  );
+  const points = yaw.foldedYawDeg.map((angle, i) => inValues`${angle}°: ${yaw.foldedDragAreaM2[i]} m²`);
   return [
     stepOf(METHODS.yawRatio, {
-      values: points.join(', '),
+      values: joined(points, ', '),
       value: yaw.yawRatio,
       unit: '',
       assumed: ['the wind comes from every direction alike'],
@@ -56,7 +55,7 @@ function windSteps({ windAverage, output }: Reduction, zeroYawM2: number): Deriv
       ),
     }),
     stepOf(METHODS.windAveraged, {
-      values: `${plain(yaw.yawRatio)}·${plain(zeroYawM2)} m²`,
+      values: inValues`${yaw.yawRatio} × ${zeroYawM2} m²`,
       value: zeroYawM2 * yaw.yawRatio,
       unit: 'm²',
     }),
@@ -66,9 +65,9 @@ function windSteps({ windAverage, output }: Reduction, zeroYawM2: number): Deriv
 function uncertaintyStep(figure: KeyedFigure): DerivationStep {
   const { standardUncertaintyM2, coverageFactor, expandedUncertaintyM2, effectiveDegreesOfFreedom } =
     figureOf(figure);
-  const nu = effectiveDegreesOfFreedom === null ? 'infinite' : plain(effectiveDegreesOfFreedom);
+  const nu = effectiveDegreesOfFreedom ?? 'infinite';
   return stepOf(METHODS.budget, {
-    values: `u = ${plain(standardUncertaintyM2)} m², ν_eff = ${nu}, t = ${plain(coverageFactor)}`,
+    values: inValues`u = ${standardUncertaintyM2} m², ν_eff = ${nu}, t = ${coverageFactor}`,
     value: expandedUncertaintyM2,
     unit: 'm²',
   });
@@ -127,7 +126,7 @@ export function onCommonArea(derivation: Derivation, commonAreaM2: number): Deri
     steps: [
       ...steps,
       stepOf(METHODS.commonArea, {
-        values: `${plain(value)} m²/${plain(commonAreaM2)} m²`,
+        values: inValues`${value} m² / ${commonAreaM2} m²`,
         value: value / commonAreaM2,
         unit: '',
       }),

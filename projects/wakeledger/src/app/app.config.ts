@@ -22,6 +22,7 @@ import { focusOnNavigation } from './core/navigation/focus-on-navigation';
 import { QuestionTitle } from './core/navigation/question-title';
 import { Preferences } from './core/preferences/preferences';
 import { forgetOnMemberChange } from './core/session/forget-on-member-change';
+import { leadToSignIn } from './core/session/lead-to-sign-in';
 import { provideProgrammes } from './data/programmes/provide-programmes';
 import { provideDevelopmentTools } from './development-tools';
 
@@ -45,6 +46,7 @@ export const appConfig: ApplicationConfig = {
     provideAppInitializer(() => {
       inject(Preferences);
       focusOnNavigation();
+      leadToSignIn();
     }),
   ],
 };

@@ -76,6 +76,11 @@ export const routes: Routes = [
     loadComponent: () => import('./features/sign-in/sign-in-page').then((page) => page.SignInPage),
   },
   {
+    path: 'set-password',
+    title: $localize`Which password will be yours?`,
+    loadComponent: () => import('./features/sign-in/set-password-page').then((page) => page.SetPasswordPage),
+  },
+  {
     path: 'unavailable',
     title: $localize`The server cannot be reached`,
     loadComponent: () => import('./core/errors/error-page').then((page) => page.ErrorPage),

@@ -6,6 +6,7 @@ import {
   type SessionState,
   demoSignIn,
   organisationSwitch,
+  passwordSet,
   passwordSignIn,
   sessionRead,
   signOut,
@@ -59,6 +60,11 @@ export class Session {
 
   async signIn(body: PasswordSignIn): Promise<void> {
     this.accept(await firstValueFrom(this.api.call(passwordSignIn, { body })));
+  }
+
+  /** Spends a one-time token on a password. @returns what else signing in needs; nobody is signed in yet */
+  async setPassword(token: string, password: string): Promise<Omit<PasswordSignIn, 'password'>> {
+    return firstValueFrom(this.api.call(passwordSet, { body: { token, password } }));
   }
 
   async continueAs(userId: string): Promise<void> {

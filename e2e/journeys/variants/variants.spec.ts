@@ -26,7 +26,7 @@ async function addVariant(page: Page, name: string): Promise<void> {
   await expect(page.getByRole('link', { name })).toBeVisible();
 }
 
-test('a variant is added with a decimal comma, edited, retired, undone and retired for good', async ({
+test('a variant is added with a decimal comma, edited, retired and brought back by undo', async ({
   page,
 }) => {
   await openVariants(page);

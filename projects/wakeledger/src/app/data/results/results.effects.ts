@@ -1,8 +1,10 @@
 import { inject } from '@angular/core';
 import { Actions, createEffect, ofType } from '@ngrx/effects';
 import { mapResponse } from '@ngrx/operators';
-import { exhaustMap, switchMap } from 'rxjs';
+import { exhaustMap, map, switchMap } from 'rxjs';
 import { asApiProblem } from '../../core/api/api-problem';
+import { FacilityNamesActions } from '../facilities/facilities.actions';
+import { VariantNamesActions } from '../variants/variants.actions';
 import { ResultsApi } from './results-api';
 import {
   ResultEntryPageActions,
@@ -35,6 +37,26 @@ export const loadEvidence = createEffect(
           }),
         ),
       ),
+    ),
+  { functional: true },
+);
+
+/** Results are shown with the names of their variants … */
+export const nameVariants = createEffect(
+  (actions = inject(Actions)) =>
+    actions.pipe(
+      ofType(ResultListPageActions.opened, ResultPageActions.opened, ResultEntryPageActions.opened),
+      map(({ programmeId }) => VariantNamesActions.needed({ programmeId })),
+    ),
+  { functional: true },
+);
+
+/** … and of the facilities that they come from. */
+export const nameFacilities = createEffect(
+  (actions = inject(Actions)) =>
+    actions.pipe(
+      ofType(ResultListPageActions.opened, ResultPageActions.opened, ResultEntryPageActions.opened),
+      map(() => FacilityNamesActions.needed()),
     ),
   { functional: true },
 );

@@ -23,11 +23,9 @@ import { problemWords } from '../../core/errors/problem-words';
 import { saveText } from '../../core/export/save-file';
 import { Preferences } from '../../core/preferences/preferences';
 import { Session } from '../../core/session/session';
-import { FacilityNamesActions } from '../../data/facilities/facilities.actions';
 import { facilitiesFeature } from '../../data/facilities/facilities.feature';
 import { ResultListPageActions } from '../../data/results/results.actions';
 import { resultsFeature } from '../../data/results/results.feature';
-import { VariantNamesActions } from '../../data/variants/variants.actions';
 import { variantsFeature } from '../../data/variants/variants.feature';
 import { Busy } from '../../ui/busy/busy';
 import { gridDefaults } from '../../ui/data-grid/data-grid';
@@ -131,11 +129,7 @@ export class ResultListPage {
   constructor() {
     effect(() => {
       const programmeId = this.programmeId();
-      untracked(() => {
-        this.store.dispatch(ResultListPageActions.opened({ programmeId }));
-        this.store.dispatch(VariantNamesActions.needed({ programmeId }));
-        this.store.dispatch(FacilityNamesActions.needed());
-      });
+      untracked(() => this.store.dispatch(ResultListPageActions.opened({ programmeId })));
     });
   }
 

@@ -1,44 +1,39 @@
-import type { Derivation as Trace } from '#shared/core/derivation/derivation';
+import type { DerivationStep as TracedStep, Derivation as Trace } from '#shared/core/derivation/derivation';
 import type { QuantityFormat } from '../quantity/quantity-format';
-import type { Derivation } from './derivation';
+import type { Derivation, DerivationStep } from './derivation';
+import { plainFigure, wordedResult, wordedUncertainty, wordedValues } from './worded';
 
-/** Significant digits of what stands between the raw value and the figure. */
-const STEP_DIGITS = 5;
-
-/** Decimals that leave a value with so many significant digits, six at most. */
-export function decimalsOf(value: number, significant = STEP_DIGITS): number {
-  if (value === 0 || !Number.isFinite(value)) return 0;
-  return Math.min(6, Math.max(0, significant - 1 - Math.floor(Math.log10(Math.abs(value)))));
+/** A traced step as the sheet shows it, in the person's marks. */
+export function stepFromTrace(step: TracedStep, format: QuantityFormat): DerivationStep {
+  const { title, formulaMathml, formulaText, source, assumed, cautions } = step;
+  return {
+    title,
+    result: wordedResult(step, format),
+    formulaMathml,
+    formulaText,
+    values: wordedValues(step.values, format),
+    source,
+    method: `${step.methodId}@${step.version}`,
+    assumed,
+    cautions,
+  };
 }
 
 /** The method's trace of a drag area as the sheet shows it, in the person's marks. */
 export function derivationFromTrace(trace: Trace, summary: string, format: QuantityFormat): Derivation {
-  const figure = (value: number, unit: string): string => {
-    const text = format.value(value, 'number', { digits: decimalsOf(value) });
-    return unit === '' ? text : `${text}\u202f${unit}`;
-  };
   return {
     figure: {
       value: format.value(trace.value, 'drag-area'),
       expandedU: format.value(trace.expandedUncertainty, 'drag-area'),
       unit: trace.unit,
+      plain: plainFigure(trace.value, trace.expandedUncertainty, trace.unit),
     },
     summary,
-    steps: trace.steps.map((step) => ({
-      title: step.title,
-      result: figure(step.value, step.unit),
-      formulaMathml: step.formulaMathml,
-      formulaText: step.formulaText,
-      values: step.values,
-      source: step.source,
-      method: `${step.methodId}@${step.version}`,
-      assumed: step.assumed,
-      cautions: step.cautions,
-    })),
+    steps: trace.steps.map((step) => stepFromTrace(step, format)),
     budget: trace.budget.map(({ label, shareOfVariance, amount }) => ({
       label,
       share: shareOfVariance,
-      u: figure(Math.abs(amount), trace.unit),
+      u: wordedUncertainty(amount, trace.unit, format),
     })),
   };
 }

@@ -22,11 +22,9 @@ import { formPulse } from '../../../core/editing/form-pulse';
 import { focusFirstFault, revealErrors } from '../../../core/editing/reveal-errors';
 import { Undo } from '../../../core/editing/undo';
 import { type HoldsChanges, warnBeforeUnload } from '../../../core/editing/unsaved-changes';
-import { FacilityNamesActions } from '../../../data/facilities/facilities.actions';
 import { facilitiesFeature } from '../../../data/facilities/facilities.feature';
 import { ResultEntryPageActions } from '../../../data/results/results.actions';
 import { resultsFeature } from '../../../data/results/results.feature';
-import { VariantNamesActions } from '../../../data/variants/variants.actions';
 import { variantsFeature } from '../../../data/variants/variants.feature';
 import { ConditionFields } from '../../../ui/condition/condition-fields';
 import { setCondition } from '../../../ui/condition/condition-form';
@@ -165,11 +163,7 @@ export class ResultEntryPage implements HoldsChanges {
     warnBeforeUnload(() => this.hasUnsavedChanges());
     effect(() => {
       const programmeId = this.programmeId();
-      untracked(() => {
-        this.store.dispatch(ResultEntryPageActions.opened({ programmeId }));
-        this.store.dispatch(VariantNamesActions.needed({ programmeId }));
-        this.store.dispatch(FacilityNamesActions.needed());
-      });
+      untracked(() => this.store.dispatch(ResultEntryPageActions.opened({ programmeId })));
     });
     effect(() => {
       const facility = this.chosenFacility();

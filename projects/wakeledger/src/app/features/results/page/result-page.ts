@@ -18,11 +18,9 @@ import type { ApiProblem } from '../../../core/api/api-problem';
 import { Undo } from '../../../core/editing/undo';
 import { Preferences } from '../../../core/preferences/preferences';
 import { Session } from '../../../core/session/session';
-import { FacilityNamesActions } from '../../../data/facilities/facilities.actions';
 import { facilitiesFeature } from '../../../data/facilities/facilities.feature';
 import { ResultPageActions } from '../../../data/results/results.actions';
 import { resultsFeature } from '../../../data/results/results.feature';
-import { VariantNamesActions } from '../../../data/variants/variants.actions';
 import { variantsFeature } from '../../../data/variants/variants.feature';
 import { Busy } from '../../../ui/busy/busy';
 import { compareConditions } from '../../../ui/condition/compare-conditions';
@@ -181,11 +179,7 @@ export class ResultPage {
   constructor() {
     effect(() => {
       const programmeId = this.programmeId();
-      untracked(() => {
-        this.store.dispatch(ResultPageActions.opened({ programmeId }));
-        this.store.dispatch(VariantNamesActions.needed({ programmeId }));
-        this.store.dispatch(FacilityNamesActions.needed());
-      });
+      untracked(() => this.store.dispatch(ResultPageActions.opened({ programmeId })));
     });
     effect(() => {
       const deed = this.deed();

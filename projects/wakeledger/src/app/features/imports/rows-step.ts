@@ -12,7 +12,7 @@ import {
 import { ActivatedRoute, Router } from '@angular/router';
 import { toSignal } from '@angular/core/rxjs-interop';
 import { AgGridAngular } from 'ag-grid-angular';
-import type { GridApi, GridOptions, GridReadyEvent, IDatasource } from 'ag-grid-community';
+import type { CellFocusedEvent, GridApi, GridOptions, GridReadyEvent, IDatasource } from 'ag-grid-community';
 import {
   VERDICTS,
   type ImportDetail,
@@ -51,6 +51,15 @@ export class RowsStep {
   private readonly address = toSignal(inject(ActivatedRoute).queryParamMap, { requireSync: true });
   private readonly grid = signal<GridApi<ImportRow> | undefined>(undefined);
   protected readonly total = signal<number | undefined>(undefined);
+
+  /** The row that the focus is in, by its place among those shown: its reasons stand below the grid in full. */
+  private readonly place = signal<number | undefined>(undefined);
+  protected readonly focusedRow = computed(() => {
+    const place = this.place();
+    // Read anew after every change: a mended row has other reasons.
+    this.detail();
+    return place === undefined ? undefined : this.grid()?.getDisplayedRowAtIndex(place)?.data;
+  });
 
   /** From the address, so that a reload shows the same rows. */
   protected readonly filter = computed<RowFilter>(() => {
@@ -112,6 +121,10 @@ export class RowsStep {
 
   protected ready({ api }: GridReadyEvent<ImportRow>): void {
     this.grid.set(api);
+  }
+
+  protected focused({ rowIndex }: CellFocusedEvent<ImportRow>): void {
+    this.place.set(rowIndex ?? undefined);
   }
 
   protected show(verdict: Verdict): void {

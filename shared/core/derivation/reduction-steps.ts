@@ -29,7 +29,7 @@ function airSteps({ result, air }: ResultParts): DerivationStep[] {
         values: inValues`t = ${temperatureC} °C, p = ${pressurePa} Pa, h = ${relativeHumidity}`,
         value: air.densityKgM3,
         unit: 'kg/m³',
-        assumed: ['400 µmol/mol CO2'],
+        assumed: ['400 µmol/mol CO₂'],
         cautions: cautionIf(
           air.notes.includes('outside-cipm-2007-range'),
           'outside the range of CIPM-2007, 15 to 27 °C and 600 to 1100 hPa',

@@ -1,4 +1,4 @@
-import { formatForInput, formatNumber, formatSigned } from './format-number';
+import { formatForInput, formatNumber, formatSignificant, formatSigned } from './format-number';
 import { NUMBER_LOCALES } from './number-locale';
 import { parseTypedNumber } from './parse-typed-number';
 
@@ -22,6 +22,27 @@ describe('a written number', () => {
   it('writes the sign of a change', () => {
     expect(formatSigned(0.0166, 4, 'en-GB')).toBe('+0.0166');
     expect(formatSigned(-0.005, 3, 'en-GB')).toBe('\u22120.005');
+  });
+
+  it.each([
+    [0.00001577234, '1.577\u00a0×\u00a010⁻⁵'],
+    [11093517, '1.109\u00a0×\u00a010⁷'],
+    [0.1128405, '0.11284'],
+    [1.156812, '1.1568'],
+    [38.88889, '38.889'],
+    [99840.4, '99\u202f840'],
+    [101325, '101\u202f325'],
+    [999999.9, '1.000\u00a0×\u00a010⁶'],
+    [0.0004, '0.0004'],
+    [-5.5, '\u22125.5'],
+    [0, '0'],
+  ])('inside a calculation has five digits that count: %d reads %s', (value, words) => {
+    expect(formatSignificant(value, 5, 'en-GB')).toBe(words);
+  });
+
+  it('inside a calculation keeps the person’s decimal mark', () => {
+    expect(formatSignificant(12345.67, 6, 'de-DE')).toBe('12\u202f345,7');
+    expect(formatSignificant(1.25e-6, 3, 'fr-FR')).toBe('1,25\u00a0×\u00a010⁻⁶');
   });
 
   it('is read back from an input without loss in every locale', () => {

@@ -5,15 +5,15 @@ import { DerivationOpener } from './derivation-sheet';
 import { derivationText, percent } from './derivation-text';
 
 const DERIVATION: Derivation = {
-  figure: { value: '0.594', expandedU: '0.008', unit: 'm²' },
+  figure: { value: '0.594', expandedU: '0.008', unit: 'm²', plain: '0.5941 ± 0.0082 m²' },
   summary: 'Dunlin Hatch, zero yaw.',
   steps: [
     {
       title: 'Dynamic pressure',
-      result: '899.3 Pa',
+      result: { shown: '899.3 Pa', plain: '899.3456 Pa' },
       formulaMathml: '<mi>q</mi>',
       formulaText: 'q = ½ρU²',
-      values: '½ × 1.1893 × 38.889²',
+      values: { shown: '½ × 1.1893 × U_m²', plain: '½ × 1.18932 × U_m²' },
       source: 'moist air after CIPM-2007',
       method: 'dynamic-pressure@1',
       assumed: ['relative humidity 44 %'],
@@ -22,7 +22,7 @@ const DERIVATION: Derivation = {
   ],
   budget: [
     { label: 'session', share: 0.3 },
-    { label: 'facility bias', share: 0.7, u: '0.003 m²' },
+    { label: 'facility bias', share: 0.7, u: { shown: '0.003 m²', plain: '0.00312 m²' } },
     { label: 'nothing', share: 0 },
   ],
 };
@@ -38,6 +38,7 @@ describe('the derivation sheet', () => {
   it('shows each step with formula, values, source, assumptions and cautions', () => {
     const step = open().querySelector('li');
     expect(step?.querySelector('math')).not.toBeNull();
+    expect(step?.querySelector('.values sub')?.textContent).toBe('m');
     for (const words of [
       'Dynamic pressure',
       '899.3 Pa',
@@ -73,19 +74,19 @@ describe('the derivation sheet', () => {
   it('reads well as text', () => {
     expect(derivationText(DERIVATION).split('\n')).toEqual([
       'Derivation',
-      '0.594 ± 0.008 m²',
+      '0.5941 ± 0.0082 m²',
       'Dunlin Hatch, zero yaw.',
       '',
-      '1  Dynamic pressure = 899.3 Pa',
+      '1  Dynamic pressure = 899.3456 Pa',
       '   q = ½ρU²',
-      '   ½ × 1.1893 × 38.889²',
+      '   ½ × 1.18932 × U_m²',
       '   source: moist air after CIPM-2007 (dynamic-pressure@1)',
       '   assumed: relative humidity 44 %',
       '   caution: Over 5 %',
       '',
       'Where the uncertainty comes from',
       '    30 %  session',
-      '    70 %  facility bias (u = 0.003 m²)',
+      '    70 %  facility bias (u = 0.00312 m²)',
       '     0 %  nothing',
     ]);
     expect(percent(0.001)).toBe('< 1 %');

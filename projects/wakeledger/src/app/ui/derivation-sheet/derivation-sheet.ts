@@ -3,13 +3,14 @@ import { DIALOG_DATA, Dialog, DialogRef } from '@angular/cdk/dialog';
 import { Overlay } from '@angular/cdk/overlay';
 import { ChangeDetectionStrategy, Component, Injectable, computed, inject, signal } from '@angular/core';
 import { Formula } from '../formula/formula';
+import { Symbols } from '../formula/symbols';
 import type { Derivation } from './derivation';
 import { derivationText, percent } from './derivation-text';
 
 /** The chain of steps from what was measured to the figure on screen, as a sheet from the right. */
 @Component({
   selector: 'wl-derivation-sheet',
-  imports: [Formula],
+  imports: [Formula, Symbols],
   templateUrl: './derivation-sheet.html',
   styleUrl: './derivation-sheet.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -1,14 +1,13 @@
 import type { Derivation } from './derivation';
 
-/** The derivation as plain text, for a report or a message. */
+/** The derivation as plain text, for a report or a message; its numbers can be calculated on. */
 export function derivationText(derivation: Derivation): string {
   const { figure, summary, steps, budget, budgetNote } = derivation;
-  const u = figure.expandedU ? ` ± ${figure.expandedU}` : '';
-  const lines = [$localize`Derivation`, `${figure.value}${u} ${figure.unit}`.trim(), summary, ''];
+  const lines = [$localize`Derivation`, figure.plain, summary, ''];
   steps.forEach((step, index) => {
-    lines.push(`${index + 1}  ${step.title} = ${step.result}`);
+    lines.push(`${index + 1}  ${step.title} = ${step.result.plain}`);
     lines.push(`   ${step.formulaText}`);
-    if (step.values) lines.push(`   ${step.values}`);
+    if (step.values.plain) lines.push(`   ${step.values.plain}`);
     lines.push($localize`   source: ${step.source}:SOURCE: (${step.method}:METHOD:)`);
     if (step.changed) lines.push($localize`   changed: ${step.changed}:CHANGED:`);
     for (const assumed of step.assumed) lines.push($localize`   assumed: ${assumed}:ASSUMED:`);
@@ -17,7 +16,7 @@ export function derivationText(derivation: Derivation): string {
   if (budget.length) {
     lines.push('', $localize`Where the uncertainty comes from`);
     for (const { label, share, u: standard } of budget) {
-      lines.push(`   ${percent(share).padStart(5)}  ${label}${standard ? ` (u = ${standard})` : ''}`);
+      lines.push(`   ${percent(share).padStart(5)}  ${label}${standard ? ` (u = ${standard.plain})` : ''}`);
     }
   }
   if (budgetNote) lines.push(budgetNote);

@@ -1,5 +1,5 @@
 import { Injectable, computed, inject } from '@angular/core';
-import { THIN_SPACE, formatNumber, formatSigned } from '../../core/numbers/format-number';
+import { THIN_SPACE, formatNumber, formatSignificant, formatSigned } from '../../core/numbers/format-number';
 import { Preferences } from '../../core/preferences/preferences';
 import { type Display, type QuantityKind, displayOf } from './quantity-kinds';
 
@@ -30,6 +30,11 @@ export class QuantityFormat {
     const { digits, factor } = this.display(kind);
     const write = options.signed ? formatSigned : formatNumber;
     return write(value * factor, options.digits ?? digits, this.preferences.numberLocale());
+  }
+
+  /** A number inside a calculation: `1.577 × 10⁻⁵`. */
+  significant(value: number, digits: number): string {
+    return formatSignificant(value, digits, this.preferences.numberLocale());
   }
 
   /** `0.594 ± 0.008 m²` */

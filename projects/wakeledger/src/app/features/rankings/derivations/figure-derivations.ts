@@ -3,11 +3,12 @@ import { Store } from '@ngrx/store';
 import type { RankingView, ViewRow } from '#shared/core/ranking/ranking-view';
 import { type DerivationSources, selectDerivationSources } from '../../../data/rankings/rankings.selectors';
 import type { Derivation, DerivationStep } from '../../../ui/derivation-sheet/derivation';
+import { stepFromTrace } from '../../../ui/derivation-sheet/from-trace';
 import { QuantityFormat } from '../../../ui/quantity/quantity-format';
 import type { FigureKind } from '../figure-kind';
 import { energyInUnits } from './figure-steps';
 import { closingSteps, headOf, outlineDerivation, sharesOfRow } from './outline';
-import { dragTrace, energyTrace, shownStep } from './traces';
+import { dragTrace, energyTrace } from './traces';
 
 /** How a figure of the ranking came about: down to the raw reading for those who hold the inputs. */
 @Injectable({ providedIn: 'root' })
@@ -34,13 +35,13 @@ export class FigureDerivations {
   ): readonly DerivationStep[] | null {
     const drag = dragTrace(kind, row, view, sources);
     if (!drag) return null;
-    const toDragArea = drag.steps.map((step) => shownStep(step, this.format));
+    const toDragArea = drag.steps.map((step) => stepFromTrace(step, this.format));
     if (kind !== 'energy') return [...toDragArea, ...closingSteps(kind, row, view, this.format)];
     const energy = energyTrace(row, sources);
     if (!energy) return null;
     return [
       ...toDragArea,
-      ...energy.steps.map((step) => shownStep(step, this.format)),
+      ...energy.steps.map((step) => stepFromTrace(step, this.format)),
       ...energyInUnits(row, view, this.format),
     ];
   }

@@ -1,8 +1,10 @@
 import { ENERGY_METHODS as METHODS_OF_ENERGY } from '#shared/core/derivation/energy-methods';
+import { inValues, plain } from '#shared/core/derivation/in-values';
 import { nameOf, type Method } from '#shared/core/derivation/method';
 import { REDUCTION_METHODS as METHODS } from '#shared/core/derivation/reduction-methods';
 import type { RankingView, ViewCoefficient, ViewRow } from '#shared/core/ranking/ranking-view';
 import type { DerivationStep } from '../../../ui/derivation-sheet/derivation';
+import { plainFigure, wordedValues } from '../../../ui/derivation-sheet/worded';
 import type { QuantityFormat } from '../../../ui/quantity/quantity-format';
 
 /** C_D = C_D·A/A on the common area: the step after which a figure depends on somebody's choice. */
@@ -32,15 +34,22 @@ function coefficientStep(
 ): DerivationStep {
   return {
     title: method.title,
-    result: format.text(value, 'coefficient', { expandedU: expandedUncertainty }),
+    result: {
+      shown: format.text(value, 'coefficient', { expandedU: expandedUncertainty }),
+      plain: plainFigure(value, expandedUncertainty, ''),
+    },
     formulaMathml: method.formulaMathml,
     formulaText: method.formulaText,
-    values: `${format.text(row.figure.dragAreaM2, 'drag-area', { digits: 4 })} / ${format.text(areaM2, 'area')}`,
+    values: wordedValues(inValues`${row.figure.dragAreaM2} m² / ${areaM2} m²`, format),
     source: method.source,
     method: nameOf(method),
     assumed: [],
     cautions: [],
   };
+}
+
+function cycleWords(cycle: string, distance: string, perCount: string): string {
+  return $localize`${cycle}:CYCLE:, ${distance}:DISTANCE:; one count costs ${perCount}:COUNT:`;
 }
 
 /** The energy in the person's unit, and what a count costs. */
@@ -54,12 +63,26 @@ export function energyInUnits(
   return [
     {
       title: $localize`Energy at the wheel over the distance`,
-      result: format.text(energy.wheelEnergyWhPerKm, 'energy-per-distance', {
-        expandedU: energy.expandedUncertaintyWhPerKm,
-      }),
+      result: {
+        shown: format.text(energy.wheelEnergyWhPerKm, 'energy-per-distance', {
+          expandedU: energy.expandedUncertaintyWhPerKm,
+        }),
+        plain: plainFigure(energy.wheelEnergyWhPerKm, energy.expandedUncertaintyWhPerKm, 'Wh/km'),
+      },
       formulaMathml: '<mfrac><mi>E</mi><mi>d</mi></mfrac>',
       formulaText: 'E/d',
-      values: $localize`${view.cycle.name}:CYCLE:, ${format.text(view.cycle.distanceM / 1000, 'distance')}:DISTANCE:; one count costs ${format.text(energy.whPerKmPerCount, 'energy-per-distance', { digits: 2 })}:COUNT:`,
+      values: {
+        shown: cycleWords(
+          view.cycle.name,
+          format.text(view.cycle.distanceM / 1000, 'distance'),
+          format.text(energy.whPerKmPerCount, 'energy-per-distance', { digits: 2 }),
+        ),
+        plain: cycleWords(
+          view.cycle.name,
+          `${plain(view.cycle.distanceM / 1000)} km`,
+          `${plain(energy.whPerKmPerCount)} Wh/km`,
+        ),
+      },
       source: METHODS_OF_ENERGY.cycleEnergy.source,
       method: nameOf(METHODS_OF_ENERGY.cycleEnergy),
       assumed: row.baseStandsIn
@@ -80,15 +103,18 @@ export function energySteps(
 ): readonly DerivationStep[] {
   const { energy } = row;
   if (!energy || !view.cycle) return [];
-  const number = (value: number, digits: number): string => format.value(value, 'number', { digits });
+  const { f0N, f1NPerKmh, f2NPerKmh2 } = energy;
   const method = METHODS_OF_ENERGY.builtUpRoadLoad;
   return [
     {
       title: $localize`Road load`,
-      result: `${number(energy.f2NPerKmh2, 5)} N/(km/h)²`,
+      result: wordedValues(inValues`${f2NPerKmh2} N/(km/h)²`, format),
       formulaMathml: method.formulaMathml,
       formulaText: method.formulaText,
-      values: `ρ = ${format.text(view.air.densityKgM3, 'density')}, m = ${format.text(row.massKg ?? 0, 'mass')}: f0 = ${number(energy.f0N, 2)} N, f1 = ${number(energy.f1NPerKmh, 4)} N/(km/h)`,
+      values: wordedValues(
+        inValues`ρ = ${view.air.densityKgM3} kg/m³, m = ${row.massKg} kg: f_0 = ${f0N} N, f_1 = ${f1NPerKmh} N/(km/h)`,
+        format,
+      ),
       source: method.source,
       method: nameOf(method),
       assumed: [$localize`mass and rolling resistance of ${row.configuration ?? ''}:CONFIGURATION:`],

@@ -1,13 +1,12 @@
+import { plain } from '#shared/core/derivation/in-values';
 import type { RankingView, ViewContribution, ViewRow, ViewStep } from '#shared/core/ranking/ranking-view';
 import type { BudgetShare, Derivation, DerivationStep } from '../../../ui/derivation-sheet/derivation';
+import { plainFigure, wordedUncertainty } from '../../../ui/derivation-sheet/worded';
 import type { QuantityFormat } from '../../../ui/quantity/quantity-format';
 import { evidenceWords } from '../evidence-line';
 import type { FigureKind } from '../figure-kind';
 import { cautionWords, contributionWords, stepWords } from '../method-words';
 import { commonAreaStep, energySteps, ownAreaStep } from './figure-steps';
-
-/** Digits of amounts of uncertainty [m²]. */
-const AMOUNT_DIGITS = 4;
 
 function budgetShares(
   contributions: readonly ViewContribution[],
@@ -16,7 +15,7 @@ function budgetShares(
   return contributions.map((each) => ({
     label: contributionWords(each),
     share: each.shareOfVariance,
-    u: format.text(Math.abs(each.amountM2), 'drag-area', { digits: AMOUNT_DIGITS }),
+    u: wordedUncertainty(each.amountM2, 'm²', format),
   }));
 }
 
@@ -36,10 +35,13 @@ function outlineStep(
 ): DerivationStep {
   return {
     title: stepWords(step),
-    result: format.text(dragAreaM2, 'drag-area', { digits: 4 }),
+    result: {
+      shown: format.text(dragAreaM2, 'drag-area', { digits: 4 }),
+      plain: `${plain(dragAreaM2)} m²`,
+    },
     formulaMathml: '<mrow><msub><mi>C</mi><mi>D</mi></msub><mi>A</mi></mrow>',
     formulaText: 'C_D·A',
-    values: '',
+    values: { shown: '', plain: '' },
     source: $localize`the raw readings are kept with the result, for those who may see them`,
     method: `${step}@1`,
     assumed: [],
@@ -83,6 +85,7 @@ export function headOf(
           value: value(row.figure.dragAreaM2, 'drag-area'),
           expandedU: value(row.figure.expandedUncertaintyM2, 'drag-area'),
           unit: 'm²',
+          plain: plainFigure(row.figure.dragAreaM2, row.figure.expandedUncertaintyM2, 'm²'),
         },
         summary: $localize`${from}:FROM:. Carried figure, ${basis}:BASIS:. ${coverage}:COVERAGE:.`,
       };
@@ -92,6 +95,7 @@ export function headOf(
           value: value(row.onCommonArea.value, 'coefficient'),
           expandedU: value(row.onCommonArea.expandedUncertainty, 'coefficient'),
           unit: '',
+          plain: plainFigure(row.onCommonArea.value, row.onCommonArea.expandedUncertainty, ''),
         },
         summary: $localize`${from}:FROM:. Drag coefficient on the common area of ${format.text(view.commonAreaM2, 'area')}:AREA:, ${basis}:BASIS:. ${coverage}:COVERAGE:.`,
       };
@@ -101,6 +105,7 @@ export function headOf(
           value: value(row.onOwnArea.value, 'coefficient'),
           expandedU: value(row.onOwnArea.expandedUncertainty, 'coefficient'),
           unit: '',
+          plain: plainFigure(row.onOwnArea.value, row.onOwnArea.expandedUncertainty, ''),
         },
         summary: $localize`${from}:FROM:. Drag coefficient on its own frontal area of ${format.text(row.onOwnArea.areaM2, 'area')}:AREA:, ${basis}:BASIS:. ${coverage}:COVERAGE:.`,
       };
@@ -110,6 +115,11 @@ export function headOf(
           value: value(row.energy?.wheelEnergyWhPerKm ?? 0, 'energy-per-distance'),
           expandedU: value(row.energy?.expandedUncertaintyWhPerKm ?? 0, 'energy-per-distance'),
           unit: format.display('energy-per-distance').unit,
+          plain: plainFigure(
+            row.energy?.wheelEnergyWhPerKm ?? 0,
+            row.energy?.expandedUncertaintyWhPerKm ?? 0,
+            'Wh/km',
+          ),
         },
         summary: $localize`${from}:FROM:. Energy at the wheel on ${view.cycle?.name ?? ''}:CYCLE:, from the zero-yaw drag area; an estimate.`,
       };

@@ -1,12 +1,9 @@
-import type { DerivationStep as TracedStep, Derivation as Trace } from '#shared/core/derivation/derivation';
+import type { Derivation as Trace } from '#shared/core/derivation/derivation';
 import type { KeyNames } from '#shared/core/derivation/key-labels';
 import { traceOfEnergy } from '#shared/core/derivation/trace-of-energy';
 import { traceOfReduction } from '#shared/core/derivation/trace-of-figure';
 import type { RankingView, ViewRow } from '#shared/core/ranking/ranking-view';
 import type { DerivationSources } from '../../../data/rankings/rankings.selectors';
-import type { DerivationStep } from '../../../ui/derivation-sheet/derivation';
-import { decimalsOf } from '../../../ui/derivation-sheet/from-trace';
-import type { QuantityFormat } from '../../../ui/quantity/quantity-format';
 import type { FigureKind } from '../figure-kind';
 
 /** Whatever a key of a budget can belong to, by its id. */
@@ -45,20 +42,4 @@ export function energyTrace(row: ViewRow, sources: DerivationSources): Trace | n
   const { densityKgM3: airDensityKgM3 } = reduced.context.referenceAir;
   const { rotatingFactor } = inputs.programme;
   return traceOfEnergy({ variant, zeroYaw }, { cycle, airDensityKgM3, rotatingFactor }, keyNames(sources));
-}
-
-/** A traced step as the sheet shows it, in the person's marks. */
-export function shownStep(step: TracedStep, format: QuantityFormat): DerivationStep {
-  const value = format.value(step.value, 'number', { digits: decimalsOf(step.value) });
-  return {
-    title: step.title,
-    result: step.unit === '' ? value : `${value}\u202f${step.unit}`,
-    formulaMathml: step.formulaMathml,
-    formulaText: step.formulaText,
-    values: step.values,
-    source: step.source,
-    method: `${step.methodId}@${step.version}`,
-    assumed: step.assumed,
-    cautions: step.cautions,
-  };
 }

@@ -14,7 +14,6 @@ import {
 import { type AbstractControl, NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { Router, RouterLink } from '@angular/router';
 import { Store } from '@ngrx/store';
-import { AIR_STATES } from '#shared/contracts/condition';
 import { QUANTITIES } from '#shared/contracts/results';
 import type { ApiProblem, ProblemIssue } from '../../../core/api/api-problem';
 import { newCommandKey } from '../../../core/api/command-key';
@@ -30,19 +29,17 @@ import { ConditionFields } from '../../../ui/condition/condition-fields';
 import { setCondition } from '../../../ui/condition/condition-form';
 import { controlError, showIssues } from '../../../ui/field/control-error';
 import { Field, WlInput } from '../../../ui/field/field';
-import { PRESSURE_UNITS, SPEED_UNITS, limitIn } from '../../../ui/field/measured-units';
 import { NumberField } from '../../../ui/field/number-field';
 import { ProblemBanner } from '../../../ui/problem-banner/problem-banner';
 import { QuantityFormat } from '../../../ui/quantity/quantity-format';
-import { AIR_STATE_WORDS, QUANTITY_UNITS, QUANTITY_WORDS } from '../../../ui/words/evidence-words';
+import { QUANTITY_UNITS, QUANTITY_WORDS } from '../../../ui/words/evidence-words';
 import { exactly } from '../page/raw-lines';
 import { EvidenceFile } from './evidence-file';
+import { FlowFields } from './flow-fields';
 import { PointsTable } from './points-table';
 import { previewOf } from './preview';
 import { PreviewPanel } from './preview-panel';
 import { resultFieldsOf, resultForm } from './result-form';
-
-const STATES_OF_AIR = ['custom', ...AIR_STATES] as const;
 
 /** What was measured? A result typed by hand, with what it would come to beside it. */
 @Component({
@@ -51,6 +48,7 @@ const STATES_OF_AIR = ['custom', ...AIR_STATES] as const;
     ConditionFields,
     EvidenceFile,
     Field,
+    FlowFields,
     NumberField,
     PointsTable,
     PreviewPanel,
@@ -89,13 +87,6 @@ export class ResultEntryPage implements HoldsChanges {
   });
 
   protected readonly quantities = QUANTITIES.map((value) => ({ value, words: QUANTITY_WORDS[value] }));
-  protected readonly airStates = STATES_OF_AIR.map((value) => ({
-    value,
-    words: value === 'custom' ? $localize`as measured` : AIR_STATE_WORDS[value],
-  }));
-  protected readonly coastdownHint = $localize`The state that f2 is corrected to: two common ones are nearly 2 % apart`;
-  protected readonly speedUnits = SPEED_UNITS.map(({ unit }) => unit);
-  protected readonly pressureUnits = PRESSURE_UNITS.map(({ unit }) => unit).toReversed();
   protected readonly today = new Date().toISOString().slice(0, 10);
 
   protected readonly value = computed(() => {
@@ -109,14 +100,6 @@ export class ResultEntryPage implements HoldsChanges {
     () => this.value().quantity === 'force' && this.value().tareAlreadySubtracted === 'no',
   );
   protected readonly isModel = computed(() => (this.value().scale ?? 1) < 1);
-  protected readonly pressureLimits = computed(() => {
-    const { pressureUnit } = this.value().air;
-    return {
-      minimum: limitIn(30_000, pressureUnit, PRESSURE_UNITS),
-      maximum: limitIn(1_000_000, pressureUnit, PRESSURE_UNITS),
-    };
-  });
-
   private readonly chosenFacility = computed(() =>
     this.facilities().find(({ id }) => id === this.value().facilityId),
   );

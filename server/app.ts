@@ -1,10 +1,12 @@
 import { resolve } from 'node:path';
+import compression from 'compression';
 import express, { type Express } from 'express';
 import { pinoHttp } from 'pino-http';
 import type { Container } from './container';
+import { newestMigration } from './db/newest-migration';
 import { serveClient } from './http/client-files';
 import { mount } from './http/handle';
-import { newestMigration, serveHealth } from './http/health';
+import { serveHealth } from './http/health';
 import type { ServerModule } from './http/module';
 import { openApiDocument } from './http/openapi';
 import { checkOrigin } from './http/origin-check';
@@ -15,6 +17,9 @@ import { securityHeaders } from './http/security-headers';
 
 /** JSON bodies up to this many bytes are read: a speed trace of a day fits, a file does not. */
 const JSON_LIMIT = 2 * 1024 * 1024;
+
+/** Answers from this many bytes on are compressed; smaller ones fit into a packet or two anyway. */
+const COMPRESSED_FROM = 2048;
 
 /** The whole HTTP application. It never listens: `main.ts` and the tests do that, each in its own way. */
 export function createApp(
@@ -37,6 +42,7 @@ export function createApp(
     }),
   );
   app.use(...securityHeaders(config.secure));
+  app.use(compression({ threshold: COMPRESSED_FROM }));
   serveHealth(app, container.pools, newestMigration(migrations));
   app.use('/api', checkOrigin(config.publicOrigins));
   app.use('/api', express.json({ limit: JSON_LIMIT, strict: true, type: 'application/json' }));

@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import express, { type IRouter, type RequestHandler } from 'express';
+import { preferCompressed, withoutEncoding } from './compressed-files';
 import { ProblemError } from './problem-error';
 import { nonceOf } from './security-headers';
 
@@ -20,12 +21,13 @@ export function serveClient(router: IRouter, directory: string): void {
   router.get('/', sendPage);
   router.get('/index.html', sendPage);
   router.use(
+    preferCompressed(directory),
     express.static(directory, {
       index: false,
       redirect: false,
       dotfiles: 'ignore',
       setHeaders: (res, path) => {
-        const hashed = /-[A-Z0-9]{8}\.[a-z0-9]+$/.test(path);
+        const hashed = /-[A-Z0-9]{8}\.[a-z0-9]+$/.test(withoutEncoding(path));
         res.setHeader('Cache-Control', hashed ? 'public, max-age=31536000, immutable' : 'no-cache');
       },
     }),

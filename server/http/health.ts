@@ -1,20 +1,8 @@
-import { readFileSync } from 'node:fs';
-import { join } from 'node:path';
 import { sql } from 'drizzle-orm';
 import type { IRouter } from 'express';
 import { inPlatform } from '../db/in-tenant';
 import type { Pools } from '../db/pools';
 import { ProblemError } from './problem-error';
-
-interface Journal {
-  readonly entries: readonly { readonly when: number }[];
-}
-
-/** When the newest migration that this code knows was written, as drizzle-kit's journal states it. */
-export function newestMigration(directory: string): number {
-  const journal = JSON.parse(readFileSync(join(directory, 'meta', '_journal.json'), 'utf8')) as Journal;
-  return Math.max(...journal.entries.map((entry) => entry.when));
-}
 
 /** `/healthz`: the process answers. `/readyz`: the database answers too and stands at this code's migrations. */
 export function serveHealth(router: IRouter, pools: Pools, expectedMigration: number): void {

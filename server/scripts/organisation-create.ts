@@ -4,6 +4,7 @@ import * as z from 'zod';
 import { ORGANISATION_KINDS } from '#shared/access/roles';
 import { tokenHash } from '../modules/session';
 import { currentUrls, withClient } from './start/database';
+import { STATE_FOLDER, THROWAWAY_FOLDER } from './start/state-folder';
 
 const USAGE =
   'npm run organisation:create -- --name "Northgate Cars" --slug northgate --email a@northgate.example --person "Ada Birch" [--kind maker|supplier]';
@@ -20,9 +21,18 @@ const wanted = z.object({
 async function main(): Promise<void> {
   const text = { type: 'string' } as const;
   const { values } = parseArgs({
-    options: { name: text, slug: text, email: text, person: text, kind: text },
+    options: {
+      name: text,
+      slug: text,
+      email: text,
+      person: text,
+      kind: text,
+      throwaway: { type: 'boolean' },
+    },
   });
-  const parsed = wanted.safeParse(values);
+  // The browser tests have an installation of their own.
+  const { throwaway, ...fields } = values;
+  const parsed = wanted.safeParse(fields);
   if (!parsed.success) {
     const wrong = parsed.error.issues.map((issue) => `--${issue.path.join('.')}: ${issue.message}`);
     process.stderr.write(`${wrong.join('\n')}\n${USAGE}\n`);
@@ -30,7 +40,7 @@ async function main(): Promise<void> {
     return;
   }
   const { name, slug, email, person, kind } = parsed.data;
-  const { urls } = currentUrls(process.env, process.cwd());
+  const { urls } = currentUrls(process.env, process.cwd(), throwaway ? THROWAWAY_FOLDER : STATE_FOLDER);
   const token = randomBytes(32).toString('base64url');
   await withClient(urls.maintenance, async (client) => {
     const organisationId = randomUUID();

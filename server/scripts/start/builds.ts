@@ -1,55 +1,89 @@
-import { spawnSync } from 'node:child_process';
+import { spawn } from 'node:child_process';
 import { createHash } from 'node:crypto';
-import { existsSync, mkdirSync, readFileSync, readdirSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { build } from 'esbuild';
+import { compressClient } from './compress-client';
+import { buildServer, serverBundleIsFresh } from './server-bundle';
 
 export const CLIENT_FOLDER = 'dist/client';
-export const SERVER_BUNDLE = 'dist/server/main.mjs';
 const STAMP = 'dist/client.built-from';
-const SOURCES = ['projects', 'shared', 'angular.json', 'package-lock.json', 'tsconfig.json'];
+const SOURCES = [
+  'projects',
+  'shared',
+  'angular.json',
+  'package-lock.json',
+  'tsconfig.json',
+  'server/scripts/start/compress-client.ts',
+];
 
-/** Builds the client unless what stands in dist was built from these very sources. */
-export function buildClientWhenStale(root: string, say: (line: string) => void): void {
-  const fingerprint = fingerprintOf(root);
+/**
+ * Builds the client and the server unless what stands in dist was built from these very sources. Runs beside whatever
+ * else a start has to do.
+ *
+ * @param signal ends a build that is under way
+ */
+export async function bringBuildsUpToDate(
+  root: string,
+  say: (line: string) => void,
+  signal: AbortSignal,
+): Promise<void> {
+  if (!serverBundleIsFresh(root)) {
+    await buildServer(root);
+    prepareMachineEntry(root);
+  }
+  if (clientIsFresh(root)) return;
+  say('Building the client …');
+  await buildClient(root, signal);
+}
+
+function clientIsFresh(root: string): boolean {
   const stamp = join(root, STAMP);
   const standing = existsSync(stamp) ? readFileSync(stamp, 'utf8') : '';
-  if (standing === fingerprint && existsSync(join(root, CLIENT_FOLDER, 'index.html'))) return;
-  say('Building the client …');
-  buildClient(root);
+  return standing === fingerprintOf(root) && existsSync(join(root, CLIENT_FOLDER, 'index.html'));
 }
 
 /** @throws {Error} when the build fails; what it said has been printed */
-export function buildClient(root: string): void {
+export async function buildClient(root: string, signal?: AbortSignal): Promise<void> {
   const fingerprint = fingerprintOf(root);
-  const done = spawnSync(process.execPath, ['node_modules/@angular/cli/bin/ng.js', 'build'], {
-    cwd: root,
-    stdio: ['ignore', 'pipe', 'pipe'],
-    encoding: 'utf8',
-    env: { ...process.env, NG_CLI_ANALYTICS: 'false' },
-  });
-  if (done.status !== 0) {
-    process.stderr.write(`${done.stdout}\n${done.stderr}\n`);
+  // Until the end the folder is half a client.
+  rmSync(join(root, STAMP), { force: true });
+  const { code, output } = await runBuild(root, signal);
+  if (signal?.aborted) throw new Error('The build of the client was stopped.');
+  if (code !== 0) {
+    process.stderr.write(`${output}\n`);
     throw new Error('The client cannot be built.');
   }
+  await compressClient(join(root, CLIENT_FOLDER));
   mkdirSync(join(root, 'dist'), { recursive: true });
   writeFileSync(join(root, STAMP), fingerprint);
 }
 
-/** One file of the server's own code; packages stay outside it. */
-export async function buildServer(root: string): Promise<void> {
-  await build({
-    absWorkingDir: root,
-    entryPoints: ['server/main.ts'],
-    outfile: SERVER_BUNDLE,
-    bundle: true,
-    platform: 'node',
-    target: 'node20',
-    format: 'esm',
-    packages: 'external',
-    sourcemap: true,
-    logLevel: 'error',
+function runBuild(root: string, signal: AbortSignal | undefined): Promise<{ code: number; output: string }> {
+  return new Promise((resolve) => {
+    const child = spawn(process.execPath, ['node_modules/@angular/cli/bin/ng.js', 'build'], {
+      cwd: root,
+      stdio: ['ignore', 'pipe', 'pipe'],
+      env: { ...process.env, NG_CLI_ANALYTICS: 'false' },
+      ...(signal === undefined ? {} : { signal }),
+    });
+    let output = '';
+    const collect = (chunk: Buffer) => {
+      output += chunk.toString('utf8');
+    };
+    child.stdout.on('data', collect);
+    child.stderr.on('data', collect);
+    child.once('error', (error) => resolve({ code: 1, output: `${output}\n${error.message}` }));
+    child.once('close', (code) => resolve({ code: code ?? 1, output }));
   });
+}
+
+/** The machine entry keeps a bundle of its own, made at its first call: here is time for it, there is none. */
+function prepareMachineEntry(root: string): void {
+  spawn(process.execPath, ['server/scripts/method.mjs', '--list'], {
+    cwd: root,
+    stdio: 'ignore',
+    detached: true,
+  }).unref();
 }
 
 function fingerprintOf(root: string): string {

@@ -32,17 +32,21 @@ export function privateUrls(port: number, secrets: Secrets): DatabaseUrls {
 }
 
 /** For the commands beside the server: the given logins, else those of the private cluster that runs now. */
-export function currentUrls(env: NodeJS.ProcessEnv, root: string): { urls: DatabaseUrls; external: boolean } {
+export function currentUrls(
+  env: NodeJS.ProcessEnv,
+  root: string,
+  stateName = STATE_FOLDER,
+): { urls: DatabaseUrls; external: boolean } {
   const given = externalUrls(env);
   if (given !== undefined) return { urls: given, external: true };
-  const note = join(root, STATE_FOLDER, 'running.json');
+  const note = join(root, stateName, 'running.json');
   if (!existsSync(note)) {
     throw new Error(
       'No database: start the product first (npm start), or give the DATABASE_URL_* variables.',
     );
   }
   const { databasePort } = JSON.parse(readFileSync(note, 'utf8')) as { databasePort: number };
-  return { urls: privateUrls(databasePort, openSecrets(join(root, STATE_FOLDER))), external: false };
+  return { urls: privateUrls(databasePort, openSecrets(join(root, stateName))), external: false };
 }
 
 function mapRoles(value: (role: DatabaseRole) => string): DatabaseUrls {

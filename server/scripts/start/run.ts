@@ -11,12 +11,13 @@ import {
   stopCluster,
 } from '../cluster/cluster';
 import { clusterUser } from '../cluster/find-postgres';
-import { buildClientWhenStale, buildServer, CLIENT_FOLDER, SERVER_BUNDLE } from './builds';
+import { bringBuildsUpToDate, CLIENT_FOLDER } from './builds';
 import { type DatabaseUrls, externalUrls, prepareDatabase } from './database';
 import { startDevelopmentClient } from './development-client';
 import { ensurePostgres } from './install-postgres';
 import { readyLine } from './ready-line';
 import { seedDemoOnce, seedReference } from './seeding';
+import { SERVER_BUNDLE } from './server-bundle';
 import { requirePort, startServer } from './server-process';
 import { takeStartLock } from './start-lock';
 import {
@@ -77,6 +78,7 @@ async function bringUp(
   await requirePort(host, port);
 
   const external = externalUrls(process.env);
+  const built = development ? Promise.resolve() : buildMeanwhile(root, undo);
   const deaths: Promise<string>[] = [];
   let urls: DatabaseUrls;
   if (external === undefined) {
@@ -103,10 +105,7 @@ async function bringUp(
     say('The demo scenario has been set up.');
   }
 
-  if (!development) {
-    buildClientWhenStale(root, say);
-    await buildServer(root);
-  }
+  await built;
   const server = await startServer(
     development ? ['--watch', '--import', 'tsx', 'server/main.ts'] : ['--enable-source-maps', SERVER_BUNDLE],
     root,
@@ -121,6 +120,19 @@ async function bringUp(
     external === undefined ? { maintenanceUrl: urls.maintenance, password: secrets.demo } : undefined;
   say(await readyLine(process.env['PUBLIC_ORIGINS']?.split(',')[0] ?? `http://${host}:${port}`, demo));
   return { death: Promise.race(deaths) };
+}
+
+/** Begins to build what is stale while the database comes up; a start that fails or is stopped ends it. */
+function buildMeanwhile(root: string, undo: Undo[]): Promise<void> {
+  const stop = new AbortController();
+  const built = bringBuildsUpToDate(root, say, stop.signal);
+  // Awaited later; until then its failure is nobody's.
+  const settled = built.catch(() => undefined);
+  undo.push(() => {
+    stop.abort();
+    return settled;
+  });
+  return built;
 }
 
 function clusterPlace(root: string, stateName: string, stateFolder: string): ClusterPlace {

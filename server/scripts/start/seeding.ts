@@ -1,7 +1,5 @@
 import type pg from 'pg';
-import { seedDemo } from '../../../seeds/demo/index';
 import { loadReferenceCycles } from '../../../seeds/reference/load-reference-cycles';
-import { hashPassword } from '../../modules/session';
 import { withClient } from './database';
 
 /** The built-in cycles: in every installation, and again after every update. */
@@ -14,6 +12,9 @@ export async function seedDemoOnce(maintenanceUrl: string, password: string): Pr
   return withClient(maintenanceUrl, async (client) => {
     const { rowCount } = await client.query('select from organisations limit 1');
     if (rowCount !== 0) return false;
+    // Loaded only now: they bring half the product with them, and a second start does not need them.
+    const { seedDemo } = await import('../../../seeds/demo/index');
+    const { hashPassword } = await import('../../modules/session');
     const passwordHash = await hashPassword(password);
     await inTransaction(client, () => seedDemo(client, { passwordHash }));
     return true;

@@ -38,12 +38,13 @@ describe('a traced step on the sheet', () => {
     const values = inValues`½ × ${1.156812} kg/m³ × (${140 / 3.6} m/s)², ν_k = ${1.577234e-5} m²/s, ${21.5} °C`;
     expect(stepFromTrace(traced({ values }), format()).values).toEqual({
       shown:
-        '½ × 1.1568\u202fkg/m³ × (38.889\u202fm/s)², ν_k = 1.577\u00a0×\u00a010⁻⁵\u202fm²/s, 21.5\u202f°C',
+        '½ × 1.1568\u202fkg/m³ × (38.889\u202fm/s)², ν_k\u00a0=\u00a01.577\u00a0×\u00a010⁻⁵\u202fm²/s, 21.5\u202f°C',
       plain: '½ × 1.156812 kg/m³ × (38.88889 m/s)², ν_k = 0.00001577234 m²/s, 21.5 °C',
     });
   });
 
   it('says a standard uncertainty with two digits, however small', () => {
+    expect(wordedUncertainty(0.002, 'm²', format()).shown).toBe('0.0020\u202fm²');
     expect(wordedUncertainty(-0.00041234, 'm²', format())).toEqual({
       shown: '0.00041\u202fm²',
       plain: '0.00041234 m²',

@@ -21,7 +21,8 @@ export function wordedValues(values: InValues, format: QuantityFormat): Worded {
     if (typeof part === 'number') return format.significant(part, VALUE_DIGITS);
     return typeof values[index - 1] === 'number' ? part.replace(/^ (?=[\p{L}°%])/u, THIN_SPACE) : part;
   });
-  return { shown: shown.join(''), plain: valuesAsText(values) };
+  // A symbol stays on one line with what it equals.
+  return { shown: shown.join('').replaceAll(' = ', '\u00a0=\u00a0'), plain: valuesAsText(values) };
 }
 
 function resultWords({ methodId, value, unit }: TracedStep, format: QuantityFormat): string {
@@ -40,11 +41,16 @@ export function wordedResult(step: TracedStep, format: QuantityFormat): Worded {
   return { shown: resultWords(step, format), plain: `${plain(step.value)} ${step.unit}`.trim() };
 }
 
-/** A standard uncertainty: two digits say all that is known of it. */
+function uncertaintyDecimals(size: number): number {
+  if (size === 0) return 0;
+  return Math.min(6, Math.max(0, 1 - Math.floor(Math.log10(size))));
+}
+
+/** A standard uncertainty: two digits that count say all that is known of it. */
 export function wordedUncertainty(amount: number, unit: string, format: QuantityFormat): Worded {
   const size = Math.abs(amount);
   return {
-    shown: withUnit(format.significant(size, 2), unit),
+    shown: withUnit(format.value(size, 'number', { digits: uncertaintyDecimals(size) }), unit),
     plain: `${plain(size)} ${unit}`.trim(),
   };
 }

@@ -49,6 +49,20 @@ export function ruleWords(rule: ViewExclusionRule, format: QuantityFormat, local
   return rule.detail ?? $localize`the method refused it (${code}:CODE:)`;
 }
 
+/** Why a rule keeps results out, without what it found in one of them. */
+export function ruleTitle(rule: ViewExclusionRule, format: QuantityFormat, locale: NumberLocale): string {
+  if (rule.rule === 'not-comparable') return $localize`not comparable with the reference condition`;
+  if (rule.rule === 'mach') {
+    const limit = format.value(rule.limit ?? 0, 'number', { digits: 2 });
+    return $localize`Mach number over the limit of ${limit}:LIMIT:`;
+  }
+  if (rule.rule === 'blockage') {
+    const limit = format.text(100 * (rule.limit ?? 0), 'percent', { digits: 1 });
+    return $localize`blockage over the limit of ${limit}:LIMIT:`;
+  }
+  return ruleWords({ ...rule, detail: null }, format, locale);
+}
+
 const REMEDIES: Readonly<Record<Remedy, string>> = {
   'include-with-reason': $localize`An aerodynamicist may include it with a written reason once adjustments are open; until then measure in the reference condition.`,
   'change-policy': $localize`The limit is a policy of the organisation; a programme manager or aerodynamicist may ask for another.`,
@@ -58,7 +72,12 @@ const REMEDIES: Readonly<Record<Remedy, string>> = {
 
 export const remedyWords = (remedy: Remedy): string => REMEDIES[remedy];
 
-/** `Crossback, Fixed floor tunnel, 3 March 2026` is the name; this is the rest of the line. */
+/** `Crossback, B-2603-05, Burnholt fixed floor, 2026-03-03` */
+export function exclusionName({ variantName, name, facilityName, testDate }: ViewExclusion): string {
+  return [variantName, name, facilityName, testDate].filter(Boolean).join(', ');
+}
+
+/** Every reason why a result stayed out. */
 export function exclusionReasons(
   exclusion: ViewExclusion,
   format: QuantityFormat,

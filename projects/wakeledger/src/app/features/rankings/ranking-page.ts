@@ -15,7 +15,6 @@ import { CHOICE_NAMES, type ChoiceName, type ChoiceQuery } from '#shared/core/ra
 import { lowestInputOfView } from '#shared/core/ranking/ranking-view-lowest';
 import { csvText } from '../../core/export/csv';
 import { saveText } from '../../core/export/save-file';
-import { Preferences } from '../../core/preferences/preferences';
 import { Session } from '../../core/session/session';
 import { LowestProbabilities } from '../../data/rankings/lowest-probabilities';
 import { type RankingMode, RankingPageActions } from '../../data/rankings/rankings.actions';
@@ -27,12 +26,12 @@ import { EmptyState } from '../../ui/empty-state/empty-state';
 import { ProblemBanner } from '../../ui/problem-banner/problem-banner';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
 import { FigureDerivations } from './derivations/figure-derivations';
-import { exclusionReasons, remedyWords } from './exclusion-words';
 import { OrderComparison } from './order-comparison';
 import { RankingChart } from './ranking-chart';
 import { RankingControls } from './ranking-controls';
 import { rankingRows } from './ranking-export';
 import { type FigureAsked, RankingTable } from './ranking-table';
+import { StayedOut } from './stayed-out';
 import { groupSentence, ignoredSentences, noticeSentence } from './ranking-words';
 
 /** Which variant drags most? The ranking, what it rests on, and what it cannot tell. */
@@ -47,6 +46,7 @@ import { groupSentence, ignoredSentences, noticeSentence } from './ranking-words
     RankingControls,
     RankingTable,
     RouterLink,
+    StayedOut,
   ],
   templateUrl: './ranking-page.html',
   styleUrl: './ranking-page.scss',
@@ -60,7 +60,6 @@ export class RankingPage {
   private readonly route = inject(ActivatedRoute);
   private readonly session = inject(Session);
   private readonly format = inject(QuantityFormat);
-  private readonly preferences = inject(Preferences);
   private readonly derivations = inject(FigureDerivations);
   private readonly opener = inject(DerivationOpener);
   private readonly query = toSignal(this.route.queryParamMap);
@@ -121,16 +120,6 @@ export class RankingPage {
       this.worded((view) => groupSentence(group, view, this.format)),
     ),
   );
-  protected readonly stayedOut = computed(() =>
-    (this.view()?.stayedOut ?? []).map((each) => ({
-      id: each.resultId,
-      name: [each.variantName, each.name, each.facilityName, each.testDate].filter(Boolean).join(', '),
-      adopted: each.adopted,
-      reasons: exclusionReasons(each, this.format, this.preferences.numberLocale()),
-      remedies: [...new Set(each.rules.map(({ remedy }) => remedyWords(remedy)))],
-    })),
-  );
-
   constructor() {
     let opened = '';
     effect(() => {

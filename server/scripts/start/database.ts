@@ -10,7 +10,8 @@ import { STATE_FOLDER, type Secrets, openSecrets } from './state-folder';
 export const DATABASE_NAME = 'wakeledger';
 export type DatabaseUrls = Readonly<Record<DatabaseRole, string>>;
 
-const variable = (role: DatabaseRole) => `DATABASE_URL_${role.toUpperCase()}`;
+/** The environment variable that carries a role's login. */
+export const urlVariable = (role: DatabaseRole) => `DATABASE_URL_${role.toUpperCase()}`;
 
 /**
  * The logins of a database server that is already there, one variable per role; undefined when none is given.
@@ -18,10 +19,10 @@ const variable = (role: DatabaseRole) => `DATABASE_URL_${role.toUpperCase()}`;
  * @throws {Error} naming those that are missing when some are given
  */
 export function externalUrls(env: NodeJS.ProcessEnv): DatabaseUrls | undefined {
-  const missing = DATABASE_ROLES.map(variable).filter((name) => !env[name]);
+  const missing = DATABASE_ROLES.map(urlVariable).filter((name) => !env[name]);
   if (missing.length === DATABASE_ROLES.length) return undefined;
   if (missing.length > 0) throw new Error(`Each role needs its own login. Missing: ${missing.join(', ')}`);
-  return mapRoles((role) => env[variable(role)] ?? '');
+  return mapRoles((role) => env[urlVariable(role)] ?? '');
 }
 
 /** The logins of the private cluster at this port. */

@@ -14,6 +14,7 @@ import { clusterUser } from '../cluster/find-postgres';
 import { bringBuildsUpToDate, CLIENT_FOLDER } from './builds';
 import { type DatabaseUrls, externalUrls, prepareDatabase } from './database';
 import { startDevelopmentClient } from './development-client';
+import { requireDatabase } from './external-database';
 import { ensurePostgres } from './install-postgres';
 import { readyLine } from './ready-line';
 import { seedDemoOnce, seedReference } from './seeding';
@@ -78,6 +79,7 @@ async function bringUp(
   await requirePort(host, port);
 
   const external = externalUrls(process.env);
+  if (external !== undefined) await requireDatabase(external);
   const built = development ? Promise.resolve() : buildMeanwhile(root, undo);
   const deaths: Promise<string>[] = [];
   let urls: DatabaseUrls;

@@ -12,7 +12,8 @@ export default defineConfig({
   workers: 2,
   retries: 0,
   forbidOnly: true,
-  timeout: 60_000,
+  // Time for two cores under load: a journey that hangs is found by its expectations, which wait far less.
+  timeout: 180_000,
   expect: { timeout: 15_000 },
   reporter: [
     ['list'],
@@ -35,6 +36,8 @@ export default defineConfig({
         '--disable-background-networking',
         '--disable-component-update',
         '--disable-sync',
+        '--disable-extensions',
+        '--disable-dev-shm-usage',
       ],
     },
   },

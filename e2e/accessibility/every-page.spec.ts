@@ -22,7 +22,7 @@ for (const scheme of ['light', 'dark'] as const) {
 
     for (const role of ['aerodynamicist', 'stylist', 'administrator'] as const) {
       test(`axe objects to no page that a link leads the ${role} to, in ${scheme}`, async ({ page }) => {
-        test.setTimeout(180_000);
+        test.setTimeout(600_000);
         await continueAs(page, role);
         const programme = await programmeNamed(page, 'Dunlin');
         const waiting = ['/programmes', `/programmes/${programme}/ranking`, ...WITHOUT_LINK];

@@ -63,7 +63,7 @@ export const routes: Routes = [
         loadChildren: () => import('./features/cycles/cycles.routes').then((file) => file.routes),
       },
       {
-        path: 'api',
+        path: 'for-scripts',
         title: $localize`How do scripts talk to Wakeledger?`,
         loadComponent: () =>
           import('./features/api-reference/api-reference-page').then((page) => page.ApiReferencePage),

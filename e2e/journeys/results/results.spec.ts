@@ -44,6 +44,7 @@ async function enterSweep(page: Page, { address }: OwnProgramme, name: string): 
 }
 
 test('the list tells what can be compared, narrows, remembers and exports', async ({ page }) => {
+  test.setTimeout(120_000);
   const { address } = await openResults(page);
   await expectAccessible(page);
   await page.getByRole('button', { name: 'excluded 1' }).click();

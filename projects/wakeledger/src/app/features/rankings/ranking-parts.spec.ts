@@ -40,8 +40,10 @@ describe('the ranking’s table', () => {
     const { element } = table();
     const names = [...element.querySelectorAll('.name')].map((name) => name.textContent?.trim());
     expect(names).toEqual(['Liftback', 'Hatch', 'Sport', 'Tourer', 'Crossback']);
-    expect(element.querySelectorAll('svg[role=img]')).toHaveLength(5);
-    expect(element.querySelector('svg[role=img]')?.getAttribute('aria-label')).toContain('carried 0.5');
+    expect(element.querySelectorAll('wl-statement-line svg[role=img]')).toHaveLength(5);
+    expect(element.querySelector('wl-statement-line svg[role=img]')?.getAttribute('aria-label')).toContain(
+      'carried 0.5',
+    );
   });
 
   it('is one stop for the tab key; the arrows go from figure to figure', () => {

@@ -1,6 +1,8 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import type { RankingView, ViewRow } from '#shared/core/ranking/ranking-view';
+import { Picture } from '../../ui/picture/picture';
+import { type BodyDimensions, isBodyShape } from '../../ui/picture/silhouette';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
 import { Quantity } from '../../ui/quantity/quantity';
 import { AxisHead } from '../../ui/statement-line/axis-head';
@@ -25,7 +27,7 @@ export interface FigureAsked {
 /** The ranking as one picture: rank, variant, its place on the shared drag-area axis, its figures. */
 @Component({
   selector: 'wl-ranking-table',
-  imports: [AxisHead, GridFocus, Quantity, RouterLink, RowMovement, StatementLegend, StatementLine],
+  imports: [AxisHead, GridFocus, Picture, Quantity, RouterLink, RowMovement, StatementLegend, StatementLine],
   templateUrl: './ranking-table.html',
   styleUrl: './ranking-table.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -68,6 +70,17 @@ export class RankingTable {
   });
   protected readonly commonArea = computed(() => this.format.text(this.view().commonAreaM2, 'area'));
   protected readonly energyUnit = computed(() => this.format.display('energy-per-distance').unit);
+
+  /** All silhouettes at one scale, so that a longer body looks longer. */
+  protected readonly longest = computed(() =>
+    Math.max(0, ...this.view().rows.map(({ lengthMm }) => lengthMm ?? 0)),
+  );
+
+  /** What a variant's silhouette is drawn from; null where its dimensions are not known. */
+  protected bodyOf({ bodyShape, lengthMm, heightMm, wheelbaseMm }: ViewRow): BodyDimensions | null {
+    if (lengthMm === null || heightMm === null || wheelbaseMm === null) return null;
+    return { bodyShape: isBodyShape(bodyShape) ? bodyShape : 'other', lengthMm, heightMm, wheelbaseMm };
+  }
 
   protected lineOf(row: ViewRow): StatementFigures {
     return this.lines().get(row.variantId) ?? {};

@@ -114,6 +114,8 @@ const OUTLINES: Readonly<Record<BodyShape, readonly Point[]>> = {
 const GROUND_CLEARANCE = 0.11;
 const WHEEL_RADIUS = 0.215;
 
+export const isBodyShape = (shape: string): shape is BodyShape => Object.hasOwn(OUTLINES, shape);
+
 /** The side view of a body, nose to the left, from its shape and three dimensions. y grows downwards, as in SVG. */
 export function silhouette({ bodyShape, lengthMm, heightMm, wheelbaseMm }: BodyDimensions): Silhouette {
   const outline = OUTLINES[bodyShape].map(([x, y]): Point => [x * lengthMm, (1 - y) * heightMm]);

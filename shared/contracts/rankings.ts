@@ -14,14 +14,16 @@ const number = z.number();
 const text = z.string();
 const named = { variantId: text, name: text };
 
+const areaChoice = z
+  .string()
+  .regex(/^(programme|variant:[0-9a-zA-Z-]{1,60}|\d{1,2}(\.\d{1,9})?)$/)
+  .optional()
+  .describe('`programme`, `variant:<id>` or m²');
+
 /** The choices of the ranking as they stand in an address; one left out has its default. */
 export const rankingQuery = z.strictObject({
   order: z.enum(ORDERS).optional(),
-  area: z
-    .string()
-    .regex(/^(programme|variant:[0-9a-zA-Z-]{1,60}|\d{1,2}(\.\d{1,9})?)$/)
-    .optional()
-    .describe('`programme`, `variant:<id>` or m²'),
+  area: areaChoice,
   cycle: z.string().min(1).max(60).optional().describe('Key of a cycle; `wltc-class-3b`'),
   air: z
     .string()
@@ -257,6 +259,7 @@ export const rankingInputsRead = endpoint({
   access: 'ranking-inputs.read',
   params: programmeParams,
   query: z.strictObject({
+    area: areaChoice.describe('Stands in where the programme has no common area; `variant:<id>` or m²'),
     evidence: z
       .enum(EVIDENCE_BASES)
       .optional()
@@ -279,7 +282,9 @@ export const rankingContextRead = endpoint({
     'What the ranking screen needs beside the inputs: adoptions, configurations, cycles with their traces',
   access: 'ranking-inputs.read',
   params: programmeParams,
-  query: nothing,
+  query: z.strictObject({
+    area: areaChoice.describe('Stands in where the programme has no common area; `variant:<id>` or m²'),
+  }),
   body: nothing,
   response: rankingContext,
   command: false,

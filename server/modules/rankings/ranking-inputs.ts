@@ -1,5 +1,5 @@
-import type { EvidenceBasis } from '#shared/core/ranking/ranking-choices';
-import type { ContextAdoption, RankingContext } from '#shared/core/ranking/ranking-context';
+import type { AreaChoice, EvidenceBasis } from '#shared/core/ranking/ranking-choices';
+import type { CommonAreaPolicy, ContextAdoption, RankingContext } from '#shared/core/ranking/ranking-context';
 import type {
   FacilityInput,
   PointInput,
@@ -19,16 +19,20 @@ import type {
   VariantRow,
 } from './rankings.repository';
 
-/** Rows of one programme, as they lie in the database. */
-export interface RankingRows {
+/** Rows of one programme, as they lie in the database: what both the inputs and what stands beside them need. */
+export interface ProgrammeRows {
   readonly programme: ProgrammeRow;
   readonly variants: readonly VariantRow[];
   readonly areas: readonly AreaRow[];
   readonly configurations: readonly ConfigurationRow[];
-  readonly facilities: readonly FacilityRow[];
   readonly results: readonly ResultRow[];
-  readonly points: readonly PointRow[];
   readonly adoptions: readonly AdoptionRow[];
+}
+
+/** And what only the inputs of the method need. */
+export interface RankingRows extends ProgrammeRows {
+  readonly facilities: readonly FacilityRow[];
+  readonly points: readonly PointRow[];
 }
 
 /** Reynolds corrections are off until they can be chosen: nothing of method section 6 enters. */
@@ -154,12 +158,27 @@ export function standingAdoptions(
   );
 }
 
-/** The programme's common area [m²]; null where none is chosen, or where it is that of a variant that has left. */
-export function commonAreaOf(rows: RankingRows): number | null {
-  const policy = rows.programme.commonArea;
-  if (!policy) return null;
-  if (policy.kind === 'fixed') return policy.areaM2;
-  return rows.areas.find(({ variantId }) => variantId === policy.variantId)?.areaM2 ?? null;
+/** The common area and where it comes from. */
+export interface CommonArea {
+  readonly policy: CommonAreaPolicy;
+  readonly areaM2: number;
+}
+
+function areaOfPolicy(policy: CommonAreaPolicy, areas: readonly AreaRow[]): CommonArea | null {
+  if (policy.kind === 'fixed') return { policy, areaM2: policy.areaM2 };
+  const area = areas.find(({ variantId }) => variantId === policy.variantId);
+  return area ? { policy, areaM2: area.areaM2 } : null;
+}
+
+/**
+ * The programme's common area; where none is chosen there, or it is that of a variant that has left, the one that the
+ * person asks for. Null where there is neither.
+ */
+export function commonAreaOf(rows: ProgrammeRows, asked: AreaChoice): CommonArea | null {
+  const own = rows.programme.commonArea && areaOfPolicy(rows.programme.commonArea, rows.areas);
+  if (own) return own;
+  if (asked.kind === 'typed') return areaOfPolicy({ kind: 'fixed', areaM2: asked.areaM2 }, rows.areas);
+  return asked.kind === 'variant' ? areaOfPolicy(asked, rows.areas) : null;
 }
 
 /**
@@ -201,10 +220,20 @@ export function rankingInputs(
   };
 }
 
-type ContextRows = Pick<RankingRows, 'programme' | 'variants' | 'areas' | 'configurations'>;
+/** The entries in facilities that results name, each once, by name. */
+export function sessionsOf(results: readonly ResultRow[]): RankingContext['sessions'] {
+  const names = new Map(
+    results.flatMap(({ testSessionId: id, sessionName }) =>
+      id === null || sessionName === null ? [] : [[id, sessionName] as const],
+    ),
+  );
+  return [...names]
+    .map(([id, name]) => ({ id, name }))
+    .sort((a, b) => a.name.localeCompare(b.name) || a.id.localeCompare(b.id));
+}
 
 /** What a person sees of the variants beside their figures. */
-export function contextVariants(rows: ContextRows): RankingContext['variants'] {
+export function contextVariants(rows: ProgrammeRows): RankingContext['variants'] {
   const areaOf = new Map(rows.areas.map((area) => [area.variantId, area]));
   const configurationsOf = grouped(rows.configurations, ({ variantId }) => variantId);
   return rows.variants.flatMap((variant) => {

@@ -1,4 +1,5 @@
-import { and, asc, desc, eq, inArray, isNull } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
+import { unionAll, type AnyPgColumn } from 'drizzle-orm/pg-core';
 import type { Tx } from '../../db/pools';
 import { cycles, referenceCycles } from '../../db/tables/cycles';
 import { facilities, testSessions } from '../../db/tables/facilities';
@@ -12,7 +13,8 @@ export type VariantRow = typeof variants.$inferSelect;
 export type AreaRow = typeof frontalAreas.$inferSelect;
 export type ConfigurationRow = typeof configurations.$inferSelect;
 export type FacilityRow = typeof facilities.$inferSelect;
-export type ResultRow = typeof results.$inferSelect;
+/** A result with the name of the session it belongs to. */
+export type ResultRow = typeof results.$inferSelect & { readonly sessionName: string | null };
 export type PointRow = typeof resultPoints.$inferSelect;
 
 export interface AdoptionRow {
@@ -68,15 +70,16 @@ export async function listConfigurations(tx: Tx, programmeId: string): Promise<r
 /** Results that count: not withdrawn, of variants that are still in the programme, in the order of entry. */
 export async function listResults(tx: Tx, programmeId: string): Promise<readonly ResultRow[]> {
   const rows = await tx
-    .select({ result: results })
+    .select({ result: results, sessionName: testSessions.name })
     .from(results)
     .innerJoin(variants, eq(variants.id, results.variantId))
     .leftJoin(resultWithdrawals, eq(resultWithdrawals.resultId, results.id))
+    .leftJoin(testSessions, eq(testSessions.id, results.testSessionId))
     .where(
       and(eq(results.programmeId, programmeId), isNull(variants.retiredAt), isNull(resultWithdrawals.id)),
     )
     .orderBy(asc(results.entrySequence));
-  return rows.map(({ result }) => result);
+  return rows.map(({ result, sessionName }) => ({ ...result, sessionName }));
 }
 
 export async function listPoints(tx: Tx, programmeId: string): Promise<readonly PointRow[]> {
@@ -114,71 +117,44 @@ export async function facilitiesById(tx: Tx, ids: readonly string[]): Promise<re
     .orderBy(asc(facilities.name), asc(facilities.id));
 }
 
-export async function sessionsById(tx: Tx, ids: readonly string[]) {
-  if (ids.length === 0) return [];
-  return tx
-    .select({ id: testSessions.id, name: testSessions.name })
-    .from(testSessions)
-    .where(inArray(testSessions.id, [...ids]))
-    .orderBy(asc(testSessions.name), asc(testSessions.id));
-}
-
 export interface CycleRow {
   readonly key: string;
   readonly name: string;
   readonly source: string;
-}
-export interface CycleTraceRow extends CycleRow {
   readonly timeS: number[];
   readonly speedKmh: number[];
 }
 
-/** Every cycle that may be chosen, built-in ones first; without the traces. */
-export async function listCycles(tx: Tx): Promise<readonly CycleRow[]> {
-  const builtIn = await tx
-    .select({ key: referenceCycles.key, name: referenceCycles.name, source: referenceCycles.source })
-    .from(referenceCycles)
-    .orderBy(asc(referenceCycles.position));
-  const own = await tx
-    .select({ key: cycles.id, name: cycles.name, source: cycles.source })
+/**
+ * Every cycle that may be chosen, built-in ones first; a key is a built-in name or the id of an own cycle. The traces are
+ * long: those of one cycle only, or of all.
+ */
+export async function listCycles(tx: Tx, withTraceOf: string | 'all'): Promise<readonly CycleRow[]> {
+  const traceOf = (key: AnyPgColumn, column: AnyPgColumn) =>
+    withTraceOf === 'all'
+      ? sql<number[]>`${column}`
+      : sql<number[]>`case when ${key}::text = ${withTraceOf} then ${column} else '{}' end`;
+  const builtIn = tx
+    .select({
+      place: sql<number>`${referenceCycles.position}::integer`.as('place'),
+      key: sql<string>`${referenceCycles.key}::text`.as('key'),
+      name: referenceCycles.name,
+      source: sql<string>`${referenceCycles.source}::text`.as('source'),
+      timeS: traceOf(referenceCycles.key, referenceCycles.timeS).as('time_s'),
+      speedKmh: traceOf(referenceCycles.key, referenceCycles.speedKmh).as('speed_kmh'),
+    })
+    .from(referenceCycles);
+  const own = tx
+    .select({
+      place: sql<number>`null::integer`.as('place'),
+      key: sql<string>`${cycles.id}::text`.as('key'),
+      name: cycles.name,
+      source: sql<string>`${cycles.source}::text`.as('source'),
+      timeS: traceOf(cycles.id, cycles.timeS).as('time_s'),
+      speedKmh: traceOf(cycles.id, cycles.speedKmh).as('speed_kmh'),
+    })
     .from(cycles)
-    .where(isNull(cycles.retiredAt))
-    .orderBy(asc(cycles.name));
-  return [...builtIn, ...own];
-}
-
-const IS_ID = /^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/i;
-
-/** The traces of the cycles with these keys; a key is a built-in name or the id of an own cycle. */
-export async function cycleTraces(tx: Tx, keys: readonly string[]): Promise<readonly CycleTraceRow[]> {
-  const names = keys.filter((key) => !IS_ID.test(key));
-  const ids = keys.filter((key) => IS_ID.test(key));
-  const builtIn =
-    names.length === 0
-      ? []
-      : await tx
-          .select({
-            key: referenceCycles.key,
-            name: referenceCycles.name,
-            source: referenceCycles.source,
-            timeS: referenceCycles.timeS,
-            speedKmh: referenceCycles.speedKmh,
-          })
-          .from(referenceCycles)
-          .where(inArray(referenceCycles.key, names));
-  const own =
-    ids.length === 0
-      ? []
-      : await tx
-          .select({
-            key: cycles.id,
-            name: cycles.name,
-            source: cycles.source,
-            timeS: cycles.timeS,
-            speedKmh: cycles.speedKmh,
-          })
-          .from(cycles)
-          .where(and(inArray(cycles.id, ids), isNull(cycles.retiredAt)));
-  const found = new Map([...builtIn, ...own].map((row) => [row.key, row]));
-  return keys.flatMap((key) => found.get(key) ?? []);
+    .where(isNull(cycles.retiredAt));
+  const rows = await unionAll(builtIn, own).orderBy(sql`place nulls last`, sql`name`);
+  return rows.map(({ key, name, source, timeS, speedKmh }) => ({ key, name, source, timeS, speedKmh }));
 }

@@ -4,8 +4,10 @@ import { readRankingContext, readRankingInputs, readRankingView } from './rankin
 
 export const rankingsRoutes = [
   route(rankingInputsRead, ({ params, query }, context) =>
-    readRankingInputs(context, params.programmeId, query.evidence ?? 'adopted'),
+    readRankingInputs(context, params.programmeId, query, query.evidence ?? 'adopted'),
   ),
-  route(rankingContextRead, ({ params }, context) => readRankingContext(context, params.programmeId)),
+  route(rankingContextRead, ({ params, query }, context) =>
+    readRankingContext(context, params.programmeId, query),
+  ),
   route(rankingViewRead, ({ params, query }, context) => readRankingView(context, params.programmeId, query)),
 ];

@@ -1,6 +1,7 @@
 import type { RankingQuery } from '#shared/contracts/rankings';
 import {
   choicesOfQuery,
+  type AreaChoice,
   type EvidenceBasis,
   type RankingChoices,
 } from '#shared/core/ranking/ranking-choices';
@@ -14,7 +15,10 @@ import {
   commonAreaOf,
   contextVariants,
   rankingInputs,
+  sessionsOf,
   standingAdoptions,
+  type CommonArea,
+  type ProgrammeRows,
   type RankingRows,
 } from './ranking-inputs';
 import * as repository from './rankings.repository';
@@ -22,31 +26,33 @@ import { withoutRawEvidence } from './rankings.policy';
 
 type Tx = MemberContext['tx'];
 
-async function programmeRow(tx: Tx, programmeId: string): Promise<repository.ProgrammeRow> {
-  return (await repository.findProgramme(tx, programmeId)) ?? fail('not-found');
-}
-
-async function rankingRows(tx: Tx, programmeId: string): Promise<RankingRows> {
-  const programme = await programmeRow(tx, programmeId);
-  const results = await repository.listResults(tx, programmeId);
-  const facilityIds = new Set(results.map(({ facilityId }) => facilityId));
-  if (programme.referenceFacilityId) facilityIds.add(programme.referenceFacilityId);
+async function programmeRows(tx: Tx, programmeId: string): Promise<ProgrammeRows> {
   return {
-    programme,
+    programme: (await repository.findProgramme(tx, programmeId)) ?? fail('not-found'),
     variants: await repository.listVariants(tx, programmeId),
     areas: await repository.newestAreas(tx, programmeId),
     configurations: await repository.listConfigurations(tx, programmeId),
-    facilities: await repository.facilitiesById(tx, [...facilityIds]),
-    results,
-    points: await repository.listPoints(tx, programmeId),
+    results: await repository.listResults(tx, programmeId),
     adoptions: await repository.currentAdoptions(tx, programmeId),
   };
 }
 
+async function rankingRows(tx: Tx, programmeId: string): Promise<RankingRows> {
+  const rows = await programmeRows(tx, programmeId);
+  const facilityIds = new Set(rows.results.map(({ facilityId }) => facilityId));
+  const { referenceFacilityId } = rows.programme;
+  if (referenceFacilityId) facilityIds.add(referenceFacilityId);
+  return {
+    ...rows,
+    facilities: await repository.facilitiesById(tx, [...facilityIds]),
+    points: await repository.listPoints(tx, programmeId),
+  };
+}
+
 /** @throws {ProblemError} unusable-input: without one area for all there is no coefficient to show */
-function commonArea(rows: RankingRows): number {
-  const areaM2 = commonAreaOf(rows);
-  if (areaM2 !== null) return areaM2;
+function commonArea(rows: ProgrammeRows, asked: AreaChoice): CommonArea {
+  const area = commonAreaOf(rows, asked);
+  if (area) return area;
   if (rows.variants.length === 0) {
     fail('unusable-input', { reason: 'no-variants', detail: 'The programme has no variants to rank yet.' });
   }
@@ -61,30 +67,32 @@ function commonArea(rows: RankingRows): number {
 export async function readRankingInputs(
   { tx }: MemberContext,
   programmeId: string,
+  query: RankingQuery,
   evidence: EvidenceBasis,
 ): Promise<RankingInput> {
   const rows = await rankingRows(tx, programmeId);
-  return rankingInputs(rows, commonArea(rows), evidence);
+  return rankingInputs(rows, commonArea(rows, choicesOf(query).area).areaM2, evidence);
 }
 
-async function contextOf(
-  tx: Tx,
-  rows: RankingRows,
+/** What stands beside the inputs. The ranking itself needs no milestones: they are for the screen. */
+function contextOf(
+  rows: ProgrammeRows,
+  area: CommonArea,
   cycles: RankingContext['cycles'],
-): Promise<RankingContext> {
+  milestones: RankingContext['programme']['milestones'] = [],
+): RankingContext {
   const { programme } = rows;
-  const sessionIds = new Set(rows.results.flatMap(({ testSessionId }) => testSessionId ?? []));
   return {
     programme: {
       id: programme.id,
       name: programme.name,
-      commonArea: programme.commonArea ?? { kind: 'fixed', areaM2: commonArea(rows) },
+      commonArea: area.policy,
       characteristicLengthName: programme.characteristicLengthName,
-      milestones: await repository.listMilestones(tx, programme.id),
+      milestones,
     },
     variants: contextVariants(rows),
     adoptions: standingAdoptions(rows.adoptions, rows.results),
-    sessions: await repository.sessionsById(tx, [...sessionIds]),
+    sessions: sessionsOf(rows.results),
     cycles,
   };
 }
@@ -93,17 +101,12 @@ async function contextOf(
 export async function readRankingContext(
   { tx }: MemberContext,
   programmeId: string,
+  query: RankingQuery,
 ): Promise<RankingContext> {
-  const rows = await rankingRows(tx, programmeId);
-  const keys = (await repository.listCycles(tx)).map(({ key }) => key);
-  return contextOf(tx, rows, await repository.cycleTraces(tx, keys));
-}
-
-/** All cycles by name; only the chosen one brings its rows. */
-async function offeredCycles(tx: Tx, chosen: string): Promise<RankingContext['cycles']> {
-  const [trace] = await repository.cycleTraces(tx, [chosen]);
-  const offered = await repository.listCycles(tx);
-  return offered.map((cycle) => (cycle.key === trace?.key ? trace : { ...cycle, timeS: [], speedKmh: [] }));
+  const rows = await programmeRows(tx, programmeId);
+  const area = commonArea(rows, choicesOf(query).area);
+  const cycles = await repository.listCycles(tx, 'all');
+  return contextOf(rows, area, cycles, await repository.listMilestones(tx, programmeId));
 }
 
 function choicesOf(query: RankingQuery): RankingChoices {
@@ -123,7 +126,8 @@ export async function readRankingView(
 ): Promise<RankingView> {
   const choices = choicesOf(query);
   const rows = await rankingRows(tx, programmeId);
-  const inputs = rankingInputs(rows, commonArea(rows), 'newest');
-  const context = await contextOf(tx, rows, await offeredCycles(tx, choices.cycle));
+  const area = commonArea(rows, choices.area);
+  const inputs = rankingInputs(rows, area.areaM2, 'newest');
+  const context = contextOf(rows, area, await repository.listCycles(tx, choices.cycle));
   return withoutRawEvidence(buildRankingView(inputs, context, choices));
 }

@@ -210,6 +210,19 @@ describe('the ranking over HTTP', () => {
     });
   });
 
+  it('ranks on the area asked for where the programme has no common area', async () => {
+    const body = programmeFields({ name: 'Without area', commonArea: undefined });
+    const bare = { programmeId: (await aerodynamicist.ok(programmeCreate, { body })).id };
+    await aerodynamicist.ok(variantCreate, { params: bare, body: variantFields() });
+    const asked = { params: bare, query: { area: '2.25' } };
+    expect((await aerodynamicist.ok(rankingInputsRead, asked)).programme.commonAreaM2).toBe(2.25);
+    const { programme } = await aerodynamicist.ok(rankingContextRead, asked);
+    expect(programme.commonArea).toEqual({ kind: 'fixed', areaM2: 2.25 });
+    expect((await aerodynamicist.ok(rankingViewRead, asked)).commonAreaM2).toBe(2.25);
+    const none = { params: bare, query: { area: 'programme' } };
+    expect((await aerodynamicist.refused(rankingInputsRead, none)).reason).toBe('no-common-area');
+  });
+
   it.each([
     [{ area: '-1' }, 'malformed-input'],
     [{ confidence: '1.5' }, 'malformed-input'],

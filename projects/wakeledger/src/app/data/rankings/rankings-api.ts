@@ -18,12 +18,16 @@ export interface RankingSources {
 export class RankingsApi {
   private readonly api = inject(ApiClient);
 
-  /** All results, so that no choice needs another request. */
-  sources(programmeId: string): Observable<RankingSources> {
+  /**
+   * All results, so that no choice needs another request.
+   * @param area the choice in the address: it stands in where the programme has no common area
+   */
+  sources(programmeId: string, area: string | undefined): Observable<RankingSources> {
     const params = { programmeId };
+    const own = area === undefined ? {} : { area };
     return forkJoin({
-      inputs: this.api.call(rankingInputsRead, { params, query: { evidence: 'newest' } }),
-      context: this.api.call(rankingContextRead, { params }),
+      inputs: this.api.call(rankingInputsRead, { params, query: { evidence: 'newest', ...own } }),
+      context: this.api.call(rankingContextRead, { params, query: own }),
     });
   }
 

@@ -67,6 +67,21 @@ describe('the ranking’s effects', () => {
     expect(store.selectSignal(selectRankingView)()?.commonAreaM2).toBe(2);
   });
 
+  it('fetch the inputs anew on an area in the address where they were refused without one', () => {
+    const fetched = jest.fn();
+    fetched
+      .mockReturnValueOnce(throwError(() => new ApiProblem('unusable-input')))
+      .mockReturnValueOnce(of(sources));
+    const { store, state } = storeOver({ sources: fetched });
+    store.dispatch(RankingPageActions.opened({ programmeId: 'p', mode: 'computes', address: {} }));
+    store.dispatch(RankingPageActions.addressChanged({ address: { area: '2.25' } }));
+    expect(fetched.mock.calls).toEqual([
+      ['p', undefined],
+      ['p', '2.25'],
+    ]);
+    expect(state().loading).toEqual({ kind: 'ready' });
+  });
+
   it('keep a failure as a problem and try again when asked to', () => {
     const problem = new ApiProblem('not-ready');
     const fetched = jest.fn();

@@ -11,16 +11,17 @@ import { rankingsFeature } from './rankings.feature';
 /** A control that is moved again within this time asks once [ms]. */
 export const VIEW_DEBOUNCE_MS = 150;
 
-/** Opening the page fetches the inputs, once; no control ever does. The latest programme wins. */
+/** Opening the page fetches the inputs, once; no control ever does, unless there are none yet. The latest programme wins. */
 export const loadSources = createEffect(
   (actions = inject(Actions), store = inject(Store), api = inject(RankingsApi)) =>
     actions.pipe(
-      ofType(RankingPageActions.opened, RankingPageActions.retryPressed),
+      ofType(RankingPageActions.opened, RankingPageActions.addressChanged, RankingPageActions.retryPressed),
       concatLatestFrom(() => store.select(rankingsFeature.selectRankingsState)),
+      filter(([{ type }, { sources }]) => type !== RankingPageActions.addressChanged.type || !sources),
       map(([, state]) => state),
       filter(({ mode, programmeId }) => mode === 'computes' && programmeId !== ''),
-      switchMap(({ programmeId }) =>
-        api.sources(programmeId).pipe(
+      switchMap(({ programmeId, address }) =>
+        api.sources(programmeId, address.area).pipe(
           mapResponse({
             next: (sources) => RankingsApiActions.sourcesLoaded({ programmeId, sources }),
             error: (thrown) =>

@@ -44,7 +44,8 @@ export const rankingsFeature = createFeature({
     on(RankingPageActions.addressChanged, (state, { address }): RankingsState => ({
       ...state,
       address,
-      loading: state.mode === 'is-given' ? { kind: 'loading' } : state.loading,
+      // Without sources those who compute ask anew too: an area in the address may be what was missing.
+      loading: state.mode === 'is-given' || !state.sources ? { kind: 'loading' } : state.loading,
     })),
     on(RankingPageActions.retryPressed, (state): RankingsState => ({
       ...state,

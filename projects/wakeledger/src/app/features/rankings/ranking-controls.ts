@@ -31,6 +31,7 @@ import {
   cycleOffers,
   type Offer,
 } from './control-choices';
+import { typedArea } from './typed-area';
 
 interface Control {
   readonly name: ChoiceName;
@@ -135,10 +136,9 @@ export class RankingControls {
   }
 
   protected typeArea(text: string): void {
-    const read = parseTypedNumber(text, { minimum: 0.01, maximum: 99 });
-    if (read.kind === 'number' && read.value >= 0.01 && read.value <= 99)
-      this.emit('area', String(read.value));
-    else this.mistake.set('area');
+    const areaM2 = typedArea(text);
+    if (areaM2 === null) this.mistake.set('area');
+    else this.emit('area', String(areaM2));
   }
 
   protected typeAir(temperature: string, pressure: string, humidity: string): void {

@@ -28,6 +28,7 @@ import { QuantityFormat } from '../../ui/quantity/quantity-format';
 import { FigureDerivations } from './derivations/figure-derivations';
 import { OrderComparison } from './order-comparison';
 import { RankingChart } from './ranking-chart';
+import { typedArea } from './typed-area';
 import { RankingControls } from './ranking-controls';
 import { rankingRows } from './ranking-export';
 import { type FigureAsked, RankingTable } from './ranking-table';
@@ -91,6 +92,7 @@ export class RankingPage {
   protected readonly mayEdit = computed(() => this.session.may('programmes.edit'));
   protected readonly chartShown = signal(false);
   protected readonly ordersShown = signal(false);
+  protected readonly areaRefused = signal(false);
 
   protected readonly lowest = inject(LowestProbabilities).of(
     computed(
@@ -140,6 +142,13 @@ export class RankingPage {
   /** Into the address, and nowhere else: the ranking follows it. */
   protected async choose(address: ChoiceQuery): Promise<void> {
     await this.router.navigate([], { relativeTo: this.route, queryParams: address });
+  }
+
+  /** Without a common area of the programme, on one of the person's own: it goes into the address like every choice. */
+  protected async rankOn(text: string): Promise<void> {
+    const areaM2 = typedArea(text);
+    this.areaRefused.set(areaM2 === null);
+    if (areaM2 !== null) await this.choose({ ...this.address(), area: String(areaM2) });
   }
 
   protected retry(): void {

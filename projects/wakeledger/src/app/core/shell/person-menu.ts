@@ -74,9 +74,9 @@ export class PersonMenu {
 
   /** Leaves first, so that an unsaved page can object while it still may be saved. */
   protected async switchTo(organisationId: string): Promise<void> {
-    if (!(await this.router.navigateByUrl('/programmes'))) return;
-    await this.session.switchTo(organisationId);
-    await this.router.navigateByUrl('/programmes', { onSameUrlNavigation: 'reload' });
+    // Going where one is already counts as not having gone.
+    const there = this.router.url === '/programmes' || (await this.router.navigateByUrl('/programmes'));
+    if (there) await this.session.switchTo(organisationId);
   }
 
   protected async signOut(): Promise<void> {

@@ -1,5 +1,5 @@
 import { DatePipe } from '@angular/common';
-import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, untracked } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import { Store } from '@ngrx/store';
 import type { ProgrammeSummary } from '#shared/contracts/programmes';
@@ -43,7 +43,11 @@ export class ProgrammeListPage {
   protected readonly retired = computed(() => this.page().retired);
 
   constructor() {
-    if (this.mayRead()) this.store.dispatch(ProgrammesPageActions.opened());
+    // Again when the organisation is switched while the page is open: the store has then forgotten everything.
+    effect(() => {
+      if (this.session.membership() === undefined || !this.mayRead()) return;
+      untracked(() => this.store.dispatch(ProgrammesPageActions.opened()));
+    });
   }
 
   protected retry(): void {

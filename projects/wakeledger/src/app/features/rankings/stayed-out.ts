@@ -72,6 +72,12 @@ import { stayedOutEntries } from './stayed-out-groups';
     li {
       padding: 2px 0;
     }
+    /* Paper cannot be opened: what is folded on the screen prints whole. */
+    @media print {
+      details::details-content {
+        content-visibility: visible;
+      }
+    }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })

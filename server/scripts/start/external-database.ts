@@ -56,8 +56,10 @@ function faultOfLogin(role: DatabaseRole, powers: Powers | undefined): string | 
 }
 
 function connectionWords(error: unknown, client: pg.Client): string {
-  const code = error instanceof Error && 'code' in error ? String(error.code) : '';
-  const message = error instanceof Error ? error.message : String(error);
+  const { code = '', message = String(error) } = error as {
+    readonly code?: string;
+    readonly message?: string;
+  };
   const words: Readonly<Record<string, string>> = {
     ECONNREFUSED: `no server answers at ${client.host}:${client.port}.`,
     ENOTFOUND: `there is no host ${client.host}.`,

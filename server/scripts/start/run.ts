@@ -79,7 +79,9 @@ async function bringUp(
   await requirePort(host, port);
 
   const external = externalUrls(process.env);
-  if (external !== undefined) await requireDatabase(external);
+  // What is missing is said before anything is built.
+  if (external === undefined) ensurePostgres(say);
+  else await requireDatabase(external);
   const built = development ? Promise.resolve() : buildMeanwhile(root, undo);
   const deaths: Promise<string>[] = [];
   let urls: DatabaseUrls;
@@ -87,12 +89,13 @@ async function bringUp(
     const place = clusterPlace(root, stateName, stateFolder);
     if (throwaway) await removeCluster(place);
     if (!clusterExists(place)) createCluster(place, secrets.superuser);
+    // Beforehand: whoever stops the start while the database comes up leaves none behind.
+    undo.push(() => stopCluster(place, 'fast'));
     const cluster = await startCluster(place, {
       superuserPassword: secrets.superuser,
       port: await freePort(),
       throwaway,
     });
-    undo.push(() => stopCluster(place, 'fast'));
     deaths.push(cluster.ended.then(() => 'The database'));
     const note = join(stateFolder, 'running.json');
     writePrivate(note, JSON.stringify({ databasePort: cluster.port, serverPort: port }));

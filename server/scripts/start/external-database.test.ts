@@ -16,21 +16,26 @@ beforeAll(async () => {
 });
 afterAll(() => database.drop());
 
-const changed = (role: keyof DatabaseUrls, change: (url: URL) => void): DatabaseUrls => {
-  const url = new URL(urls[role]);
-  change(url);
-  return { ...urls, [role]: url.href };
-};
+const changed = (role: keyof DatabaseUrls, change: object): DatabaseUrls => ({
+  ...urls,
+  [role]: Object.assign(new URL(urls[role]), change).href,
+});
 
 test('a server with its four logins and its database is taken', async () => {
   await expect(requireDatabase(urls)).resolves.toBeUndefined();
 });
 
-test.each([
-  ['another password', (url: URL) => (url.password = 'guess'), /DATABASE_URL_TENANT: the server refuses/],
-  ['a database that is not there', (url: URL) => (url.pathname = '/nowhere'), /there is no database nowhere/],
-  ['a port where nobody listens', (url: URL) => (url.port = '1'), /no server answers at 127\.0\.0\.1:1\./],
-] as const)('%s is said with the variable, and what to run', async (_name, change, words) => {
+test.each<
+  readonly [
+    name: string,
+    change: Readonly<Partial<Record<'password' | 'pathname' | 'port', string>>>,
+    words: RegExp,
+  ]
+>([
+  ['another password', { password: 'guess' }, /DATABASE_URL_TENANT: the server refuses/],
+  ['a database that is not there', { pathname: '/nowhere' }, /there is no database nowhere/],
+  ['a port where nobody listens', { port: '1' }, /no server answers at 127\.0\.0\.1:1\./],
+])('%s is said with the variable, and what to run', async (_name, change, words) => {
   const refused = requireDatabase(changed('tenant', change));
   await expect(refused).rejects.toThrow(words);
   await expect(refused).rejects.toThrow('npm run database:prepare');

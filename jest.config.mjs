@@ -14,8 +14,12 @@ const swc = {
   ],
 };
 
+// Two cores are shared by all workers, and a machine may be busy with more: waiting is no failure of the code.
+const testTimeout = 30_000;
+
 const shared = {
   displayName: 'shared',
+  testTimeout,
   rootDir: '.',
   testMatch: ['<rootDir>/shared/**/*.spec.ts', '<rootDir>/seeds/**/*.spec.ts'],
   testEnvironment: 'node',
@@ -27,8 +31,7 @@ const server = {
   rootDir: '.',
   testMatch: ['<rootDir>/server/**/*.{spec,test}.ts'],
   testEnvironment: 'node',
-  // Each file makes a database of its own; on two busy cores that alone may take seconds.
-  testTimeout: 30_000,
+  testTimeout,
   globalSetup: '<rootDir>/server/testing/global-setup.ts',
   globalTeardown: '<rootDir>/server/testing/global-teardown.ts',
   transform: swc,
@@ -37,6 +40,7 @@ const server = {
 const client = {
   ...createCjsPreset({ tsconfig: '<rootDir>/projects/wakeledger/tsconfig.spec.json' }),
   displayName: 'client',
+  testTimeout,
   rootDir: '.',
   testMatch: ['<rootDir>/projects/wakeledger/src/**/*.spec.ts'],
   setupFilesAfterEnv: ['<rootDir>/projects/wakeledger/src/testing/setup-jest.ts'],

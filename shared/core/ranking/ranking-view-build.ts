@@ -2,6 +2,7 @@ import type { PreparedCycle } from '../cycles/cycle';
 import { whPerKm } from '../road-load/cycle-energy';
 import { figureOf } from '../uncertainty/budget';
 import { excludedResults, type ReducedSet } from '../reduction/reduce';
+import { chosenCycle } from './chosen-cycle';
 import { probabilityLowerOf, type Comparables } from './comparables';
 import { confidenceOf } from './rank';
 import type { RankingChoices, RankingOrder } from './ranking-choices';
@@ -56,11 +57,6 @@ export function programmeArea(
   const variant =
     policy.kind === 'variant' ? inputs.variants.find(({ id }) => id === policy.variantId) : undefined;
   return { areaM2: inputs.programme.commonAreaM2, variantName: variant?.name ?? null };
-}
-
-/** The cycle of a choice, else the first there is. */
-export function chosenCycle(cycles: readonly ContextCycle[], key: string): ContextCycle | undefined {
-  return cycles.find((cycle) => cycle.key === key) ?? cycles.find(({ timeS }) => timeS.length > 0);
 }
 
 /** Whether the energies decide the order: they were asked for, and there are some. */

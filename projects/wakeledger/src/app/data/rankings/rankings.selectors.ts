@@ -2,7 +2,8 @@ import { createSelector } from '@ngrx/store';
 import { choicesOfQuery, type ChoiceName, type RankingChoices } from '#shared/core/ranking/ranking-choices';
 import { confidenceOf } from '#shared/core/ranking/rank';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
-import { assembleView, chosenCycle, ordersByEnergy } from '#shared/core/ranking/ranking-view-build';
+import { chosenCycle } from '#shared/core/ranking/chosen-cycle';
+import { assembleView, ordersByEnergy } from '#shared/core/ranking/ranking-view-build';
 import {
   chosenAir,
   configuredVariants,

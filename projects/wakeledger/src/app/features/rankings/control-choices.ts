@@ -29,6 +29,7 @@ const CONFIDENCES = [0.8, 0.9, 0.95, 0.99];
 
 export const TYPED_AREA = 'typed';
 export const CUSTOM_AIR = 'custom';
+export const CONSTANT_SPEED = 'constant';
 
 type Offers = RankingView['offers'];
 
@@ -74,7 +75,10 @@ export function configurationOffers(offers: Offers): readonly Offer[] {
 }
 
 export function cycleOffers(offers: Offers): readonly Offer[] {
-  return offers.cycles.map(({ key, name }) => ({ value: key, words: name }));
+  return [
+    ...offers.cycles.map(({ key, name }) => ({ value: key, words: name })),
+    { value: CONSTANT_SPEED, words: $localize`a constant speed …` },
+  ];
 }
 
 export function confidenceOffers(offers: Offers, chosen: number, format: QuantityFormat): readonly Offer[] {

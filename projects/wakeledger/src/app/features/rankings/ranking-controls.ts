@@ -9,6 +9,11 @@ import {
   signal,
 } from '@angular/core';
 import {
+  LARGEST_CONSTANT_SPEED_KMH,
+  constantCycleKey,
+  constantSpeedOf,
+} from '#shared/core/ranking/chosen-cycle';
+import {
   DEFAULT_CHOICES,
   choicesOfQuery,
   queryOfChoices,
@@ -20,6 +25,7 @@ import { parseTypedNumber } from '../../core/numbers/parse-typed-number';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
 import {
   BASIS_OFFERS,
+  CONSTANT_SPEED,
   CUSTOM_AIR,
   EVIDENCE_OFFERS,
   ORDER_OFFERS,
@@ -56,13 +62,15 @@ export class RankingControls {
 
   private readonly format = inject(QuantityFormat);
   /** A control that asks for numbers of one's own, until they are there. */
-  protected readonly asking = signal<'area' | 'air' | null>(null);
-  protected readonly mistake = signal<'area' | 'air' | null>(null);
+  protected readonly asking = signal<'area' | 'air' | 'cycle' | null>(null);
+  protected readonly mistake = signal<'area' | 'air' | 'cycle' | null>(null);
 
   private readonly choices = computed(() => choicesOfQuery(this.address()).choices);
   protected readonly areaAsked = computed(
     () => this.asking() === 'area' || this.choices().area.kind === 'typed',
   );
+  private readonly constantSpeed = computed(() => constantSpeedOf(this.choices().cycle));
+  protected readonly speedAsked = computed(() => this.asking() === 'cycle' || this.constantSpeed() !== null);
   private readonly statedAir = computed(() => {
     const { air } = this.choices();
     return air.kind === 'stated' && air.air.state === 'custom' ? air.air : null;
@@ -73,6 +81,7 @@ export class RankingControls {
     const air = this.statedAir();
     return {
       area: area.kind === 'typed' ? String(area.areaM2) : '',
+      speed: this.constantSpeed()?.toString() ?? '',
       temperature: air?.temperatureC?.toString() ?? '20',
       pressure: air?.pressurePa?.toString() ?? '100000',
       humidity: String(100 * (air?.relativeHumidity ?? 0.5)),
@@ -100,7 +109,12 @@ export class RankingControls {
         chosen('configuration', 'base'),
         configurationOffers(offers),
       ),
-      this.control('cycle', $localize`Energy on`, view.cycle?.key ?? '', cycleOffers(offers)),
+      this.control(
+        'cycle',
+        $localize`Energy on`,
+        this.speedAsked() ? CONSTANT_SPEED : (view.cycle?.key ?? ''),
+        cycleOffers(offers),
+      ),
       this.control(
         'air',
         $localize`Air`,
@@ -126,7 +140,11 @@ export class RankingControls {
   }
 
   protected choose(name: ChoiceName, value: string): void {
-    if ((name === 'area' && value === TYPED_AREA) || (name === 'air' && value === CUSTOM_AIR)) {
+    if (
+      (name === 'area' && value === TYPED_AREA) ||
+      (name === 'air' && value === CUSTOM_AIR) ||
+      (name === 'cycle' && value === CONSTANT_SPEED)
+    ) {
       this.asking.set(name);
       return;
     }
@@ -139,6 +157,13 @@ export class RankingControls {
     const areaM2 = typedArea(text);
     if (areaM2 === null) this.mistake.set('area');
     else this.emit('area', String(areaM2));
+  }
+
+  protected typeSpeed(text: string): void {
+    const read = parseTypedNumber(text, { minimum: 1, maximum: LARGEST_CONSTANT_SPEED_KMH });
+    const key = read.kind === 'number' ? constantCycleKey(Number(read.value.toFixed(3))) : '';
+    if (constantSpeedOf(key) === null) this.mistake.set('cycle');
+    else this.emit('cycle', key);
   }
 
   protected typeAir(temperature: string, pressure: string, humidity: string): void {

@@ -116,6 +116,23 @@ describe('the ranking’s controls', () => {
     ]);
   });
 
+  it('ask for a constant speed, refuse what is none, and put it into the address in place of a cycle', () => {
+    const { element, changes, choose } = controls();
+    choose('cycle', 'constant');
+    const type = (text: string) => {
+      const field = element.querySelector<HTMLInputElement>('form input');
+      if (!field) throw new Error('The speed is not asked for.');
+      field.value = text;
+      element.querySelector('form')?.dispatchEvent(new Event('submit'));
+      TestBed.tick();
+    };
+    type('fast');
+    expect(element.querySelector('[role=alert]')?.textContent).toContain('between 1 and 500 km/h');
+    type('120,5');
+    expect(element.querySelector('[role=alert]')).toBeNull();
+    expect(changes).toEqual([{ cycle: 'constant:120.5' }]);
+  });
+
   it('put a choice into the address and keep the others; a default leaves it', () => {
     const { changes, choose } = controls({ basis: 'wind-averaged', confidence: '0.9' });
     choose('order', 'energy');

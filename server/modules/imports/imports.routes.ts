@@ -1,6 +1,4 @@
 import {
-  IMPORT_LIMIT_BYTES,
-  IMPORT_PAGE_ROWS,
   importConfirm,
   importDiscard,
   importFixRows,
@@ -11,7 +9,8 @@ import {
   importStop,
   importUpload,
   importWithdraw,
-} from '#shared/contracts/imports';
+} from '#shared/contracts/import-endpoints';
+import { IMPORT_LIMIT_BYTES, IMPORT_PAGE_ROWS } from '#shared/contracts/imports';
 import { route, uploadRoute, type Route } from '../../http/module';
 import { fixRows } from './import-fixes.service';
 import {

@@ -12,10 +12,8 @@ import {
   importStop,
   importUpload,
   importWithdraw,
-  type ImportDetail,
-  type ImportFix,
-  type ImportMapping,
-} from '#shared/contracts/imports';
+} from '#shared/contracts/import-endpoints';
+import { type ImportDetail, type ImportFix, type ImportMapping } from '#shared/contracts/imports';
 import { programmeCreate } from '#shared/contracts/programmes';
 import { resultAdopt, resultEnter, resultList } from '#shared/contracts/results';
 import { variantCreate, variantList } from '#shared/contracts/variants';

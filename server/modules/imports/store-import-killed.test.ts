@@ -2,7 +2,7 @@ import { spawn, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
 import { setTimeout as pause } from 'node:timers/promises';
 import { facilityCreate } from '#shared/contracts/facilities';
-import { importConfirm, importMap, importRead, importUpload } from '#shared/contracts/imports';
+import { importConfirm, importMap, importRead, importUpload } from '#shared/contracts/import-endpoints';
 import { programmeCreate } from '#shared/contracts/programmes';
 import { resultList } from '#shared/contracts/results';
 import { variantCreate } from '#shared/contracts/variants';

@@ -1,13 +1,7 @@
 import pg from 'pg';
 import { facilityCreate } from '#shared/contracts/facilities';
-import {
-  IMPORT_LIMIT_ROWS,
-  importConfirm,
-  importMap,
-  importRead,
-  importUpload,
-  type ImportDetail,
-} from '#shared/contracts/imports';
+import { importConfirm, importMap, importRead, importUpload } from '#shared/contracts/import-endpoints';
+import { IMPORT_LIMIT_ROWS, type ImportDetail } from '#shared/contracts/imports';
 import { programmeCreate } from '#shared/contracts/programmes';
 import { variantCreate } from '#shared/contracts/variants';
 import { facilityFields, programmeFields, variantFields } from '#shared/testing/domain-fields';

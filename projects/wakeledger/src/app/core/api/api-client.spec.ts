@@ -4,7 +4,7 @@ import { TestBed } from '@angular/core/testing';
 import { firstValueFrom } from 'rxjs';
 import { cycleList } from '#shared/contracts/cycles';
 import { facilityRetire } from '#shared/contracts/facilities';
-import { importUpload } from '#shared/contracts/imports';
+import { importUpload } from '#shared/contracts/import-endpoints';
 import { ApiClient } from './api-client';
 import type { ApiProblem } from './api-problem';
 import { Connection } from './connection';

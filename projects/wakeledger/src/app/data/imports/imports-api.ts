@@ -1,12 +1,6 @@
 import { Injectable, inject } from '@angular/core';
 import { type Observable, map } from 'rxjs';
 import {
-  type ImportDetail,
-  type ImportFix,
-  type ImportMapping,
-  type ImportRow,
-  type ImportSummary,
-  type RowFilter,
   importConfirm,
   importDiscard,
   importFixRows,
@@ -17,6 +11,14 @@ import {
   importStop,
   importUpload,
   importWithdraw,
+} from '#shared/contracts/import-endpoints';
+import {
+  type ImportDetail,
+  type ImportFix,
+  type ImportMapping,
+  type ImportRow,
+  type ImportSummary,
+  type RowFilter,
 } from '#shared/contracts/imports';
 import { ApiClient } from '../../core/api/api-client';
 

@@ -35,6 +35,21 @@ export const TENANT_TABLES: Readonly<Record<string, readonly Verb[]>> = {
   result_points: APPEND,
   result_withdrawals: APPEND,
   adoptions: APPEND,
+  adoption_results: APPEND,
+  result_states: APPEND,
+  result_judgements: APPEND,
+  evaluations: APPEND,
+  // Versions and decisions are history: nothing in it is changed.
+  facility_versions: APPEND,
+  policy_versions: APPEND,
+  correlation_versions: APPEND,
+  correlation_adoptions: APPEND,
+  proposals: APPEND,
+  proposal_decisions: APPEND,
+  check_measurements: EDIT,
+  adjustments: EDIT,
+  correlations: EDIT,
+  test_plans: EDIT,
 };
 
 /** Tables outside tenants, with the tenant role's verbs. */

@@ -41,6 +41,8 @@ export const facilityFields = z.strictObject({
   installationDegreesOfFreedom: degreesOfFreedom.optional(),
   repeatabilityURelative: notNegative.optional(),
   repeatabilityDegreesOfFreedom: degreesOfFreedom.optional(),
+  /** The body that is measured in every session. */
+  checkBody: z.strictObject({ name, remark: remark.optional() }).optional(),
   remark: remark.optional(),
 });
 export type FacilityFields = z.infer<typeof facilityFields>;

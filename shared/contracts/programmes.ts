@@ -25,6 +25,8 @@ export const programmeFields = z.strictObject({
   confidence: z.number().min(0.5).max(0.9999),
   windSpeedMs: z.number().min(0).max(30),
   referenceFacilityId: id.optional(),
+  /** Whether results without a sweep are moved by the friction line; absent means on. */
+  frictionLine: z.enum(['on', 'off']).optional(),
   milestones: z.array(z.strictObject({ id: id.optional(), name, date: isoDate })).max(40),
   remark: remark.optional(),
 });

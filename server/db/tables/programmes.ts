@@ -33,6 +33,10 @@ export const programmes = pgTable(
     confidence: doublePrecision('confidence').notNull(),
     windSpeedMs: doublePrecision('wind_speed_ms').notNull(),
     referenceFacilityId: uuid('reference_facility_id'),
+    /** Whether results without a sweep are moved to the reference Reynolds number by the friction line. */
+    frictionLine: text('friction_line', { enum: ['on', 'off'] })
+      .notNull()
+      .default('on'),
     remark: text('remark'),
     version: integer('version').notNull().default(1),
     retiredAt: instant('retired_at'),
@@ -45,6 +49,7 @@ export const programmes = pgTable(
     check('programmes_speed_check', sql`${t.referenceSpeedKmh} > 0`),
     check('programmes_length_check', sql`${t.characteristicLengthM} > 0`),
     check('programmes_confidence_check', sql`${t.confidence} > 0 and ${t.confidence} < 1`),
+    check('programmes_friction_line_check', sql`${t.frictionLine} in ('on', 'off')`),
     check('programmes_wind_check', sql`${t.windSpeedMs} >= 0`),
   ],
 );

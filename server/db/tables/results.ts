@@ -15,6 +15,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import type { AirState, Condition } from '#shared/contracts/condition';
+import { EVIDENCE_RULES, type ReynoldsChoice } from '#shared/contracts/judgements';
 import { attachments } from './attachments';
 import { byMember, tenantKey, tenantRules, within } from './columns';
 import { instant } from './database-terms';
@@ -157,6 +158,8 @@ export const adoptions = pgTable(
     ...tenantKey(),
     variantId: uuid('variant_id').notNull(),
     resultId: uuid('result_id'),
+    /** Newest of the adopted results, or their weighted mean (method section 10). */
+    evidence: text('evidence', { enum: EVIDENCE_RULES }).notNull().default('newest'),
     comment: text('comment'),
     adoptedBy: uuid('adopted_by').notNull(),
     adoptedAt: instant('adopted_at')
@@ -172,6 +175,82 @@ export const adoptions = pgTable(
       foreignColumns: [results.organisationId, results.variantId, results.id],
     }),
     byMember('adoptions', t.organisationId, t.adoptedBy),
+    unique('adoptions_variant_id_key').on(t.organisationId, t.variantId, t.id),
+    check('adoptions_evidence_check', sql`${t.evidence} in ('newest', 'weighted-mean')`),
     index('adoptions_variant_idx').on(t.organisationId, t.variantId, t.adoptedAt),
+  ],
+);
+
+/** The results that an adoption rests on. */
+export const adoptionResults = pgTable(
+  'adoption_results',
+  {
+    ...tenantKey(),
+    adoptionId: uuid('adoption_id').notNull(),
+    variantId: uuid('variant_id').notNull(),
+    resultId: uuid('result_id').notNull(),
+  },
+  (t) => [
+    ...tenantRules('adoption_results', t),
+    foreignKey({
+      name: 'adoption_results_adoption_fkey',
+      columns: [t.organisationId, t.variantId, t.adoptionId],
+      foreignColumns: [adoptions.organisationId, adoptions.variantId, adoptions.id],
+    }),
+    foreignKey({
+      name: 'adoption_results_result_fkey',
+      columns: [t.organisationId, t.variantId, t.resultId],
+      foreignColumns: [results.organisationId, results.variantId, results.id],
+    }),
+    unique('adoption_results_key').on(t.organisationId, t.adoptionId, t.resultId),
+    index('adoption_results_result_idx').on(t.organisationId, t.resultId),
+  ],
+);
+
+/** That somebody looked a result through, or took that back; the newest row counts. */
+export const resultStates = pgTable(
+  'result_states',
+  {
+    ...tenantKey(),
+    resultId: uuid('result_id').notNull(),
+    state: text('state', { enum: ['entered', 'checked'] }).notNull(),
+    comment: text('comment').notNull(),
+    setBy: uuid('set_by').notNull(),
+    setAt: instant('set_at')
+      .notNull()
+      .default(sql`clock_timestamp()`),
+  },
+  (t) => [
+    ...tenantRules('result_states', t),
+    within('result_states_result', t.organisationId, t.resultId, results),
+    byMember('result_states', t.organisationId, t.setBy),
+    index('result_states_result_idx').on(t.organisationId, t.resultId, t.setAt),
+    check('result_states_state_check', sql`${t.state} in ('entered', 'checked')`),
+  ],
+);
+
+/**
+ * What an aerodynamicist holds of a result, whole in each row; the newest row counts. `includedReason` lets a result in
+ * that is not comparable, `setAsideReason` keeps one out that would count.
+ */
+export const resultJudgements = pgTable(
+  'result_judgements',
+  {
+    ...tenantKey(),
+    resultId: uuid('result_id').notNull(),
+    reynolds: jsonb('reynolds').$type<ReynoldsChoice>().notNull(),
+    includedReason: text('included_reason'),
+    setAsideReason: text('set_aside_reason'),
+    comment: text('comment'),
+    judgedBy: uuid('judged_by').notNull(),
+    judgedAt: instant('judged_at')
+      .notNull()
+      .default(sql`clock_timestamp()`),
+  },
+  (t) => [
+    ...tenantRules('result_judgements', t),
+    within('result_judgements_result', t.organisationId, t.resultId, results),
+    byMember('result_judgements', t.organisationId, t.judgedBy),
+    index('result_judgements_result_idx').on(t.organisationId, t.resultId, t.judgedAt),
   ],
 );

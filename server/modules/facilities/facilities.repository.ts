@@ -21,6 +21,7 @@ const COLUMNS = [
   'installationDegreesOfFreedom',
   'repeatabilityURelative',
   'repeatabilityDegreesOfFreedom',
+  'checkBody',
   'remark',
 ] as const satisfies readonly (keyof FacilityFields)[];
 

@@ -20,6 +20,12 @@ const COLUMNS = [
   'remark',
 ] as const satisfies readonly (keyof ProgrammeFields)[];
 
+/** The columns of what a person types; the friction line is on unless it is switched off. */
+const columnsOf = (fields: ProgrammeFields) => ({
+  ...withNulls(fields, COLUMNS),
+  frictionLine: fields.frictionLine ?? 'on',
+});
+
 const MILESTONE = { id: milestones.id, name: milestones.name, date: milestones.date };
 
 function programmeOf(row: typeof programmes.$inferSelect, its: readonly Milestone[]): Programme {
@@ -64,7 +70,7 @@ export async function programmeOfName(tx: Tx, name: string): Promise<string | un
 }
 
 export async function insertProgramme(tx: Tx, fields: ProgrammeFields): Promise<Programme> {
-  const [inserted] = await tx.insert(programmes).values(withNulls(fields, COLUMNS)).returning();
+  const [inserted] = await tx.insert(programmes).values(columnsOf(fields)).returning();
   const row = present(inserted);
   await writeMilestones(tx, row.id, fields.milestones);
   return programmeOf(row, await milestonesOf(tx, row.id));
@@ -73,7 +79,7 @@ export async function insertProgramme(tx: Tx, fields: ProgrammeFields): Promise<
 export async function updateProgramme(tx: Tx, id: string, fields: ProgrammeFields): Promise<Programme> {
   const [row] = await tx
     .update(programmes)
-    .set({ ...withNulls(fields, COLUMNS), version: sql`${programmes.version} + 1` })
+    .set({ ...columnsOf(fields), version: sql`${programmes.version} + 1` })
     .where(eq(programmes.id, id))
     .returning();
   await writeMilestones(tx, id, fields.milestones);

@@ -22,6 +22,25 @@ const IMPORT = {
   }),
 };
 
+const POLICIES = {
+  machCaution: 0.2,
+  machExcluded: 0.3,
+  blockageCaution: 0.05,
+  blockageExcluded: 0.1,
+  openJetLimit: 0.35,
+  minimumReynolds: 2e6,
+  reynoldsToleranceM2: 0.005,
+  frictionShare: 0.12,
+  frictionShareU: 0.06,
+  yawCoverageDeg: 10,
+  repeatabilityCaution: 0.01,
+  airTemperatureC: { from: 5, to: 40 },
+  airPressurePa: { from: 85000, to: 106000 },
+  frontLiftLimit: 0.3,
+  rearLiftLimit: 0.3,
+  plausible: [],
+};
+
 /** Values that no rule can guess: what a JSON column must hold so that the product can read the row. */
 const BY_HAND: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
   programmes: {
@@ -30,7 +49,17 @@ const BY_HAND: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
     reference_condition: '{}',
     common_area: '{"kind":"fixed","areaM2":2}',
   },
-  facilities: { usual_condition: '{}', blockage: null },
+  facilities: { usual_condition: '{}', blockage: null, check_body: null },
+  facility_versions: { fields: '{"name":"a","kind":"road","usualCondition":{}}' },
+  policy_versions: { values: JSON.stringify(POLICIES) },
+  adjustments: { body_shapes: [], from_value: '"a"', to_value: '"b"' },
+  correlation_versions: { replaces: [], pairs: '[]' },
+  result_judgements: { reynolds: '{"kind":"friction-line"}' },
+  proposals: { changes: '[]' },
+  test_plans: {
+    inputs:
+      '{"scale":0.4,"tunnelTemperatureC":20,"tunnelPressurePa":100000,"dragCoefficient":0.3,"condition":{}}',
+  },
   configurations: {
     rolling_resistance: 0.008,
     road_load_reference: null,
@@ -55,7 +84,7 @@ const BY_HAND: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
 };
 
 /** Columns that say that a row no longer counts stay empty: what counts is what could leak. */
-const EMPTY = /^(retired|ended|withdrawn|cancel_requested|finished|sent)_at$/;
+const EMPTY = /^(retired|ended|withdrawn|cancel_requested|finished|sent|struck)_at$/;
 
 /**
  * Puts one row of the organisation's own into every tenant table, each text carrying `marker`. Written by the maintenance

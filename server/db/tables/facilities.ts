@@ -110,6 +110,8 @@ export const checkMeasurements = pgTable(
     facilityId: uuid('facility_id').notNull(),
     testSessionId: uuid('test_session_id').notNull(),
     measuredOn: date('measured_on', { mode: 'string' }).notNull(),
+    /** Its name at the time: where the body is replaced, old readings stay the old body's. */
+    checkBody: text('check_body').notNull(),
     dragAreaM2: doublePrecision('drag_area_m2').notNull(),
     s: doublePrecision('s'),
     n: integer('n'),

@@ -1,0 +1,1 @@
+ALTER TABLE "check_measurements" ADD COLUMN "check_body" text NOT NULL;

@@ -14,12 +14,19 @@ export const PERMISSIONS = [
   'variants.edit',
   'facilities.read',
   'facilities.edit',
+  'adjustments.edit',
+  'correlations.edit',
+  'correlations.adopt',
   'cycles.read',
   'cycles.edit',
   'results.read',
   'results.enter',
+  'results.check',
+  'results.judge',
   'results.adopt',
   'results.withdraw',
+  'plans.read',
+  'plans.edit',
   'imports.run',
   'ranking-inputs.read',
   'ranking-view.read',
@@ -32,6 +39,7 @@ const READER: readonly Permission[] = [
   'variants.read',
   'facilities.read',
   'cycles.read',
+  'plans.read',
   'ranking-view.read',
 ];
 
@@ -41,6 +49,7 @@ const MANAGER: readonly Permission[] = [
   'variants.edit',
   'cycles.edit',
   'results.read',
+  'plans.edit',
   'ranking-inputs.read',
 ];
 
@@ -50,7 +59,12 @@ const BY_ROLE: Readonly<Record<Role, readonly Permission[]>> = {
   aerodynamicist: [
     ...MANAGER,
     'facilities.edit',
+    'adjustments.edit',
+    'correlations.edit',
+    'correlations.adopt',
     'results.enter',
+    'results.check',
+    'results.judge',
     'results.adopt',
     'results.withdraw',
     'imports.run',

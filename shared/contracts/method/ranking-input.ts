@@ -150,6 +150,7 @@ const adjustmentSchema = z.strictObject({
   perUnitDragAreaM2: number.nullish(),
   uPerUnitM2: u,
   degreesOfFreedom: dof,
+  variantIds: z.array(text).nullish().describe('The variants that it holds for; absent: every variant'),
 });
 
 const correlationSchema = z.strictObject({

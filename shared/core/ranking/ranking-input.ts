@@ -178,6 +178,8 @@ export interface AdjustmentInput {
   readonly perUnitDragAreaM2?: Maybe<number>;
   readonly uPerUnitM2?: Maybe<number>;
   readonly degreesOfFreedom?: Maybe<number>;
+  /** The variants that it holds for, by their body class; absent: every variant. An extension of our own. */
+  readonly variantIds?: Maybe<readonly string[]>;
 }
 
 export interface CorrelationPairInput {

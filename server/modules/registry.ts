@@ -9,6 +9,7 @@ import { programmesModule } from './programmes';
 import { rankingsModule } from './rankings';
 import { resultsModule } from './results';
 import { sessionModule } from './session';
+import { testSessionsModule } from './test-sessions';
 import { variantsModule } from './variants';
 
 /** Every module, once: its routes are mounted, described by OpenAPI and walked by the cross-tenant test from here. */
@@ -19,6 +20,7 @@ export const MODULES: readonly ServerModule[] = [
   programmesModule,
   variantsModule,
   facilitiesModule,
+  testSessionsModule,
   cyclesModule,
   resultsModule,
   attachmentsModule,

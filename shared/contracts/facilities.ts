@@ -47,8 +47,51 @@ export const facilityFields = z.strictObject({
 });
 export type FacilityFields = z.infer<typeof facilityFields>;
 
-export const facility = facilityFields.extend({ id, version, retiredAt: timestamp.optional() });
+export const facility = facilityFields.extend({
+  id,
+  version,
+  versionNumber: z.int().min(1).describe('Which version of corrections and uncertainties stands, from 1 on'),
+  retiredAt: timestamp.optional(),
+});
 export type Facility = z.infer<typeof facility>;
+
+export const facilityChange = facilityFields.extend({
+  comment: z
+    .string()
+    .trim()
+    .min(3)
+    .max(1000)
+    .optional()
+    .describe('Why corrections or uncertainties change; needed where they do, and kept with the version'),
+});
+export type FacilityChange = z.infer<typeof facilityChange>;
+
+export const facilityVersion = z.strictObject({
+  number: z.int().min(1),
+  fields: facilityFields,
+  comment: z.string().optional(),
+  at: timestamp,
+  by: name.optional().describe('Absent where nobody is on record'),
+});
+export type FacilityVersion = z.infer<typeof facilityVersion>;
+
+/** How many results of a programme come from a facility. */
+export const facilityEvidence = z.strictObject({
+  programmeId: id,
+  programmeName: name,
+  results: z.int().min(1).describe('Withdrawn ones included'),
+});
+export type FacilityEvidence = z.infer<typeof facilityEvidence>;
+
+/** A result by how much of the section its model took. */
+export const testedModel = z.strictObject({
+  programmeId: id,
+  resultId: id,
+  resultName: name,
+  variantName: name,
+  modelAreaM2: positive.describe('Frontal area at the scale of the test'),
+});
+export type TestedModel = z.infer<typeof testedModel>;
 
 const facilityParams = z.strictObject({ facilityId: id });
 
@@ -101,11 +144,11 @@ export const facilityUpdate = endpoint({
   kind: 'json',
   method: 'PUT',
   path: '/api/v1/facilities/:facilityId',
-  summary: 'Change a facility',
+  summary: 'Change a facility; changed corrections or uncertainties become a new version, with a comment',
   access: 'facilities.edit',
   params: facilityParams,
   query: nothing,
-  body: facilityFields,
+  body: facilityChange,
   response: facility,
   command: true,
   versioned: true,
@@ -125,4 +168,49 @@ export const facilityRetire = endpoint({
   command: true,
   versioned: true,
   problems: ['conflict'],
+});
+
+export const facilityVersionList = endpoint({
+  kind: 'json',
+  method: 'GET',
+  path: '/api/v1/facilities/:facilityId/versions',
+  summary: 'What the corrections and uncertainties of a facility were, change by change',
+  access: 'facilities.read',
+  params: facilityParams,
+  query: nothing,
+  body: nothing,
+  response: z.strictObject({ versions: z.array(facilityVersion).describe('Newest first') }),
+  command: false,
+  versioned: false,
+  problems: [],
+});
+
+export const facilityEvidenceList = endpoint({
+  kind: 'json',
+  method: 'GET',
+  path: '/api/v1/facilities/:facilityId/evidence',
+  summary: 'How many results each programme has from a facility',
+  access: 'facilities.read',
+  params: facilityParams,
+  query: nothing,
+  body: nothing,
+  response: z.strictObject({ programmes: z.array(facilityEvidence) }),
+  command: false,
+  versioned: false,
+  problems: [],
+});
+
+export const facilityModelList = endpoint({
+  kind: 'json',
+  method: 'GET',
+  path: '/api/v1/facilities/:facilityId/models',
+  summary: 'The results whose models were the largest that stood in a facility',
+  access: 'results.read',
+  params: facilityParams,
+  query: nothing,
+  body: nothing,
+  response: z.strictObject({ models: z.array(testedModel).describe('Largest first, at most 50') }),
+  command: false,
+  versioned: false,
+  problems: [],
 });

@@ -78,6 +78,7 @@ export const rankingContext: z.ZodType<RankingContext, RankingContext> = z.stric
   variants: z.array(contextVariant),
   adoptions: z.array(z.strictObject({ variantId: text, resultId: text, at: text, by: text })),
   sessions: z.array(z.strictObject({ id: text, name: text })),
+  facilityVersions: z.array(z.strictObject({ facilityId: text, number: z.int() })),
   cycles: z.array(
     z.strictObject({
       key: text,

@@ -113,6 +113,7 @@ function contextOf(inputs: RankingInput): RankingContext {
     })),
     adoptions: [],
     sessions: [{ id: 'autumn', name: 'Autumn entry' }],
+    facilityVersions: [{ facilityId: 'belt', number: 1 }],
     cycles: [SHORT_CYCLE],
   };
 }

@@ -1,5 +1,6 @@
 import { TUNNEL_KINDS } from '#shared/core/ranking/ranking-input';
-import type { FacilityFields } from '#shared/contracts/facilities';
+import { changedCorrections } from '#shared/core/reduction/facility-corrections';
+import type { Facility, FacilityFields } from '#shared/contracts/facilities';
 import { Issues, type Issue } from '../../rules/issue';
 
 export function isTunnel(kind: FacilityFields['kind']): boolean {
@@ -125,4 +126,34 @@ function uncertaintyIssues(fields: FacilityFields): readonly Issue[] {
     );
   }
   return issues.list;
+}
+
+/** What a person types of a facility, without what the product keeps beside it. */
+export function fieldsOfFacility(facility: Facility): FacilityFields {
+  const { id: _id, version: _version, versionNumber: _number, retiredAt: _retiredAt, ...fields } = facility;
+  return fields;
+}
+
+export interface FacilityChangeFacts {
+  readonly before: Facility;
+  readonly fields: FacilityFields;
+  readonly comment: string | undefined;
+  readonly hasResults: boolean;
+}
+
+/** What is wrong with changing a facility in this way. */
+export function changeIssues({ before, fields, comment, hasResults }: FacilityChangeFacts): readonly Issue[] {
+  return new Issues()
+    .when(
+      before.kind !== fields.kind && hasResults,
+      'kind',
+      'Results were entered for this facility, and they were measured in the kind of facility that it is. Add another facility for the other kind.',
+      'kind-with-results',
+    )
+    .when(
+      comment === undefined && changedCorrections(before, fields).length > 0,
+      'comment',
+      'Corrections or uncertainties change, and with them every figure from here. Say why, so that it can be read with the version.',
+      'missing-input',
+    ).list;
 }

@@ -1,4 +1,4 @@
-import { asc, eq, inArray, sql } from 'drizzle-orm';
+import { asc, eq, getTableColumns, inArray, sql } from 'drizzle-orm';
 import type { Facility, FacilityFields } from '#shared/contracts/facilities';
 import type { Tx } from '../../db/pools';
 import { facilities } from '../../db/tables/facilities';
@@ -25,28 +25,41 @@ const COLUMNS = [
   'remark',
 ] as const satisfies readonly (keyof FacilityFields)[];
 
-function facilityOf(row: typeof facilities.$inferSelect): Facility {
+/**
+ * A facility as it was entered counts as its version 1, whether or not that was written down. In plain SQL, because the
+ * query builder names no table in a query of one table, and within the subquery that would be another one.
+ */
+const WITH_VERSION = {
+  ...getTableColumns(facilities),
+  versionNumber: sql<number>`coalesce((
+    select max(v.number) from facility_versions v where v.facility_id = facilities.id
+  ), 1)`,
+};
+
+type FacilityRow = typeof facilities.$inferSelect & { readonly versionNumber: number };
+
+function facilityOf(row: FacilityRow): Facility {
   const { organisationId: _organisationId, createdAt: _createdAt, retiredAt, ...rest } = row;
   return { ...withoutNulls(rest), ...(retiredAt === null ? {} : { retiredAt: retiredAt.toISOString() }) };
 }
 
 export async function listFacilities(tx: Tx): Promise<readonly Facility[]> {
   const rows = await tx
-    .select()
+    .select(WITH_VERSION)
     .from(facilities)
     .orderBy(sql`lower(${facilities.name})`, asc(facilities.id));
   return rows.map(facilityOf);
 }
 
 export async function findFacility(tx: Tx, id: string): Promise<Facility | undefined> {
-  const [row] = await tx.select().from(facilities).where(eq(facilities.id, id));
+  const [row] = await tx.select(WITH_VERSION).from(facilities).where(eq(facilities.id, id));
   return row && facilityOf(row);
 }
 
-/** As `findFacility`, and nobody else changes it until the transaction ends. */
+/** As `findFacility`, and nobody else changes it or enters a result there until the transaction ends. */
 export async function lockFacility(tx: Tx, id: string): Promise<Facility | undefined> {
-  const [row] = await tx.select().from(facilities).where(eq(facilities.id, id)).for('no key update');
-  return row && facilityOf(row);
+  await tx.select({ id: facilities.id }).from(facilities).where(eq(facilities.id, id)).for('update');
+  return findFacility(tx, id);
 }
 
 /** Which of these ids are facilities of the organisation. */
@@ -67,25 +80,24 @@ export async function facilityOfName(tx: Tx, name: string): Promise<string | und
   return row?.id;
 }
 
-export async function insertFacility(tx: Tx, fields: FacilityFields): Promise<Facility> {
-  const [row] = await tx.insert(facilities).values(withNulls(fields, COLUMNS)).returning();
-  return facilityOf(present(row));
+export async function insertFacility(tx: Tx, fields: FacilityFields): Promise<string> {
+  const [row] = await tx
+    .insert(facilities)
+    .values(withNulls(fields, COLUMNS))
+    .returning({ id: facilities.id });
+  return present(row).id;
 }
 
-export async function updateFacility(tx: Tx, id: string, fields: FacilityFields): Promise<Facility> {
-  const [row] = await tx
+export async function updateFacility(tx: Tx, id: string, fields: FacilityFields): Promise<void> {
+  await tx
     .update(facilities)
     .set({ ...withNulls(fields, COLUMNS), version: sql`${facilities.version} + 1` })
-    .where(eq(facilities.id, id))
-    .returning();
-  return facilityOf(present(row));
+    .where(eq(facilities.id, id));
 }
 
-export async function setFacilityRetired(tx: Tx, id: string, retiredAt: Date | null): Promise<Facility> {
-  const [row] = await tx
+export async function setFacilityRetired(tx: Tx, id: string, retiredAt: Date | null): Promise<void> {
+  await tx
     .update(facilities)
     .set({ retiredAt, version: sql`${facilities.version} + 1` })
-    .where(eq(facilities.id, id))
-    .returning();
-  return facilityOf(present(row));
+    .where(eq(facilities.id, id));
 }

@@ -1,9 +1,12 @@
 import {
   facilityCreate,
+  facilityEvidenceList,
   facilityList,
+  facilityModelList,
   facilityRead,
   facilityRetire,
   facilityUpdate,
+  facilityVersionList,
 } from '#shared/contracts/facilities';
 import { route, type Route } from '../../http/module';
 import {
@@ -13,6 +16,7 @@ import {
   oneFacility,
   retireFacility,
 } from './facilities.service';
+import { evidenceOf, modelsOf, versionsOf } from './facility-history.service';
 
 export const facilitiesRoutes: readonly Route[] = [
   route(facilityList, async (_input, work) => ({ facilities: [...(await allFacilities(work))] })),
@@ -24,4 +28,13 @@ export const facilitiesRoutes: readonly Route[] = [
   route(facilityRetire, async ({ params, body, expectedVersion }, work) =>
     retireFacility(work, params.facilityId, body.retired, expectedVersion),
   ),
+  route(facilityVersionList, async ({ params }, work) => ({
+    versions: [...(await versionsOf(work, params.facilityId))],
+  })),
+  route(facilityEvidenceList, async ({ params }, work) => ({
+    programmes: [...(await evidenceOf(work, params.facilityId))],
+  })),
+  route(facilityModelList, async ({ params }, work) => ({
+    models: [...(await modelsOf(work, params.facilityId))],
+  })),
 ];

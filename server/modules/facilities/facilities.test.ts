@@ -31,7 +31,7 @@ describe('facilities over HTTP', () => {
       remark: 'Five belts',
     });
     const created = await aerodynamicist.ok(facilityCreate, { body: fields });
-    expect(created).toEqual({ ...fields, id: created.id, version: 1 });
+    expect(created).toEqual({ ...fields, id: created.id, version: 1, versionNumber: 1 });
     expect(await aerodynamicist.ok(facilityRead, { params: { facilityId: created.id } })).toEqual(created);
   });
 
@@ -50,7 +50,8 @@ describe('facilities over HTTP', () => {
   it('are changed with the version that was seen; what is left out is cleared', async () => {
     const { id } = await aerodynamicist.ok(facilityCreate, { body: facilityFields({ name: 'Changing' }) });
     const params = { facilityId: id };
-    const { biasURelative: _bias, ...without } = facilityFields({ name: 'Changing' });
+    const { biasURelative: _bias, ...rest } = facilityFields({ name: 'Changing' });
+    const without = { ...rest, comment: 'The calibration was withdrawn' };
     const changed = await aerodynamicist.ok(facilityUpdate, { params, ifMatch: 1, body: without });
     expect(changed).not.toHaveProperty('biasURelative');
     expect(await aerodynamicist.refused(facilityUpdate, { params, ifMatch: 1, body: without })).toMatchObject(

@@ -27,6 +27,7 @@ export interface ProgrammeRows {
   readonly configurations: readonly ConfigurationRow[];
   readonly results: readonly ResultRow[];
   readonly adoptions: readonly AdoptionRow[];
+  readonly facilityVersions: RankingContext['facilityVersions'];
 }
 
 /** And what only the inputs of the method need. */

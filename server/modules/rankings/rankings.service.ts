@@ -11,6 +11,7 @@ import { buildRankingView } from '#shared/core/ranking/ranking-view-build';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
 import type { MemberContext } from '../../http/context';
 import { fail } from '../../http/problem-error';
+import { currentVersions } from '../facilities';
 import {
   commonAreaOf,
   contextVariants,
@@ -26,25 +27,32 @@ import { withoutRawEvidence } from './rankings.policy';
 
 type Tx = MemberContext['tx'];
 
+/** Facilities that the ranking reduces with: those of its results and that of the programme's sign-off. */
+function facilityIdsOf({ programme, results }: Pick<ProgrammeRows, 'programme' | 'results'>): string[] {
+  const ids = new Set(results.map(({ facilityId }) => facilityId));
+  if (programme.referenceFacilityId) ids.add(programme.referenceFacilityId);
+  return [...ids];
+}
+
 async function programmeRows(tx: Tx, programmeId: string): Promise<ProgrammeRows> {
+  const programme = (await repository.findProgramme(tx, programmeId)) ?? fail('not-found');
+  const results = await repository.listResults(tx, programmeId);
   return {
-    programme: (await repository.findProgramme(tx, programmeId)) ?? fail('not-found'),
+    programme,
     variants: await repository.listVariants(tx, programmeId),
     areas: await repository.newestAreas(tx, programmeId),
     configurations: await repository.listConfigurations(tx, programmeId),
-    results: await repository.listResults(tx, programmeId),
+    results,
+    facilityVersions: await currentVersions(tx, facilityIdsOf({ programme, results })),
     adoptions: await repository.currentAdoptions(tx, programmeId),
   };
 }
 
 async function rankingRows(tx: Tx, programmeId: string): Promise<RankingRows> {
   const rows = await programmeRows(tx, programmeId);
-  const facilityIds = new Set(rows.results.map(({ facilityId }) => facilityId));
-  const { referenceFacilityId } = rows.programme;
-  if (referenceFacilityId) facilityIds.add(referenceFacilityId);
   return {
     ...rows,
-    facilities: await repository.facilitiesById(tx, [...facilityIds]),
+    facilities: await repository.facilitiesById(tx, facilityIdsOf(rows)),
     points: await repository.listPoints(tx, programmeId),
   };
 }
@@ -93,6 +101,7 @@ function contextOf(
     variants: contextVariants(rows),
     adoptions: standingAdoptions(rows.adoptions, rows.results),
     sessions: sessionsOf(rows.results),
+    facilityVersions: rows.facilityVersions,
     cycles,
   };
 }

@@ -15,6 +15,7 @@ const TABLE_OF_ID: Readonly<Record<string, string>> = {
   facilityId: 'facilities',
   referenceFacilityId: 'facilities',
   testSessionId: 'test_sessions',
+  checkMeasurementId: 'check_measurements',
   resultId: 'results',
   importId: 'imports',
   attachmentId: 'attachments',

@@ -60,5 +60,7 @@ export interface RankingContext {
   readonly adoptions: readonly ContextAdoption[];
   /** Entries in facilities, by the id that the inputs hold. */
   readonly sessions: readonly { readonly id: string; readonly name: string }[];
+  /** Which version of each facility's corrections and uncertainties the inputs hold. */
+  readonly facilityVersions: readonly { readonly facilityId: string; readonly number: number }[];
   readonly cycles: readonly ContextCycle[];
 }

@@ -23,6 +23,7 @@ const FACILITIES: readonly Facility[] = [
   {
     id: '018f0000-0000-7000-8000-0000000000a1',
     version: 1,
+    versionNumber: 1,
     name: 'Halmere',
     kind: 'open-jet',
     areaM2: 22.4,
@@ -33,6 +34,7 @@ const FACILITIES: readonly Facility[] = [
   {
     id: '018f0000-0000-7000-8000-0000000000a2',
     version: 1,
+    versionNumber: 1,
     name: 'Stillmoor',
     kind: 'closed',
     areaM2: 5.6,
@@ -43,6 +45,7 @@ const FACILITIES: readonly Facility[] = [
   {
     id: '018f0000-0000-7000-8000-0000000000a3',
     version: 1,
+    versionNumber: 1,
     name: 'Coldharbour',
     kind: 'road',
     usualCondition: { ground: 'road', wheels: 'rotating' },

@@ -21,6 +21,19 @@ export const KM_PER_MILE = 1.609344;
 /** Effective mass of vehicle and rotating parts over the vehicle's mass: UN GTR No. 15, Annex 7 (memory). A default, not a law. */
 export const DEFAULT_ROTATING_FACTOR = 1.03;
 
+/** c_f = 0.455/(log10 Re)^2.58: Prandtl–Schlichting, smooth plate, turbulent (Schlichting, Boundary-Layer Theory). */
+export const SKIN_FRICTION = { factor: 0.455, exponent: 2.58 } as const;
+
+/** Reynolds numbers at or below this are mistyped, not tested: the turbulent friction line says nothing about them. */
+export const SKIN_FRICTION_MIN_REYNOLDS = 1000;
+
+/** A Reynolds sweep needs this many points and this ratio of its highest to its lowest Reynolds number: method section 6. */
+export const SWEEP_MIN_POINTS = 4;
+export const SWEEP_MIN_RATIO = 1.5;
+
+/** From this many pairs on a correlation has a slope, below it an offset alone: method section 8. */
+export const CORRELATION_LINE_PAIRS = 5;
+
 /** Half-step of every central difference in drag area [m²]: method section 13. */
 export const EXCHANGE_RATE_STEP_M2 = 0.001;
 
@@ -44,6 +57,12 @@ export const CIPM_2007_RANGE = { minC: 15, maxC: 27, minPa: 60000, maxPa: 110000
 
 /** Sutherland's β_s [kg/(m·s·K^½)] and S [K] for air: U.S. Standard Atmosphere 1976, ISO 2533. */
 export const SUTHERLAND_AIR = { beta: 1.458e-6, temperatureK: 110.4 } as const;
+
+/** Sutherland's S [K] for nitrogen in a cooled tunnel: 111 K, as commonly tabulated (memory). */
+export const SUTHERLAND_NITROGEN_TEMPERATURE_K = 111;
+
+/** Nothing is promised for a cooled tunnel below this [K]: the gas is near its liquid, and Sutherland's law ends (method section 15). */
+export const COLDEST_PLANNED_GAS_K = 100;
 
 /** Specific gas constant of dry air [J/(kg·K)]: ISO 2533. */
 export const SPECIFIC_GAS_CONSTANT_AIR = 287.05287;
@@ -105,3 +124,35 @@ export const DEFAULT_POLICIES = {
   frictionShareU: 0.06,
   reynoldsToleranceM2: 0.005,
 } as const;
+
+/**
+ * Limits of the checks that an organisation may set otherwise, beyond those of the method itself. All of them are common
+ * practice without a source: sweeps to 10° of yaw; 0.5 % scatter of repeated readings; a hall between 15 and 30 °C at the
+ * pressures of places below 700 m; a lift coefficient up to 0.25 per axle; what road cars of a body shape usually have.
+ */
+export const DEFAULT_CHECK_LIMITS = {
+  yawCoverageDeg: 10,
+  repeatabilityCaution: 0.005,
+  airTemperatureC: { from: 15, to: 30 },
+  airPressurePa: { from: 93000, to: 105000 },
+  frontLiftLimit: 0.25,
+  rearLiftLimit: 0.25,
+  plausible: [
+    { bodyShape: 'hatch', dragCoefficient: { from: 0.22, to: 0.42 }, frontalAreaM2: { from: 1.8, to: 2.6 } },
+    { bodyShape: 'liftback', dragCoefficient: { from: 0.2, to: 0.4 }, frontalAreaM2: { from: 1.8, to: 2.6 } },
+    { bodyShape: 'saloon', dragCoefficient: { from: 0.19, to: 0.4 }, frontalAreaM2: { from: 1.8, to: 2.6 } },
+    { bodyShape: 'estate', dragCoefficient: { from: 0.21, to: 0.42 }, frontalAreaM2: { from: 1.8, to: 2.7 } },
+    {
+      bodyShape: 'crossover',
+      dragCoefficient: { from: 0.23, to: 0.48 },
+      frontalAreaM2: { from: 2, to: 3.2 },
+    },
+    { bodyShape: 'coupe', dragCoefficient: { from: 0.19, to: 0.42 }, frontalAreaM2: { from: 1.6, to: 2.4 } },
+    { bodyShape: 'van', dragCoefficient: { from: 0.25, to: 0.55 }, frontalAreaM2: { from: 2.2, to: 6 } },
+    { bodyShape: 'pickup', dragCoefficient: { from: 0.28, to: 0.6 }, frontalAreaM2: { from: 2.2, to: 3.8 } },
+    { bodyShape: 'other', dragCoefficient: { from: 0.1, to: 1.2 }, frontalAreaM2: { from: 0.5, to: 12 } },
+  ],
+} as const;
+
+/** A quoted area outside these multiples of the variant's frontal area is another area: method section 11. */
+export const QUOTED_AREA_RANGE = { from: 0.8, to: 1.25 } as const;

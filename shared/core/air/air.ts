@@ -52,19 +52,29 @@ function stated(value: number | null | undefined, where: string, range: Range): 
   return value;
 }
 
-function customAir(input: AirInput, where: string): Air {
-  const temperatureC = stated(input.temperatureC, `${where}.temperatureC`, {
+/** A temperature in °C that air can have. @throws {Refused} missing-input, temperature-out-of-range (−40 to 60 °C) */
+export function statedTemperature(temperatureC: number | null | undefined, where: string): number {
+  return stated(temperatureC, where, {
     min: AIR_LIMITS.minC,
     max: AIR_LIMITS.maxC,
     code: 'temperature-out-of-range',
     words: '−40 to 60 °C',
   });
-  const pressurePa = stated(input.pressurePa, `${where}.pressurePa`, {
+}
+
+/** A static pressure in Pa that air can have. @throws {Refused} missing-input, pressure-out-of-range (30 to 1000 kPa) */
+export function statedPressure(pressurePa: number | null | undefined, where: string): number {
+  return stated(pressurePa, where, {
     min: AIR_LIMITS.minPa,
     max: AIR_LIMITS.maxPa,
     code: 'pressure-out-of-range',
     words: '30 to 1000 kPa',
   });
+}
+
+function customAir(input: AirInput, where: string): Air {
+  const temperatureC = statedTemperature(input.temperatureC, `${where}.temperatureC`);
+  const pressurePa = statedPressure(input.pressurePa, `${where}.pressurePa`);
   const relativeHumidity = stated(input.relativeHumidity, `${where}.relativeHumidity`, {
     min: 0,
     max: 1,

@@ -153,7 +153,8 @@ describe('The command', () => {
 
   it('lists its operations, one a line', () => {
     expect(call(['--list'])).toEqual({
-      stdout: 'air\nblockage\nyaw\nbudget\nrank\nreduce\ncycle-energy\npowertrain\nstudent-quantile\n',
+      stdout:
+        'air\nblockage\nyaw\nreynolds-sweep\nfriction-line\ncorrelation\nbudget\nrank\nreduce\ncycle-energy\npowertrain\nplan\nstudent-quantile\n',
       stderr: '',
       status: 0,
     });

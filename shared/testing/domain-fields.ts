@@ -1,6 +1,8 @@
+import type { AdjustmentFields } from '#shared/contracts/adjustments';
 import type { FacilityFields } from '#shared/contracts/facilities';
 import type { ProgrammeFields } from '#shared/contracts/programmes';
 import type { ResultFields } from '#shared/contracts/results';
+import type { TestPlanFields, TestPlanInputs } from '#shared/contracts/test-plans';
 import type { VariantFields } from '#shared/contracts/variants';
 
 /** A programme as it is usually opened; change what a test is about. */
@@ -68,6 +70,44 @@ export function resultFields(
     air: { temperatureC: 22, pressurePa: 99_100, relativeHumidity: 0.4 },
     condition: { ground: 'several-belts', wheels: 'rotating' },
     points: [{ yawDeg: 0, value: 0.2712, s: 0.0006, n: 3 }],
+    ...change,
+  };
+}
+
+/** A model of two fifths at what a closed tunnel reaches. */
+export function testPlanFields(
+  ids: Pick<TestPlanFields, 'variantId' | 'facilityId'>,
+  change: Partial<TestPlanInputs> = {},
+  name = 'Two fifths in spring',
+): TestPlanFields {
+  return {
+    ...ids,
+    name,
+    inputs: {
+      scale: 0.4,
+      target: { basis: 'reference' },
+      tunnelTemperatureC: 20,
+      tunnelPressurePa: 100_000,
+      frontalAreaM2: 2.17,
+      dragCoefficient: 0.27,
+      condition: { ground: 'one-belt', wheels: 'rotating' },
+      ...change,
+    },
+  };
+}
+
+/** What a fixed floor is worth against moving belts, for every body shape. */
+export function adjustmentFields(change: Partial<AdjustmentFields> = {}): AdjustmentFields {
+  return {
+    name: 'Fixed floor to belts',
+    item: 'ground',
+    fromValue: 'fixed-floor',
+    toValue: 'several-belts',
+    deltaDragAreaM2: 0.012,
+    uM2: 0.004,
+    degreesOfFreedom: 5,
+    bodyShapes: [],
+    evidence: 'Six cars measured both ways in Halmere, report H-114',
     ...change,
   };
 }

@@ -52,13 +52,13 @@ const BY_HAND: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
   facilities: { usual_condition: '{}', blockage: null, check_body: null },
   facility_versions: { fields: '{"name":"a","kind":"road","usualCondition":{}}' },
   policy_versions: { values: JSON.stringify(POLICIES) },
-  adjustments: { body_shapes: [], from_value: '"a"', to_value: '"b"' },
+  adjustments: { item: 'ground', body_shapes: [], from_value: '"a"', to_value: '"b"' },
   correlation_versions: { replaces: [], pairs: '[]' },
   result_judgements: { reynolds: '{"kind":"friction-line"}' },
   proposals: { changes: '[]' },
   test_plans: {
     inputs:
-      '{"scale":0.4,"tunnelTemperatureC":20,"tunnelPressurePa":100000,"dragCoefficient":0.3,"condition":{}}',
+      '{"scale":0.4,"target":{"basis":"reference"},"tunnelTemperatureC":20,"tunnelPressurePa":100000,"frontalAreaM2":2.2,"dragCoefficient":0.3,"condition":{}}',
   },
   configurations: {
     rolling_resistance: 0.008,

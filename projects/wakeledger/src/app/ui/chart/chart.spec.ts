@@ -42,6 +42,23 @@ describe('a chart', () => {
     expect(opener?.getAttribute('aria-expanded')).toBe('true');
   });
 
+  it('hands the inks to options that ask for them', async () => {
+    TestBed.configureTestingModule({
+      providers: [{ provide: ECHARTS_LOADER, useValue: () => Promise.resolve({ init }) }],
+    });
+    const options = jest.fn(() => ({ series: [] }));
+    const fixture = TestBed.createComponent(Chart, {
+      bindings: [
+        inputBinding('caption', signal('Speed over time')),
+        inputBinding('options', signal(options)),
+        inputBinding('table', signal({ columns: [], rows: [] })),
+      ],
+    });
+    fixture.detectChanges();
+    await fixture.whenStable();
+    expect(options).toHaveBeenCalledWith(expect.objectContaining({ rust: expect.any(String) }));
+  });
+
   it('is named by its caption', async () => {
     const host = await draw();
     expect(host.querySelector('[role="img"]')?.getAttribute('aria-label')).toBe('Speed over time');

@@ -13,7 +13,7 @@ import {
 import type { EChartsCoreOption } from 'echarts/core';
 import { NGX_ECHARTS_CONFIG, NgxEchartsDirective } from 'ngx-echarts';
 import { chartTheme } from '../../../theme/chart-theme';
-import { colourValues } from '../../../theme/token-values';
+import { type ColourValues, colourValues } from '../../../theme/token-values';
 import { Preferences } from '../../core/preferences/preferences';
 import { fileNameOf, pngAddress, saveAddress, svgAddress } from './chart-export';
 import { ECHARTS_LOADER } from './echarts-loader';
@@ -23,6 +23,9 @@ export interface ChartTable {
   readonly columns: readonly string[];
   readonly rows: readonly (readonly string[])[];
 }
+
+/** What is drawn; as a function of the inks where a line or a mark needs one of its own, in light and in dark. */
+export type ChartOptions = EChartsCoreOption | ((inks: ColourValues) => EChartsCoreOption);
 
 /** A chart drawn as SVG in the product's inks, with its table behind it and export as PNG and SVG. */
 @Component({
@@ -36,7 +39,7 @@ export interface ChartTable {
 export class Chart {
   /** What the chart shows, in a sentence: its caption, its description and its file name. */
   readonly caption = input.required<string>();
-  readonly options = input.required<EChartsCoreOption>();
+  readonly options = input.required<ChartOptions>();
   readonly table = input.required<ChartTable>();
 
   private readonly document = inject(DOCUMENT);
@@ -50,7 +53,8 @@ export class Chart {
   protected readonly theme = computed(() => chartTheme(this.colours()));
   /** Text in tooltips is drawn, not written as HTML: the content security policy allows no inline styles. */
   protected readonly drawn = computed<EChartsCoreOption>(() => {
-    const options = this.options();
+    const given = this.options();
+    const options: EChartsCoreOption = typeof given === 'function' ? given(this.colours()) : given;
     const tooltip = options['tooltip'];
     return {
       animation: false,

@@ -1,14 +1,18 @@
 import type { ServerModule } from '../http/module';
+import { adjustmentsModule } from './adjustments';
 import { attachmentsModule } from './attachments';
 import { auditModule } from './audit';
 import { cyclesModule } from './cycles';
+import { evaluationsModule } from './evaluations';
 import { facilitiesModule } from './facilities';
 import { importsModule } from './imports';
 import { organisationsModule } from './organisations';
+import { policiesModule } from './policies';
 import { programmesModule } from './programmes';
 import { rankingsModule } from './rankings';
 import { resultsModule } from './results';
 import { sessionModule } from './session';
+import { testPlansModule } from './test-plans';
 import { testSessionsModule } from './test-sessions';
 import { variantsModule } from './variants';
 
@@ -21,8 +25,12 @@ export const MODULES: readonly ServerModule[] = [
   variantsModule,
   facilitiesModule,
   testSessionsModule,
+  adjustmentsModule,
+  policiesModule,
   cyclesModule,
   resultsModule,
+  evaluationsModule,
+  testPlansModule,
   attachmentsModule,
   importsModule,
   rankingsModule,

@@ -13,6 +13,7 @@ const AVAILABLE = {
   reduce: async () => (await import('./operations/reduce')).reduce,
   'cycle-energy': async () => (await import('./operations/cycle-energy')).cycleEnergy,
   powertrain: async () => (await import('./operations/powertrain')).powertrain,
+  combine: async () => (await import('./operations/combine')).combine,
   plan: async () => (await import('./operations/plan')).plan,
   'student-quantile': async () => (await import('./operations/student-quantile')).studentQuantile,
 } as const satisfies { readonly [name: string]: () => Promise<Operation> };
@@ -21,7 +22,6 @@ export type OperationName = keyof typeof AVAILABLE;
 
 /** Operations of later sections, with the section of the method that holds them. */
 export const NOT_YET_AVAILABLE: { readonly [name: string]: number } = {
-  combine: 10,
   statement: 11,
 };
 

@@ -39,4 +39,8 @@ export const REFUSAL_TITLES: { readonly [code: string]: string } = {
   'cycle-time-not-increasing': 'The time of a cycle must increase.',
   'cycle-negative-speed': 'A speed of a cycle is below zero.',
   'cycle-standing': 'The cycle never moves.',
+  'nothing-to-combine': 'There is no result to combine.',
+  'unknown-posting': 'A result names a posting that is not there.',
+  'interactions-overlap': 'Two interactions of equal size share a delta.',
+  'basis-mixed': 'Zero-yaw and wind-averaged figures are mixed.',
 };

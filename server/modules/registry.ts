@@ -2,6 +2,7 @@ import type { ServerModule } from '../http/module';
 import { adjustmentsModule } from './adjustments';
 import { attachmentsModule } from './attachments';
 import { auditModule } from './audit';
+import { correlationsModule } from './correlations';
 import { cyclesModule } from './cycles';
 import { evaluationsModule } from './evaluations';
 import { facilitiesModule } from './facilities';
@@ -26,6 +27,7 @@ export const MODULES: readonly ServerModule[] = [
   facilitiesModule,
   testSessionsModule,
   adjustmentsModule,
+  correlationsModule,
   policiesModule,
   cyclesModule,
   resultsModule,

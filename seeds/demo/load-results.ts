@@ -121,11 +121,32 @@ async function loadDecisions(writer: SeedWriter, scenario: Scenario, by: string)
     await writer.insert('adoptions', {
       id: writer.id('adoption', result),
       variant_id: variantId,
-      result_id: resultId,
+      evidence: 'newest',
       comment,
       adopted_by: by,
       adopted_at: at,
     });
-    await writer.audit(at, by, 'result.adopted', { kind: 'variant', id: variantId }, { resultId, comment });
+    await writer.insert('adoption_results', {
+      id: writer.id('adoption result', result),
+      adoption_id: writer.id('adoption', result),
+      variant_id: variantId,
+      result_id: resultId,
+    });
+    // Whoever adopts a result has looked it through.
+    await writer.insert('result_states', {
+      id: writer.id('checked', result),
+      result_id: resultId,
+      state: 'checked',
+      comment,
+      set_by: by,
+      set_at: at,
+    });
+    await writer.audit(
+      at,
+      by,
+      'result.adopted',
+      { kind: 'variant', id: variantId },
+      { resultIds: [resultId], rule: 'newest', comment },
+    );
   }
 }

@@ -1,5 +1,6 @@
 import pg from 'pg';
-import { adoptionList, resultEnter, resultList } from '#shared/contracts/results';
+import { adoptionList } from '#shared/contracts/adoptions';
+import { resultEnter, resultList } from '#shared/contracts/results';
 import { facilityList } from '#shared/contracts/facilities';
 import { programmeList, programmeRead } from '#shared/contracts/programmes';
 import { sessionRead } from '#shared/contracts/session';

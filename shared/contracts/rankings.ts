@@ -5,6 +5,7 @@ import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
 import { nothing, programmeParams } from './common';
 import { endpoint } from './endpoint';
+import { EVIDENCE_RULES } from './judgements';
 import { airInputSchema } from './method/air';
 import { rankingInputSchema } from './method/ranking-input';
 import { figureSchema } from './method/figure';
@@ -39,6 +40,8 @@ export const rankingQuery = z.strictObject({
     .optional(),
 });
 export type RankingQuery = z.infer<typeof rankingQuery>;
+
+const contextReason = z.strictObject({ resultId: text, reason: text, at: text, by: text });
 
 const contextVariant = z.strictObject({
   id: text,
@@ -76,7 +79,19 @@ export const rankingContext: z.ZodType<RankingContext, RankingContext> = z.stric
     milestones: z.array(z.strictObject({ id: text, name: text, date: text })),
   }),
   variants: z.array(contextVariant),
-  adoptions: z.array(z.strictObject({ variantId: text, resultId: text, at: text, by: text })),
+  adoptions: z.array(
+    z.strictObject({
+      id: text,
+      variantId: text,
+      resultIds: z.array(text),
+      rule: z.enum(EVIDENCE_RULES),
+      at: text,
+      by: text,
+    }),
+  ),
+  setAside: z.array(contextReason),
+  included: z.array(contextReason),
+  policyNumber: z.int().nullable(),
   sessions: z.array(z.strictObject({ id: text, name: text })),
   facilityVersions: z.array(z.strictObject({ facilityId: text, number: z.int() })),
   cycles: z.array(
@@ -100,6 +115,7 @@ const viewEvidence = z.strictObject({
   facilityKind: z.enum(['closed', 'open-jet', 'slotted', 'road', 'simulation']),
   scale: number,
   adopted: z.boolean(),
+  includedReason: text.nullable(),
 });
 const conditionValue = z.union([text, number, z.boolean()]);
 
@@ -134,8 +150,8 @@ const viewRow = z.strictObject({
   probabilityLowerThanNext: number.nullable(),
   evidence: z.array(viewEvidence),
   newer: viewEvidence.nullable(),
-  reynolds: number,
-  mach: number,
+  reynolds: number.nullable(),
+  mach: number.nullable(),
   blockageRatio: number.nullable(),
   cautions: z.array(
     z.enum([
@@ -197,7 +213,7 @@ const viewExclusion = z.strictObject({
   rules: z.array(
     z.strictObject({
       rule: text,
-      remedy: z.enum(['include-with-reason', 'change-policy', 'enter-anew', 'measure-yaw']),
+      remedy: z.enum(['include-with-reason', 'change-policy', 'enter-anew', 'measure-yaw', 'bring-back']),
       value: number.nullable(),
       limit: number.nullable(),
       items: z.array(
@@ -262,10 +278,10 @@ export const rankingInputsRead = endpoint({
   query: z.strictObject({
     area: areaChoice.describe('Stands in where the programme has no common area; `variant:<id>` or m²'),
     evidence: z
-      .enum(EVIDENCE_BASES)
+      .enum([...EVIDENCE_BASES, 'all'])
       .optional()
       .describe(
-        '`adopted`: a variant with an adoption carries its adopted result alone; `newest`: all results',
+        '`adopted`: a variant with an adoption carries its adopted results alone, with its rule; `newest`: all results that are not set aside; `all`: those too, for trying a change of judgement',
       ),
   }),
   body: nothing,

@@ -13,6 +13,7 @@ import {
   timestamp,
 } from './common';
 import { endpoint } from './endpoint';
+import { judgement, reason } from './judgements';
 
 export const QUANTITIES = ['force', 'coefficient', 'drag-area', 'coastdown-f2'] as const;
 
@@ -74,6 +75,13 @@ export const resultFields = z.strictObject({
 });
 export type ResultFields = z.infer<typeof resultFields>;
 
+/**
+ * Where a result stands. Superseded: a variant rested on it and rests on other results now. An adoption that was released
+ * leaves its results checked.
+ */
+export const RESULT_STATES = ['entered', 'checked', 'adopted', 'superseded', 'withdrawn'] as const;
+export type ResultState = (typeof RESULT_STATES)[number];
+
 export const result = resultFields.extend({
   id,
   programmeId: id,
@@ -82,7 +90,10 @@ export const result = resultFields.extend({
   enteredAt: timestamp,
   enteredBy: name,
   importId: id.optional(),
+  state: z.enum(RESULT_STATES),
+  /** Its variant rests on it, alone or among others. */
   adopted: z.boolean(),
+  judgement: judgement.optional().describe('What holds of it; absent: nobody judged it'),
   withdrawn: z.strictObject({ at: timestamp, by: name, reason: z.string() }).optional(),
 });
 export type Result = z.infer<typeof result>;
@@ -142,55 +153,79 @@ export const resultWithdraw = endpoint({
   access: 'results.withdraw',
   params: resultParams,
   query: nothing,
-  body: z.strictObject({ reason: z.string().trim().min(3).max(1000) }),
+  body: z.strictObject({ reason }),
   response: result,
   command: true,
   versioned: false,
   problems: ['wrong-state'],
 });
 
-/** Adoption: the one result per variant that counts. `resultId` absent releases it: the newest counts again. */
-export const adoption = z.strictObject({
-  variantId: id,
-  resultId: id.optional(),
-  comment: z.string(),
-  at: timestamp,
-  by: name,
-});
-export type Adoption = z.infer<typeof adoption>;
+const many = z.array(id).min(1).max(500);
+const changed = z.strictObject({ results: z.array(result).describe('In the order asked for') });
 
-export const adoptionList = endpoint({
+export const resultsWithdraw = endpoint({
   kind: 'json',
-  method: 'GET',
-  path: '/api/v1/programmes/:programmeId/adoptions',
-  summary: 'Which result each variant rests on, with the history of that choice',
-  access: 'results.read',
+  method: 'POST',
+  path: '/api/v1/programmes/:programmeId/results/withdrawals',
+  summary: 'Withdraw many results with one reason: all of them or none',
+  access: 'results.withdraw',
   params: programmeParams,
   query: nothing,
+  body: z.strictObject({ resultIds: many, reason }),
+  response: changed,
+  command: true,
+  versioned: false,
+  problems: ['wrong-state', 'unusable-input'],
+});
+
+export const resultsCheck = endpoint({
+  kind: 'json',
+  method: 'POST',
+  path: '/api/v1/programmes/:programmeId/results/state-changes',
+  summary: 'Say that results have been checked, or take that back, with one comment: all of them or none',
+  access: 'results.check',
+  params: programmeParams,
+  query: nothing,
+  body: z.strictObject({ resultIds: many, state: z.enum(['entered', 'checked']), comment: reason }),
+  response: changed,
+  command: true,
+  versioned: false,
+  problems: ['wrong-state', 'unusable-input'],
+});
+
+/** What happened to a result. Superseded: its variant rests on others since; released: on its newest again. */
+export const RESULT_EVENTS = [
+  'entered',
+  'checked',
+  'check-taken-back',
+  'judged',
+  'adopted',
+  'superseded',
+  'released',
+  'withdrawn',
+] as const;
+
+export const resultEvent = z.strictObject({
+  kind: z.enum(RESULT_EVENTS),
+  at: timestamp,
+  by: name,
+  comment: z.string().optional(),
+  judgement: judgement.optional(),
+  adoptionId: id.optional(),
+});
+export type ResultEvent = z.infer<typeof resultEvent>;
+
+export const resultHistory = endpoint({
+  kind: 'json',
+  method: 'GET',
+  path: '/api/v1/programmes/:programmeId/results/:resultId/history',
+  summary: 'What happened to a result: who, when and why',
+  access: 'results.read',
+  params: resultParams,
+  query: nothing,
   body: nothing,
-  response: z.strictObject({ adoptions: z.array(adoption).describe('Newest first') }),
+  response: z.strictObject({ events: z.array(resultEvent).describe('Newest first') }),
   command: false,
   versioned: false,
   problems: [],
-});
-
-export const resultAdopt = endpoint({
-  kind: 'json',
-  method: 'POST',
-  path: '/api/v1/programmes/:programmeId/adoptions',
-  summary: 'Adopt one result for a variant, or release the adoption',
-  access: 'results.adopt',
-  params: programmeParams,
-  query: nothing,
-  body: z.strictObject({
-    variantId: id,
-    resultId: id.optional(),
-    comment: z.string().trim().min(3).max(1000),
-    /** The adoption that the person saw as current; another one meanwhile is a conflict. */
-    expectedCurrentResultId: id.optional(),
-  }),
-  response: adoption,
-  command: true,
-  versioned: false,
-  problems: ['conflict', 'wrong-state'],
 });

@@ -17,6 +17,7 @@ import { CORRELATION_REPLACES, type CorrelationPair } from '#shared/contracts/co
 import type { PolicyValues } from '#shared/contracts/policies';
 import type { JudgementChange } from '#shared/contracts/proposals';
 import { BODY_SHAPES } from '#shared/contracts/variants';
+import type { EvaluationOutput, EvaluationParameters } from '#shared/core/ranking/evaluation-output';
 import { attachments } from './attachments';
 import { byMember, tenantKey, tenantRules, within } from './columns';
 import { instant } from './database-terms';
@@ -159,8 +160,8 @@ export const evaluations = pgTable(
     inputs: text('inputs').notNull(),
     inputsHash: text('inputs_hash').notNull(),
     methods: text('methods').array().notNull(),
-    parameters: jsonb('parameters').$type<Readonly<Record<string, unknown>>>().notNull(),
-    output: jsonb('output').$type<Readonly<Record<string, unknown>>>().notNull(),
+    parameters: jsonb('parameters').$type<EvaluationParameters>().notNull(),
+    output: jsonb('output').$type<EvaluationOutput>().notNull(),
     createdBy: uuid('created_by').notNull(),
     createdAt: instant('created_at').notNull().defaultNow(),
   },

@@ -151,13 +151,12 @@ export const resultWithdrawals = pgTable(
   ],
 );
 
-/** Which result a variant opens with; the newest row per variant counts, one without a result releases it. */
+/** What a variant rests on; the newest row per variant counts, one without `adoption_results` releases what stood. */
 export const adoptions = pgTable(
   'adoptions',
   {
     ...tenantKey(),
     variantId: uuid('variant_id').notNull(),
-    resultId: uuid('result_id'),
     /** Newest of the adopted results, or their weighted mean (method section 10). */
     evidence: text('evidence', { enum: EVIDENCE_RULES }).notNull().default('newest'),
     comment: text('comment'),
@@ -169,11 +168,6 @@ export const adoptions = pgTable(
   (t) => [
     ...tenantRules('adoptions', t),
     within('adoptions_variant', t.organisationId, t.variantId, variants),
-    foreignKey({
-      name: 'adoptions_result_fkey',
-      columns: [t.organisationId, t.variantId, t.resultId],
-      foreignColumns: [results.organisationId, results.variantId, results.id],
-    }),
     byMember('adoptions', t.organisationId, t.adoptedBy),
     unique('adoptions_variant_id_key').on(t.organisationId, t.variantId, t.id),
     check('adoptions_evidence_check', sql`${t.evidence} in ('newest', 'weighted-mean')`),

@@ -15,7 +15,8 @@ import {
 } from '#shared/contracts/import-endpoints';
 import { type ImportDetail, type ImportFix, type ImportMapping } from '#shared/contracts/imports';
 import { programmeCreate } from '#shared/contracts/programmes';
-import { resultAdopt, resultEnter, resultList } from '#shared/contracts/results';
+import { evidenceAdopt } from '#shared/contracts/adoptions';
+import { resultEnter, resultList } from '#shared/contracts/results';
 import { variantCreate, variantList } from '#shared/contracts/variants';
 import { facilityFields, programmeFields, resultFields, variantFields } from '#shared/testing/domain-fields';
 import { createJobRunner, type JobRunner } from '../../jobs/job-runner';
@@ -298,20 +299,22 @@ describe('an import over HTTP', () => {
     const { programmeId, hatchId } = await programme();
     const done = await stored(await checked(await upload(programmeId, [HEADINGS, line('H-1')].join('\n'))));
     const [only] = await results(programmeId);
-    await member.ok(resultAdopt, {
-      params: { programmeId },
-      body: { variantId: hatchId, resultId: only?.id, comment: 'The only one' },
-    });
+    const adopt = (resultIds: string[], expectedAdoptionId?: string) =>
+      member.ok(evidenceAdopt, {
+        params: { programmeId },
+        body: {
+          adoptions: [{ variantId: hatchId, resultIds, rule: 'newest', expectedAdoptionId }],
+          comment: 'The only one',
+        },
+      });
+    const { adoptions } = await adopt([only?.id ?? '']);
     expect(
       await member.refused(importWithdraw, { params: where(done), body: { reason: 'Not wanted' } }),
     ).toMatchObject({
       code: 'still-in-use',
       detail: expect.stringContaining('H-1') as string,
     });
-    await member.ok(resultAdopt, {
-      params: { programmeId },
-      body: { variantId: hatchId, comment: 'Released', expectedCurrentResultId: only?.id },
-    });
+    await adopt([], adoptions[0]?.id);
     expect(
       await member.ok(importWithdraw, { params: where(done), body: { reason: 'Not wanted' } }),
     ).toMatchObject({ state: 'withdrawn' });

@@ -121,8 +121,9 @@ export async function lockVariantsOfImport(tx: Tx, importId: string): Promise<vo
 export async function adoptedOfImport(tx: Tx, importId: string): Promise<readonly string[]> {
   const { rows } = await tx.execute<{ name: string }>(sql`
     select r.name from results r
-    join lateral (select a.result_id from adoptions a where a.variant_id = r.variant_id
-      order by a.adopted_at desc, a.id desc limit 1) newest on newest.result_id = r.id
+    join lateral (select a.id from adoptions a where a.variant_id = r.variant_id
+      order by a.adopted_at desc, a.id desc limit 1) newest on true
+    join adoption_results ar on ar.adoption_id = newest.id and ar.result_id = r.id
     where r.import_id = ${importId} order by r.name limit 20`);
   return rows.map(({ name }) => name);
 }

@@ -1,5 +1,6 @@
-import type { AreaChoice, EvidenceBasis } from '#shared/core/ranking/ranking-choices';
-import type { CommonAreaPolicy, ContextAdoption, RankingContext } from '#shared/core/ranking/ranking-context';
+import { judgedResult, type ResultJudgement } from '#shared/core/ranking/judged-result';
+import type { AreaChoice } from '#shared/core/ranking/ranking-choices';
+import type { CommonAreaPolicy, RankingContext } from '#shared/core/ranking/ranking-context';
 import type {
   FacilityInput,
   PointInput,
@@ -7,12 +8,18 @@ import type {
   ResultInput,
   VariantInput,
 } from '#shared/core/ranking/ranking-input';
-import { consideredResults } from '#shared/core/ranking/ranking-view-input';
+import {
+  consideredResults,
+  ruledVariants,
+  type ConsideredEvidence,
+} from '#shared/core/ranking/ranking-view-input';
+import { decisionsOf } from './ranking-decisions';
 import type {
   AdoptionRow,
   AreaRow,
   ConfigurationRow,
   FacilityRow,
+  JudgementRow,
   PointRow,
   ProgrammeRow,
   ResultRow,
@@ -27,6 +34,7 @@ export interface ProgrammeRows {
   readonly configurations: readonly ConfigurationRow[];
   readonly results: readonly ResultRow[];
   readonly adoptions: readonly AdoptionRow[];
+  readonly judgements: readonly JudgementRow[];
   readonly facilityVersions: RankingContext['facilityVersions'];
 }
 
@@ -105,6 +113,10 @@ function resultInput(row: ResultRow, points: readonly PointRow[]): ResultInput {
   };
 }
 
+function judgementInput(row: JudgementRow | undefined): ResultJudgement | undefined {
+  return row && { reynolds: row.reynolds, ...present({ includedReason: row.includedReason }) };
+}
+
 function facilityInput(row: FacilityRow): FacilityInput {
   const { id, name, kind, areaM2, blockage, biasURelative, biasUM2, sessionURelative, sessionUM2 } = row;
   const { sessionDegreesOfFreedom, installationURelative, installationUM2 } = row;
@@ -148,17 +160,6 @@ function variantInput(
   };
 }
 
-/** Adoptions that stand: not released, and of a result that still counts. */
-export function standingAdoptions(
-  adoptions: readonly AdoptionRow[],
-  results: readonly ResultRow[],
-): readonly ContextAdoption[] {
-  const counting = new Set(results.map(({ id }) => id));
-  return adoptions.flatMap(({ variantId, resultId, at, by }) =>
-    resultId !== null && counting.has(resultId) ? [{ variantId, resultId, at: at.toISOString(), by }] : [],
-  );
-}
-
 /** The common area and where it comes from. */
 export interface CommonArea {
   readonly policy: CommonAreaPolicy;
@@ -189,14 +190,22 @@ export function commonAreaOf(rows: ProgrammeRows, asked: AreaChoice): CommonArea
 export function rankingInputs(
   rows: RankingRows,
   commonAreaM2: number,
-  evidence: EvidenceBasis,
+  evidence: ConsideredEvidence,
 ): RankingInput {
   const { programme } = rows;
   const areaOf = new Map(rows.areas.map((area) => [area.variantId, area]));
   const configurationsOf = grouped(rows.configurations, ({ variantId }) => variantId);
   const pointsOf = grouped(rows.points, ({ resultId }) => resultId);
-  const results = rows.results.map((row) => resultInput(row, pointsOf.get(row.id) ?? []));
-  const considered = consideredResults(results, standingAdoptions(rows.adoptions, rows.results), evidence);
+  const judgementOf = new Map(rows.judgements.map((row) => [row.resultId, row]));
+  const results = rows.results.map((row) =>
+    judgedResult(resultInput(row, pointsOf.get(row.id) ?? []), judgementInput(judgementOf.get(row.id))),
+  );
+  const decisions = decisionsOf(rows);
+  const considered = consideredResults(results, decisions, evidence);
+  const variants = rows.variants.flatMap((variant) => {
+    const area = areaOf.get(variant.id);
+    return area ? [variantInput(variant, area, configurationsOf.get(variant.id)?.[0])] : [];
+  });
   const models = [...new Set(considered.flatMap(({ modelId }) => modelId ?? []))].sort();
   return {
     programme: {
@@ -213,10 +222,7 @@ export function rankingInputs(
     },
     facilities: rows.facilities.map(facilityInput),
     models: models.map((id) => ({ id, name: id })),
-    variants: rows.variants.flatMap((variant) => {
-      const area = areaOf.get(variant.id);
-      return area ? [variantInput(variant, area, configurationsOf.get(variant.id)?.[0])] : [];
-    }),
+    variants: evidence === 'adopted' ? ruledVariants(variants, decisions, evidence) : variants,
     results: considered,
   };
 }

@@ -9,7 +9,9 @@ export function withoutRawEvidence(view: RankingView): RankingView {
     ...view,
     stayedOut: view.stayedOut.map((exclusion) => ({
       ...exclusion,
-      rules: exclusion.rules.map((rule) => ({ ...rule, detail: null })),
+      rules: exclusion.rules.map((rule) =>
+        rule.rule.startsWith('refused:') ? { ...rule, detail: null } : rule,
+      ),
     })),
   };
 }

@@ -1,11 +1,19 @@
 import { and, asc, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import { unionAll, type AnyPgColumn } from 'drizzle-orm/pg-core';
+import type { ReynoldsChoice } from '#shared/contracts/judgements';
+import type { EvidenceRule } from '#shared/core/ranking/ranking-input';
 import type { Tx } from '../../db/pools';
 import { cycles, referenceCycles } from '../../db/tables/cycles';
 import { facilities, testSessions } from '../../db/tables/facilities';
 import { memberships } from '../../db/tables/organisations';
 import { milestones, programmes } from '../../db/tables/programmes';
-import { adoptions, resultPoints, results, resultWithdrawals } from '../../db/tables/results';
+import {
+  adoptions,
+  resultJudgements,
+  resultPoints,
+  results,
+  resultWithdrawals,
+} from '../../db/tables/results';
 import { configurations, frontalAreas, variants } from '../../db/tables/variants';
 
 export type ProgrammeRow = typeof programmes.$inferSelect;
@@ -18,8 +26,19 @@ export type ResultRow = typeof results.$inferSelect & { readonly sessionName: st
 export type PointRow = typeof resultPoints.$inferSelect;
 
 export interface AdoptionRow {
+  readonly id: string;
   readonly variantId: string;
-  readonly resultId: string | null;
+  readonly resultIds: readonly string[];
+  readonly rule: EvidenceRule;
+  readonly at: Date;
+  readonly by: string;
+}
+
+export interface JudgementRow {
+  readonly resultId: string;
+  readonly reynolds: ReynoldsChoice;
+  readonly includedReason: string | null;
+  readonly setAsideReason: string | null;
   readonly at: Date;
   readonly by: string;
 }
@@ -92,12 +111,15 @@ export async function listPoints(tx: Tx, programmeId: string): Promise<readonly 
   return rows.map(({ point }) => point);
 }
 
-/** The newest word on each variant's evidence; without a result it releases what stood before. */
+/** The newest word on each variant's evidence; without results it releases what stood before. */
 export async function currentAdoptions(tx: Tx, programmeId: string): Promise<readonly AdoptionRow[]> {
   return tx
     .selectDistinctOn([adoptions.variantId], {
+      id: adoptions.id,
       variantId: adoptions.variantId,
-      resultId: adoptions.resultId,
+      resultIds: sql<string[]>`array(select ar.result_id::text from adoption_results ar
+        join results r on r.id = ar.result_id where ar.adoption_id = ${adoptions.id} order by r.entry_sequence)`,
+      rule: adoptions.evidence,
       at: adoptions.adoptedAt,
       by: memberships.displayName,
     })
@@ -106,6 +128,24 @@ export async function currentAdoptions(tx: Tx, programmeId: string): Promise<rea
     .innerJoin(memberships, eq(memberships.userId, adoptions.adoptedBy))
     .where(eq(variants.programmeId, programmeId))
     .orderBy(adoptions.variantId, desc(adoptions.adoptedAt), desc(adoptions.id));
+}
+
+/** What is held of each result of a programme: the newest judgement; those that nobody judged are missing. */
+export async function currentJudgements(tx: Tx, programmeId: string): Promise<readonly JudgementRow[]> {
+  return tx
+    .selectDistinctOn([resultJudgements.resultId], {
+      resultId: resultJudgements.resultId,
+      reynolds: resultJudgements.reynolds,
+      includedReason: resultJudgements.includedReason,
+      setAsideReason: resultJudgements.setAsideReason,
+      at: resultJudgements.judgedAt,
+      by: memberships.displayName,
+    })
+    .from(resultJudgements)
+    .innerJoin(results, eq(results.id, resultJudgements.resultId))
+    .innerJoin(memberships, eq(memberships.userId, resultJudgements.judgedBy))
+    .where(eq(results.programmeId, programmeId))
+    .orderBy(resultJudgements.resultId, desc(resultJudgements.judgedAt));
 }
 
 export async function facilitiesById(tx: Tx, ids: readonly string[]): Promise<readonly FacilityRow[]> {

@@ -4,7 +4,7 @@ import { readRankingContext, readRankingInputs, readRankingView } from './rankin
 
 export const rankingsRoutes = [
   route(rankingInputsRead, ({ params, query }, context) =>
-    readRankingInputs(context, params.programmeId, query, query.evidence ?? 'adopted'),
+    readRankingInputs(context, params.programmeId, query.area, query.evidence ?? 'adopted'),
   ),
   route(rankingContextRead, ({ params, query }, context) =>
     readRankingContext(context, params.programmeId, query),

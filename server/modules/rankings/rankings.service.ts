@@ -1,12 +1,8 @@
 import type { RankingQuery } from '#shared/contracts/rankings';
-import {
-  choicesOfQuery,
-  type AreaChoice,
-  type EvidenceBasis,
-  type RankingChoices,
-} from '#shared/core/ranking/ranking-choices';
+import { choicesOfQuery, type AreaChoice, type RankingChoices } from '#shared/core/ranking/ranking-choices';
 import type { RankingContext } from '#shared/core/ranking/ranking-context';
 import type { RankingInput } from '#shared/core/ranking/ranking-input';
+import type { ConsideredEvidence } from '#shared/core/ranking/ranking-view-input';
 import { buildRankingView } from '#shared/core/ranking/ranking-view-build';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
 import type { MemberContext } from '../../http/context';
@@ -17,11 +13,11 @@ import {
   contextVariants,
   rankingInputs,
   sessionsOf,
-  standingAdoptions,
   type CommonArea,
   type ProgrammeRows,
   type RankingRows,
 } from './ranking-inputs';
+import { decisionsOf } from './ranking-decisions';
 import * as repository from './rankings.repository';
 import { withoutRawEvidence } from './rankings.policy';
 
@@ -45,6 +41,7 @@ async function programmeRows(tx: Tx, programmeId: string): Promise<ProgrammeRows
     results,
     facilityVersions: await currentVersions(tx, facilityIdsOf({ programme, results })),
     adoptions: await repository.currentAdoptions(tx, programmeId),
+    judgements: await repository.currentJudgements(tx, programmeId),
   };
 }
 
@@ -75,11 +72,33 @@ function commonArea(rows: ProgrammeRows, asked: AreaChoice): CommonArea {
 export async function readRankingInputs(
   { tx }: MemberContext,
   programmeId: string,
-  query: RankingQuery,
-  evidence: EvidenceBasis,
+  area: RankingQuery['area'],
+  evidence: ConsideredEvidence,
 ): Promise<RankingInput> {
   const rows = await rankingRows(tx, programmeId);
-  return rankingInputs(rows, commonArea(rows, choicesOf(query).area).areaM2, evidence);
+  return rankingInputs(rows, commonArea(rows, choicesOf({ area }).area).areaM2, evidence);
+}
+
+/** All results of a programme, judged, and what was decided about them: what judgements and evaluations are made from. */
+export interface EvidenceDocument {
+  readonly inputs: RankingInput;
+  readonly context: Pick<RankingContext, 'adoptions' | 'setAside' | 'included' | 'facilityVersions'>;
+}
+
+/**
+ * Evidence stands without a common area: no drag area depends on one. Where none is chosen yet, the first variant's own
+ * takes its place in the document.
+ */
+export async function readEvidenceDocument(
+  { tx }: Pick<MemberContext, 'tx'>,
+  programmeId: string,
+): Promise<EvidenceDocument> {
+  const rows = await rankingRows(tx, programmeId);
+  const areaM2 = commonAreaOf(rows, { kind: 'programme' })?.areaM2 ?? rows.areas[0]?.areaM2 ?? 1;
+  return {
+    inputs: rankingInputs(rows, areaM2, 'all'),
+    context: { ...decisionsOf(rows), facilityVersions: rows.facilityVersions },
+  };
 }
 
 /** What stands beside the inputs. The ranking itself needs no milestones: they are for the screen. */
@@ -99,7 +118,8 @@ function contextOf(
       milestones,
     },
     variants: contextVariants(rows),
-    adoptions: standingAdoptions(rows.adoptions, rows.results),
+    ...decisionsOf(rows),
+    policyNumber: null,
     sessions: sessionsOf(rows.results),
     facilityVersions: rows.facilityVersions,
     cycles,
@@ -136,7 +156,7 @@ export async function readRankingView(
   const choices = choicesOf(query);
   const rows = await rankingRows(tx, programmeId);
   const area = commonArea(rows, choices.area);
-  const inputs = rankingInputs(rows, area.areaM2, 'newest');
+  const inputs = rankingInputs(rows, area.areaM2, 'all');
   const context = contextOf(rows, area, await repository.listCycles(tx, choices.cycle));
   return withoutRawEvidence(buildRankingView(inputs, context, choices));
 }

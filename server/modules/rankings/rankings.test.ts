@@ -3,7 +3,8 @@ import { facilityCreate } from '#shared/contracts/facilities';
 import { rankingInputSchema } from '#shared/contracts/method/ranking-input';
 import { programmeCreate } from '#shared/contracts/programmes';
 import { rankingContextRead, rankingInputsRead, rankingViewRead } from '#shared/contracts/rankings';
-import { resultAdopt, resultEnter, resultWithdraw } from '#shared/contracts/results';
+import { evidenceAdopt } from '#shared/contracts/adoptions';
+import { resultEnter, resultWithdraw } from '#shared/contracts/results';
 import { variantCreate, variantRetire } from '#shared/contracts/variants';
 import { evaluateRank } from '#shared/core/ranking/rank';
 import { facilityFields, programmeFields, resultFields, variantFields } from '#shared/testing/domain-fields';
@@ -88,9 +89,14 @@ describe('the ranking over HTTP', () => {
       body: { retired: true },
       ifMatch: 1,
     });
-    await aerodynamicist.ok(resultAdopt, {
+    await aerodynamicist.ok(evidenceAdopt, {
       params,
-      body: { variantId: variants.get('Hatch'), resultId: results.get('H1'), comment: 'Cleaner entry' },
+      body: {
+        adoptions: [
+          { variantId: variants.get('Hatch') ?? '', resultIds: [results.get('H1') ?? ''], rule: 'newest' },
+        ],
+        comment: 'Cleaner entry',
+      },
     });
     await aerodynamicist.ok(resultWithdraw, {
       params: { ...params, resultId: results.get('S2') ?? '' },
@@ -165,7 +171,7 @@ describe('the ranking over HTTP', () => {
   it('gives the screen adoptions that stand, configurations, sessions and every cycle with its rows', async () => {
     const context = await aerodynamicist.ok(rankingContextRead, { params });
     expect(context.adoptions).toEqual([
-      expect.objectContaining({ variantId: variants.get('Hatch'), resultId: results.get('H1') }),
+      expect.objectContaining({ variantId: variants.get('Hatch'), resultIds: [results.get('H1')] }),
     ]);
     expect(context.sessions).toEqual([expect.objectContaining({ name: 'Spring' })]);
     expect(context.variants.find(({ name }) => name === 'Sport')?.configurations[0]?.name).toBe('Electric');

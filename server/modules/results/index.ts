@@ -1,7 +1,10 @@
 import type { ServerModule } from '../../http/module';
 import { resultsRoutes } from './results.routes';
 
+export { adoptEvidence } from './adoptions.service';
+export { judgeResults } from './judgements.service';
 export { resultIssues } from './results.policy';
-export { takeEntrySequence } from './results.repository';
+export { findResults, takeEntrySequence } from './results.repository';
+export { checkResults, withdrawResults } from './states.service';
 
 export const resultsModule: ServerModule = { name: 'results', routes: resultsRoutes };

@@ -1,4 +1,4 @@
-import { and, asc, eq, sql, type SQL, type SQLWrapper } from 'drizzle-orm';
+import { and, asc, eq, inArray, sql, type SQL, type SQLWrapper } from 'drizzle-orm';
 import type { Result, ResultFields } from '#shared/contracts/results';
 import type { Work } from '../../http/context';
 import { nextNumbers } from '../../db/counters';
@@ -8,7 +8,10 @@ import { testSessions } from '../../db/tables/facilities';
 import { memberships } from '../../db/tables/organisations';
 import { resultPoints, results } from '../../db/tables/results';
 import { withNulls } from '../../db/without-nulls';
-import { currentAdoptions } from './adoptions.repository';
+import { everAdopted, standingAdoptions } from './adoptions.repository';
+import { judgementsOf } from './judgements.repository';
+import { stateOf } from './result-state';
+import { checksOf } from './states.repository';
 import { withdrawalsOf } from './withdrawals.repository';
 
 /** The series of running numbers that every result takes one of, however it comes in. */
@@ -51,7 +54,10 @@ const POINT_COLUMNS = [
   'sideForce',
 ] as const satisfies readonly (keyof ResultFields['points'][number])[];
 
-type RawValues = Omit<Result, 'points' | 'session' | 'enteredAt' | 'enteredBy' | 'adopted' | 'withdrawn'>;
+type RawValues = Omit<
+  Result,
+  'points' | 'session' | 'enteredAt' | 'enteredBy' | 'state' | 'adopted' | 'withdrawn' | 'judgement'
+>;
 
 /** Everything of a result's row that goes out as it stands. */
 const RAW = {
@@ -70,7 +76,7 @@ function asOneValue<T>(columns: Readonly<Record<string, SQLWrapper>>): SQL<T> {
   return sql<T>`jsonb_strip_nulls(jsonb_build_object(${sql.join(fields, sql`, `)}))`;
 }
 
-/** Results with their points, withdrawals and adoptions: four statements, however many results there are. */
+/** Results with their points and all that was decided about them: a few statements, however many results there are. */
 async function select(tx: Tx, where: SQL | undefined): Promise<readonly Result[]> {
   const rows = await tx
     .select({
@@ -86,21 +92,41 @@ async function select(tx: Tx, where: SQL | undefined): Promise<readonly Result[]
     .orderBy(asc(results.entrySequence));
   if (rows.length === 0) return [];
   const points = await pointsOf(tx, where);
-  const withdrawals = await withdrawalsOf(tx, where);
-  const adopted = new Set(
-    [...(await currentAdoptions(tx, [...new Set(rows.map(({ raw }) => raw.variantId))])).values()].map(
-      (adoption) => adoption.resultId,
-    ),
-  );
+  const decided = await decisionsOf(tx, where, [...new Set(rows.map(({ raw }) => raw.variantId))]);
   return rows.map(({ raw, enteredAt, session, enteredBy }) =>
     Object.assign(raw, session === null ? undefined : { session }, {
       points: [...(points.get(raw.id) ?? [])],
       enteredAt: enteredAt.toISOString(),
       enteredBy,
-      adopted: adopted.has(raw.id),
-      withdrawn: withdrawals.get(raw.id),
+      ...decided(raw),
     }),
   );
+}
+
+type Decisions = Pick<Result, 'state' | 'adopted' | 'withdrawn' | 'judgement'>;
+
+async function decisionsOf(
+  tx: Tx,
+  where: SQL | undefined,
+  variantIds: readonly string[],
+): Promise<(result: Pick<Result, 'id' | 'variantId'>) => Decisions> {
+  const withdrawals = await withdrawalsOf(tx, where);
+  const checks = await checksOf(tx, where);
+  const judgements = await judgementsOf(tx, where);
+  const ever = await everAdopted(tx, where);
+  const standing = await standingAdoptions(tx, variantIds);
+  return ({ id, variantId }) => {
+    const withdrawn = withdrawals.get(id);
+    const adopted = standing.get(variantId)?.resultIds.includes(id) ?? false;
+    const state = stateOf({
+      withdrawn: withdrawn !== undefined,
+      checked: checks.get(id)?.state === 'checked',
+      adopted,
+      wasAdopted: ever.has(id),
+      othersAdopted: standing.has(variantId) && !adopted,
+    });
+    return { state, adopted, withdrawn, judgement: judgements.get(id) };
+  };
 }
 
 /**
@@ -129,6 +155,16 @@ export async function listResults(tx: Tx, programmeId: string): Promise<readonly
 export async function findResult(tx: Tx, programmeId: string, id: string): Promise<Result | undefined> {
   const [result] = await select(tx, and(eq(results.programmeId, programmeId), eq(results.id, id)));
   return result;
+}
+
+/** Those of the results named that there are in the programme. */
+export async function findResults(
+  tx: Tx,
+  programmeId: string,
+  ids: readonly string[],
+): Promise<readonly Result[]> {
+  if (ids.length === 0) return [];
+  return select(tx, and(eq(results.programmeId, programmeId), inArray(results.id, [...ids])));
 }
 
 /** The standing result of this name; a withdrawn one gives its name free for the corrected entry. */

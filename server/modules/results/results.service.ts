@@ -9,11 +9,9 @@ import { hasAttachment } from '../attachments';
 import { differences, recordAudit } from '../audit';
 import { findFacility } from '../facilities';
 import { programmeExists } from '../programmes';
-import { findVariant, lockVariant } from '../variants';
-import { insertAdoption } from './adoptions.repository';
+import { findVariant } from '../variants';
 import { resultIssues } from './results.policy';
 import { findResult, insertResult, listResults, resultOfName, takeEntrySequence } from './results.repository';
-import { insertWithdrawal } from './withdrawals.repository';
 
 export async function allResults(work: Work, programmeId: string): Promise<readonly Result[]> {
   if (!(await programmeExists(work.tx, programmeId))) fail('not-found');
@@ -80,46 +78,4 @@ async function issuesOf(work: Work, programmeId: string, fields: ResultFields): 
 function newestArea(variant: Variant): number {
   const [newest] = variant.frontalAreas;
   return newest?.areaM2 ?? 0;
-}
-
-/** A withdrawn result stays readable and counts for nothing. Where it was adopted, the newest one counts again. */
-export async function withdrawResult(
-  work: Work,
-  programmeId: string,
-  id: string,
-  reason: string,
-): Promise<Result> {
-  const known = demandFound(await findResult(work.tx, programmeId, id));
-  // Adoptions and withdrawals of one variant wait for each other here.
-  await lockVariant(work.tx, programmeId, known.variantId);
-  const result = demandFound(await findResult(work.tx, programmeId, id));
-  if (result.withdrawn !== undefined) {
-    fail('wrong-state', { detail: `${result.name} was withdrawn already, by ${result.withdrawn.by}.` });
-  }
-
-  await insertWithdrawal(work, id, reason);
-  await recordAudit(work, {
-    action: 'result.withdrawn',
-    entityKind: 'result',
-    entityId: id,
-    summary: [
-      { field: 'reason', after: reason },
-      { field: 'adopted', before: result.adopted, after: false },
-    ],
-  });
-  if (result.adopted) await releaseWithdrawn(work, result, reason);
-  return demandFound(await findResult(work.tx, programmeId, id));
-}
-
-async function releaseWithdrawn(work: Work, result: Result, reason: string): Promise<void> {
-  await insertAdoption(work, result.variantId, undefined, `${result.name} was withdrawn: ${reason}`);
-  await recordAudit(work, {
-    action: 'adoption.released',
-    entityKind: 'variant',
-    entityId: result.variantId,
-    summary: [
-      { field: 'resultId', before: result.id },
-      { field: 'because', after: 'The adopted result was withdrawn.' },
-    ],
-  });
 }

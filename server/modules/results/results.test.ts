@@ -69,6 +69,7 @@ describe('results over HTTP', () => {
       entrySequence: expect.any(Number),
       enteredAt: expect.any(String),
       enteredBy: 'aerodynamicist of First Motors',
+      state: 'entered',
       adopted: false,
     });
     const params = { programmeId, resultId: entered.id };

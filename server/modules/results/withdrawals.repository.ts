@@ -24,6 +24,12 @@ export async function withdrawalsOf(
   return new Map(rows.map(({ resultId, at, ...rest }) => [resultId, { ...rest, at: at.toISOString() }]));
 }
 
-export async function insertWithdrawal(work: Work, resultId: string, reason: string): Promise<void> {
-  await work.tx.insert(resultWithdrawals).values({ resultId, reason, withdrawnBy: work.userId });
+export async function insertWithdrawals(
+  work: Work,
+  resultIds: readonly string[],
+  reason: string,
+): Promise<void> {
+  await work.tx
+    .insert(resultWithdrawals)
+    .values(resultIds.map((resultId) => ({ resultId, reason, withdrawnBy: work.userId })));
 }

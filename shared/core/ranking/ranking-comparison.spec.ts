@@ -74,7 +74,7 @@ describe('two rankings compared', () => {
     const pair = probabilities.find(({ lowerId, higherId }) => `${lowerId} ${higherId}` === 'hatch liftback');
     const probabilityIn = ({ inputs, context }: RankingScenario): number => {
       const reduced = reduceStage(inputs, inputs.programme.referenceAir);
-      const evidence = evidenceStage(inputs.variants, reduced, context.adoptions, 'adopted', 'zero-yaw');
+      const evidence = evidenceStage(inputs.variants, reduced, context, 'adopted', 'zero-yaw');
       const { set } = dragStage(evidence);
       return probabilityLowerOf(set, set.ids.indexOf('hatch'), set.ids.indexOf('liftback'));
     };

@@ -1,4 +1,5 @@
 import type { RoadLoadReference } from '../road-load/road-load';
+import type { EvidenceRule } from './ranking-input';
 
 /** Which area the programme shows coefficients on. */
 export type CommonAreaPolicy =
@@ -31,10 +32,22 @@ export interface ContextVariant {
   readonly configurations: readonly ContextConfiguration[];
 }
 
+/** What a variant rests on; a result of it that was withdrawn since is not named. */
 export interface ContextAdoption {
+  readonly id: string;
   readonly variantId: string;
-  readonly resultId: string;
+  /** At least one. */
+  readonly resultIds: readonly string[];
+  readonly rule: EvidenceRule;
   /** When and by whom; a moment with its offset. */
+  readonly at: string;
+  readonly by: string;
+}
+
+/** A reason that somebody wrote down for a result: why it counts though it is not comparable, or why it does not. */
+export interface ContextReason {
+  readonly resultId: string;
+  readonly reason: string;
   readonly at: string;
   readonly by: string;
 }
@@ -58,6 +71,12 @@ export interface RankingContext {
   };
   readonly variants: readonly ContextVariant[];
   readonly adoptions: readonly ContextAdoption[];
+  /** Results that are kept out of every evidence by judgement. */
+  readonly setAside: readonly ContextReason[];
+  /** Results that are not comparable and count with a written reason. */
+  readonly included: readonly ContextReason[];
+  /** Number of the organisation's policies in force; null where nobody has changed them yet. */
+  readonly policyNumber: number | null;
   /** Entries in facilities, by the id that the inputs hold. */
   readonly sessions: readonly { readonly id: string; readonly name: string }[];
   /** Which version of each facility's corrections and uncertainties the inputs hold. */

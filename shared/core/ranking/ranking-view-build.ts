@@ -9,7 +9,7 @@ import type { RankingChoices, RankingOrder } from './ranking-choices';
 import type { ContextCycle, RankingContext } from './ranking-context';
 import type { RankingInput } from './ranking-input';
 import type { IgnoredChoice, RankingView, ViewGroup, ViewOffers, ViewRow } from './ranking-view';
-import { exclusionLimits, viewExclusion } from './ranking-view-exclusions';
+import { exclusionLimits, viewExclusion, withSetAside } from './ranking-view-exclusions';
 import {
   chosenAir,
   chosenArea,
@@ -188,15 +188,18 @@ function ignoredChoices(parts: ViewParts): readonly IgnoredChoice[] {
   return ignored;
 }
 
-function stayedOut({ names, inputs, reduced, choices }: ViewParts): RankingView['stayedOut'] {
+function stayedOut({ names, inputs, reduced, choices, context }: ViewParts): RankingView['stayedOut'] {
   const sources = {
     names,
     referenceCondition: inputs.programme.referenceCondition,
     limits: exclusionLimits(inputs.programme.policies),
     reduced: new Map(reduced.reductions.map(({ output }) => [output.resultId, output])),
     refusals: new Map(reduced.refused.map(({ resultId, detail }) => [resultId, detail])),
+    setAside: new Map(context.setAside.map(({ resultId, reason }) => [resultId, reason])),
   };
-  return excludedResults(reduced, choices.basis).map((excluded) => viewExclusion(sources, excluded));
+  return withSetAside(excludedResults(reduced, choices.basis), inputs.results, context.setAside).map(
+    (excluded) => viewExclusion(sources, excluded),
+  );
 }
 
 /** The view from its parts: what remains to be done once every stage has answered. */
@@ -252,7 +255,7 @@ export function buildRankingView(
   const configured = configuredVariants(inputs.variants, context.variants, choices.configuration);
   const reduced = reduceStage(inputs, air);
   const { evidence: evidenceBasis, basis } = choices;
-  const evidence = evidenceStage(inputs.variants, reduced, context.adoptions, evidenceBasis, basis);
+  const evidence = evidenceStage(inputs.variants, reduced, context, evidenceBasis, basis);
   const drag = dragStage(evidence);
   const offer = chosenCycle(context.cycles, choices.cycle);
   const prepared = cycleStage(offer);

@@ -1,5 +1,7 @@
 import { DEFAULT_POLICIES } from '../constants';
 import { differingItems } from '../similarity/condition';
+import { byCodeUnits } from '../text-order';
+import type { ContextReason } from './ranking-context';
 import type { ConditionInput, PoliciesInput, ResultInput } from './ranking-input';
 import type { ExcludedResult, ReducedResult } from './ranking-output';
 import type { Remedy, ViewExclusion, ViewExclusionRule } from './ranking-view';
@@ -32,7 +34,29 @@ export function differences(
   });
 }
 
+/** The rule of a result that a person keeps out; it stands before the method's own. */
+const SET_ASIDE = 'set-aside';
+
+/** What stays out by the method's rules and by judgement, by result id. */
+export function withSetAside(
+  excluded: readonly ExcludedResult[],
+  results: readonly ResultInput[],
+  setAside: readonly ContextReason[],
+): readonly ExcludedResult[] {
+  if (setAside.length === 0) return excluded;
+  const known = new Map(results.map((result) => [result.id, result]));
+  const all = new Map(excluded.map((each) => [each.resultId, each]));
+  for (const { resultId } of setAside) {
+    const result = known.get(resultId);
+    if (result === undefined) continue;
+    const rules = [SET_ASIDE, ...(all.get(resultId)?.rules ?? [])];
+    all.set(resultId, { resultId, variantId: result.variantId, rules });
+  }
+  return [...all.values()].sort((a, b) => byCodeUnits(a.resultId, b.resultId));
+}
+
 function remedyOf(rule: string): Remedy {
+  if (rule === SET_ASIDE) return 'bring-back';
   if (rule === 'not-comparable') return 'include-with-reason';
   if (rule === 'mach' || rule === 'blockage') return 'change-policy';
   return rule.startsWith('no-wind-average') ? 'measure-yaw' : 'enter-anew';
@@ -46,6 +70,8 @@ export interface ExclusionSources {
   readonly reduced: ReadonlyMap<string, ReducedResult>;
   /** The method's own words, by result, of those that it refused. */
   readonly refusals: ReadonlyMap<string, string>;
+  /** Reasons of those that are set aside. */
+  readonly setAside: ReadonlyMap<string, string>;
 }
 
 function blockageLimit(sources: ExclusionSources, result: ResultInput | undefined): number {
@@ -67,6 +93,7 @@ function viewRule(
     items: [],
     detail: result && rule.startsWith('refused:') ? (sources.refusals.get(result.id) ?? null) : null,
   };
+  if (rule === SET_ASIDE) return { ...plain, detail: sources.setAside.get(result?.id ?? '') ?? null };
   if (rule === 'mach') return { ...plain, value: reduced?.mach ?? null, limit: sources.limits.machExcluded };
   if (rule === 'blockage') {
     return { ...plain, value: reduced?.blockageRatio ?? null, limit: blockageLimit(sources, result) };
@@ -87,7 +114,7 @@ export function viewExclusion(sources: ExclusionSources, excluded: ExcludedResul
     variantName: variantName(names, excluded.variantId),
     facilityName: result ? facilityName(names, result.facilityId) : '',
     testDate: result?.testDate ?? '',
-    adopted: names.adopted.get(excluded.variantId) === excluded.resultId,
+    adopted: names.adopted.has(excluded.resultId),
     rules: excluded.rules.map((rule) => viewRule(sources, rule, result)),
   };
 }

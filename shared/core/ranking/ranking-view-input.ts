@@ -2,7 +2,12 @@ import { airOf } from '../air/air';
 import type { AirInput } from '../air/air-input';
 import { Refused } from '../refusal';
 import type { AirChoice, AreaChoice, EvidenceBasis } from './ranking-choices';
-import type { ContextAdoption, ContextConfiguration, ContextVariant } from './ranking-context';
+import type {
+  ContextAdoption,
+  ContextConfiguration,
+  ContextVariant,
+  RankingContext,
+} from './ranking-context';
 import type { ResultInput, VariantInput } from './ranking-input';
 
 /** The common area of a choice, and whose it is. Null where the variant meant is not in the programme (any more). */
@@ -71,16 +76,49 @@ export function hasRoadLoad(variant: VariantInput): boolean {
   return variant.massKg != null && (variant.rollingResistance != null || variant.roadLoadReference != null);
 }
 
+/** What each variant rests on by adoption, those set aside left out: with none left, its newest result counts again. */
+export function standingAdoptions({
+  adoptions,
+  setAside,
+}: Pick<RankingContext, 'adoptions' | 'setAside'>): ReadonlyMap<string, ContextAdoption> {
+  const aside = new Set(setAside.map(({ resultId }) => resultId));
+  return new Map(
+    adoptions.flatMap((adoption): readonly (readonly [string, ContextAdoption])[] => {
+      const resultIds = adoption.resultIds.filter((id) => !aside.has(id));
+      return resultIds.length === 0 ? [] : [[adoption.variantId, { ...adoption, resultIds }]];
+    }),
+  );
+}
+
+/** Which results of a programme are handed on: `all` keeps those set aside, for trying what bringing them back does. */
+export type ConsideredEvidence = EvidenceBasis | 'all';
+
 /**
- * The results that may be evidence: all of them, or, on the adopted basis, of a variant with an adoption the adopted
- * one alone.
+ * The results that may be evidence: all that are not set aside, or, on the adopted basis, of a variant with an adoption
+ * the adopted ones alone.
  */
 export function consideredResults(
   results: readonly ResultInput[],
-  adoptions: readonly ContextAdoption[],
-  evidence: EvidenceBasis,
+  context: Pick<RankingContext, 'adoptions' | 'setAside'>,
+  evidence: ConsideredEvidence,
 ): readonly ResultInput[] {
-  if (evidence === 'newest') return results;
-  const adoptedOf = new Map(adoptions.map(({ variantId, resultId }) => [variantId, resultId]));
-  return results.filter(({ id, variantId }) => (adoptedOf.get(variantId) ?? id) === id);
+  if (evidence === 'all') return results;
+  const aside = new Set(context.setAside.map(({ resultId }) => resultId));
+  const counting = results.filter(({ id }) => !aside.has(id));
+  if (evidence === 'newest') return counting;
+  const standing = standingAdoptions(context);
+  return counting.filter(({ id, variantId }) => standing.get(variantId)?.resultIds.includes(id) ?? true);
+}
+
+/** Variants with the rule that their adopted evidence is formed by; on the newest basis every one has the newest. */
+export function ruledVariants(
+  variants: readonly VariantInput[],
+  context: Pick<RankingContext, 'adoptions' | 'setAside'>,
+  evidence: EvidenceBasis,
+): readonly VariantInput[] {
+  const standing = standingAdoptions(context);
+  return variants.map((variant) => ({
+    ...variant,
+    evidence: (evidence === 'adopted' ? standing.get(variant.id)?.rule : null) ?? 'newest',
+  }));
 }

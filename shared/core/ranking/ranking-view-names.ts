@@ -10,8 +10,8 @@ export interface RankingNames {
   readonly results: ReadonlyMap<string, ResultInput>;
   readonly models: ReadonlyMap<string, string>;
   readonly sessions: ReadonlyMap<string, string>;
-  /** Adopted result of each variant that has one. */
-  readonly adopted: ReadonlyMap<string, string>;
+  /** Results that some variant rests on by adoption. */
+  readonly adopted: ReadonlySet<string>;
 }
 
 const byId = <T extends { readonly id: string }>(items: readonly T[]): ReadonlyMap<string, T> =>
@@ -24,7 +24,7 @@ export function namesIn(inputs: RankingInput, context: RankingContext): RankingN
     results: byId(inputs.results),
     models: new Map((inputs.models ?? []).map(({ id, name }) => [id, name ?? id])),
     sessions: new Map(context.sessions.map(({ id, name }) => [id, name])),
-    adopted: new Map(context.adoptions.map(({ variantId, resultId }) => [variantId, resultId])),
+    adopted: new Set(context.adoptions.flatMap(({ resultIds }) => resultIds)),
   };
 }
 
@@ -70,6 +70,7 @@ export function viewEvidence(names: RankingNames, resultId: string): ViewEvidenc
     facilityName: facility?.name ?? result?.facilityId ?? '',
     facilityKind: facility?.kind ?? 'closed',
     scale: result?.scale ?? 1,
-    adopted: result !== undefined && names.adopted.get(result.variantId) === resultId,
+    adopted: names.adopted.has(resultId),
+    includedReason: result?.includedWithReason ?? null,
   };
 }

@@ -1,6 +1,7 @@
 import type { AirInput } from '../air/air-input';
 import { prepareCycle, type PreparedCycle } from '../cycles/cycle';
 import { reduceResults, type ReducedSet } from '../reduction/reduce';
+import type { Reduction } from '../reduction/reduction';
 import type { KeyedFigure } from '../uncertainty/budget';
 import { inseparableGroups, neighbourProbabilities, type Comparables } from './comparables';
 import {
@@ -13,10 +14,10 @@ import {
 import { energyComparables, variantEnergies } from './energy-ranking';
 import { pickEvidence, type PickedEvidence, type VariantEvidence } from './evidence';
 import type { EvidenceBasis } from './ranking-choices';
-import type { ContextAdoption, ContextCycle } from './ranking-context';
+import type { ContextCycle, RankingContext } from './ranking-context';
 import type { Basis, RankingInput, VariantInput } from './ranking-input';
 import type { RankedVariant, VariantEnergy } from './ranking-output';
-import { hasRoadLoad, type ConfiguredVariant } from './ranking-view-input';
+import { hasRoadLoad, ruledVariants, standingAdoptions, type ConfiguredVariant } from './ranking-view-input';
 
 /**
  * The ranking in stages, each depending on as few choices as it can, so that a screen that remembers each stage's last
@@ -28,7 +29,7 @@ export function reduceStage(inputs: RankingInput, referenceAir: AirInput): Reduc
   return reduceResults({ ...inputs, programme: { ...inputs.programme, referenceAir } });
 }
 
-/** Adoptions, evidence and basis: what each variant is ranked by. */
+/** Adoptions, what is set aside, evidence and basis: what each variant is ranked by. */
 export interface EvidenceStage extends PickedEvidence {
   /** A usable result that is newer than the adopted one in use, by variant. */
   readonly newer: ReadonlyMap<string, string>;
@@ -37,17 +38,24 @@ export interface EvidenceStage extends PickedEvidence {
 export function evidenceStage(
   variants: readonly VariantInput[],
   reduced: ReducedSet,
-  adoptions: readonly ContextAdoption[],
+  context: Pick<RankingContext, 'adoptions' | 'setAside'>,
   evidence: EvidenceBasis,
   basis: Basis,
 ): EvidenceStage {
-  const newest = pickEvidence(variants, reduced, basis);
+  const aside = new Set(context.setAside.map(({ resultId }) => resultId));
+  const counting =
+    aside.size === 0
+      ? reduced.reductions
+      : reduced.reductions.filter(({ output }) => !aside.has(output.resultId));
+  const pick = (basisOfEvidence: EvidenceBasis, reductions: readonly Reduction[]): PickedEvidence =>
+    pickEvidence(ruledVariants(variants, context, basisOfEvidence), { ...reduced, reductions }, basis);
+  const newest = pick('newest', counting);
   if (evidence === 'newest') return { ...newest, newer: new Map() };
-  const adoptedOf = new Map(adoptions.map(({ variantId, resultId }) => [variantId, resultId]));
-  const reductions = reduced.reductions.filter(
-    ({ output }) => (adoptedOf.get(output.variantId) ?? output.resultId) === output.resultId,
+  const standing = standingAdoptions(context);
+  const adopted = counting.filter(
+    ({ output }) => standing.get(output.variantId)?.resultIds.includes(output.resultId) ?? true,
   );
-  const picked = pickEvidence(variants, { ...reduced, reductions }, basis);
+  const picked = pick('adopted', adopted);
   return { ...picked, newer: newerThan(picked, newest) };
 }
 

@@ -111,7 +111,16 @@ describe('the ranking as it is shown', () => {
       inputs: { ...scenario.inputs, results: [...scenario.inputs.results, newer] },
       context: {
         ...scenario.context,
-        adoptions: [{ variantId: 'hatch', resultId: 'r-hatch', at: '2026-11-21T08:00:00Z', by: 'Ines' }],
+        adoptions: [
+          {
+            id: 'a-1',
+            variantId: 'hatch',
+            resultIds: ['r-hatch'],
+            rule: 'newest' as const,
+            at: '2026-11-21T08:00:00Z',
+            by: 'Ines',
+          },
+        ],
       },
     };
     const hatch = (evidence: 'adopted' | 'newest') =>

@@ -41,6 +41,8 @@ export interface ViewEvidence {
   readonly facilityKind: FacilityKind;
   readonly scale: number;
   readonly adopted: boolean;
+  /** Why it counts though it is not comparable; null where it is. */
+  readonly includedReason: string | null;
 }
 
 /** A step of the reduction by its name and its result alone: what may be shown without the raw evidence. */
@@ -85,8 +87,9 @@ export interface ViewRow {
   readonly evidence: readonly ViewEvidence[];
   /** A usable result that is newer than the adopted one in use. */
   readonly newer: ViewEvidence | null;
-  readonly reynolds: number;
-  readonly mach: number;
+  /** Null: the result states no air or speed. */
+  readonly reynolds: number | null;
+  readonly mach: number | null;
   readonly blockageRatio: number | null;
   readonly cautions: readonly ReductionCaution[];
   readonly steps: readonly ViewStep[];
@@ -108,10 +111,10 @@ export interface ViewGroup {
 }
 
 /** Who can do something about an exclusion, and how. */
-export type Remedy = 'include-with-reason' | 'change-policy' | 'enter-anew' | 'measure-yaw';
+export type Remedy = 'include-with-reason' | 'change-policy' | 'enter-anew' | 'measure-yaw' | 'bring-back';
 
 export interface ViewExclusionRule {
-  /** `mach`, `blockage`, `not-comparable`, `no-wind-average:<code>` or `refused:<code>`. */
+  /** `set-aside`, `mach`, `blockage`, `not-comparable`, `no-wind-average:<code>` or `refused:<code>`. */
   readonly rule: string;
   readonly remedy: Remedy;
   /** What was found and what the limit is, where the rule has one. */
@@ -123,7 +126,7 @@ export interface ViewExclusionRule {
     readonly reference: string | number | boolean;
     readonly stated: string | number | boolean | null;
   }[];
-  /** The method's own words, of a refusal. */
+  /** The method's own words, of a refusal; a person's, of a result that is set aside. */
   readonly detail: string | null;
 }
 

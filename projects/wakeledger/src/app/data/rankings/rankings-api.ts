@@ -26,7 +26,7 @@ export class RankingsApi {
     const params = { programmeId };
     const own = area === undefined ? {} : { area };
     return forkJoin({
-      inputs: this.api.call(rankingInputsRead, { params, query: { evidence: 'newest', ...own } }),
+      inputs: this.api.call(rankingInputsRead, { params, query: { evidence: 'all', ...own } }),
       context: this.api.call(rankingContextRead, { params, query: own }),
     });
   }

@@ -82,7 +82,7 @@ export const selectEvidence = createSelector(
   selectBasis,
   (inputs, context, reduced, evidence, basis) =>
     inputs && context && reduced && !(reduced instanceof Refused)
-      ? evidenceStage(inputs.variants, reduced, context.adoptions, evidence, basis)
+      ? evidenceStage(inputs.variants, reduced, context, evidence, basis)
       : null,
 );
 

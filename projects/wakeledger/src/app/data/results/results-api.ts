@@ -2,12 +2,10 @@ import { Injectable, inject } from '@angular/core';
 import { type Observable, catchError, forkJoin, map, of } from 'rxjs';
 import { type Programme, programmeRead } from '#shared/contracts/programmes';
 import { rankingInputsRead } from '#shared/contracts/rankings';
+import { type Adoption, type AdoptionOrder, adoptionList, evidenceAdopt } from '#shared/contracts/adoptions';
 import {
-  type Adoption,
   type Result,
   type ResultFields,
-  adoptionList,
-  resultAdopt,
   resultEnter,
   resultList,
   resultWithdraw,
@@ -16,12 +14,9 @@ import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import { ApiClient } from '../../core/api/api-client';
 import { ApiProblem, asApiProblem } from '../../core/api/api-problem';
 
-/** What a person decides when a result is adopted, or an adoption is released (`resultId` absent). */
-export interface AdoptionOrder {
-  readonly variantId: string;
-  readonly resultId?: string;
+/** What a person decides when evidence is adopted, or an adoption is released (no results). */
+export interface AdoptionDecision extends AdoptionOrder {
   readonly comment: string;
-  readonly expectedCurrentResultId?: string;
 }
 
 export interface EvidenceAnswer {
@@ -43,7 +38,7 @@ export class ResultsApi {
   evidence(programmeId: string): Observable<EvidenceAnswer> {
     const params = { programmeId };
     const inputs = this.api
-      .call(rankingInputsRead, { params, query: { evidence: 'newest' } })
+      .call(rankingInputsRead, { params, query: { evidence: 'all' } })
       .pipe(catchError((error: unknown) => of(asApiProblem(error))));
     return forkJoin({
       programme: this.api.call(programmeRead, { params }),
@@ -63,8 +58,10 @@ export class ResultsApi {
     return this.api.call(resultEnter, { params: { programmeId }, body, commandKey });
   }
 
-  adopt(programmeId: string, order: AdoptionOrder): Observable<Adoption> {
-    return this.api.call(resultAdopt, { params: { programmeId }, body: order });
+  adopt(programmeId: string, { comment, ...order }: AdoptionDecision): Observable<readonly Adoption[]> {
+    return this.api
+      .call(evidenceAdopt, { params: { programmeId }, body: { adoptions: [order], comment } })
+      .pipe(map(({ adoptions }) => adoptions));
   }
 
   withdraw(programmeId: string, resultId: string, reason: string): Observable<Result> {

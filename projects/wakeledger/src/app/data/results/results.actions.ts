@@ -1,7 +1,8 @@
 import { createActionGroup, emptyProps, props } from '@ngrx/store';
-import type { Adoption, Result, ResultFields } from '#shared/contracts/results';
+import type { Adoption } from '#shared/contracts/adoptions';
+import type { Result, ResultFields } from '#shared/contracts/results';
 import type { ApiProblem } from '../../core/api/api-problem';
-import type { AdoptionOrder, EvidenceAnswer } from './results-api';
+import type { AdoptionDecision, EvidenceAnswer } from './results-api';
 
 export const ResultListPageActions = createActionGroup({
   source: 'Result List Page',
@@ -15,7 +16,7 @@ export const ResultPageActions = createActionGroup({
   source: 'Result Page',
   events: {
     Opened: props<{ programmeId: string }>(),
-    'Adoption Confirmed': props<{ programmeId: string; order: AdoptionOrder }>(),
+    'Adoption Confirmed': props<{ programmeId: string; order: AdoptionDecision }>(),
     'Withdrawal Confirmed': props<{ programmeId: string; resultId: string; reason: string }>(),
     'Outcome Seen': emptyProps(),
   },
@@ -36,7 +37,7 @@ export const ResultsApiActions = createActionGroup({
     Loaded: props<{ programmeId: string; answer: EvidenceAnswer }>(),
     'Loading Failed': props<{ problem: ApiProblem }>(),
     Entered: props<{ programmeId: string; result: Result }>(),
-    Adopted: props<{ programmeId: string; adoption: Adoption }>(),
+    Adopted: props<{ programmeId: string; adoptions: readonly Adoption[] }>(),
     Withdrawn: props<{ programmeId: string; result: Result }>(),
     Refused: props<{ problem: ApiProblem }>(),
   },

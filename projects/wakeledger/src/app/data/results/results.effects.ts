@@ -85,7 +85,7 @@ export const adoptResult = createEffect(
       exhaustMap(({ programmeId, order }) =>
         api.adopt(programmeId, order).pipe(
           mapResponse({
-            next: (adoption) => ResultsApiActions.adopted({ programmeId, adoption }),
+            next: (adoptions) => ResultsApiActions.adopted({ programmeId, adoptions }),
             error: (error) => ResultsApiActions.refused({ problem: asApiProblem(error) }),
           }),
         ),

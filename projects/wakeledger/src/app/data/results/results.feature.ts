@@ -1,6 +1,7 @@
 import { createFeature, createReducer, createSelector, on } from '@ngrx/store';
 import type { Programme } from '#shared/contracts/programmes';
-import type { Adoption, Result } from '#shared/contracts/results';
+import type { Adoption } from '#shared/contracts/adoptions';
+import type { Result } from '#shared/contracts/results';
 import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import type { ApiProblem } from '../../core/api/api-problem';
 import { NOT_ASKED, type Loading } from '../loading';
@@ -17,7 +18,7 @@ export type Deed =
   | { readonly kind: 'none' }
   | { readonly kind: 'under-way' }
   | { readonly kind: 'entered'; readonly result: Result }
-  | { readonly kind: 'adopted'; readonly adoption: Adoption }
+  | { readonly kind: 'adopted'; readonly adoptions: readonly Adoption[] }
   | { readonly kind: 'withdrawn'; readonly result: Result }
   | { readonly kind: 'refused'; readonly problem: ApiProblem };
 
@@ -62,6 +63,15 @@ function withResult(results: readonly Result[], result: Result): readonly Result
     : [...results, result];
 }
 
+/** Until the server answers anew: what rests on what, as the adoptions themselves say. */
+function withAdoptions(results: readonly Result[], adoptions: readonly Adoption[]): readonly Result[] {
+  const chosen = new Map(adoptions.map(({ variantId, resultIds }) => [variantId, resultIds]));
+  return results.map((result) => {
+    const resultIds = chosen.get(result.variantId);
+    return resultIds === undefined ? result : { ...result, adopted: resultIds.includes(result.id) };
+  });
+}
+
 export const resultsFeature = createFeature({
   name: 'results',
   reducer: createReducer(
@@ -96,15 +106,11 @@ export const resultsFeature = createFeature({
       results: withResult(state.results, result),
       deed: { kind: 'withdrawn', result },
     })),
-    on(ResultsApiActions.adopted, (state, { adoption }): ResultsState => ({
+    on(ResultsApiActions.adopted, (state, { adoptions }): ResultsState => ({
       ...state,
-      adoptions: [adoption, ...state.adoptions],
-      results: state.results.map((result) =>
-        result.variantId === adoption.variantId
-          ? { ...result, adopted: result.id === adoption.resultId }
-          : result,
-      ),
-      deed: { kind: 'adopted', adoption },
+      adoptions: [...adoptions, ...state.adoptions],
+      results: withAdoptions(state.results, adoptions),
+      deed: { kind: 'adopted', adoptions },
     })),
     on(ResultsApiActions.refused, (state, { problem }): ResultsState => ({
       ...state,
@@ -118,13 +124,13 @@ export const resultsFeature = createFeature({
   extraSelectors: ({ selectInputs, selectAdoptions }) => ({
     /** Every result brought to the reference, by its id; made anew only when the inputs change. */
     selectReduced: createSelector(selectInputs, reducedEvidence),
-    /** The adoption that stands, by variant. */
+    /** The adoption that stands, by variant; one that was released has none. */
     selectStanding: createSelector(selectAdoptions, (adoptions): ReadonlyMap<string, Adoption> => {
-      const standing = new Map<string, Adoption>();
+      const newest = new Map<string, Adoption>();
       for (const adoption of adoptions) {
-        if (!standing.has(adoption.variantId)) standing.set(adoption.variantId, adoption);
+        if (!newest.has(adoption.variantId)) newest.set(adoption.variantId, adoption);
       }
-      return standing;
+      return new Map([...newest].filter(([, { resultIds }]) => resultIds.length > 0));
     }),
   }),
 });

@@ -1,5 +1,6 @@
 import type { Action } from '@ngrx/store';
-import type { Adoption, Result } from '#shared/contracts/results';
+import type { Adoption } from '#shared/contracts/adoptions';
+import type { Result } from '#shared/contracts/results';
 import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import { ApiProblem } from '../../core/api/api-problem';
 import { reducedEvidence } from './reduced-evidence';
@@ -10,8 +11,10 @@ import { type ResultsState, resultsFeature } from './results.feature';
 const result = (id: string, change: Partial<Result> = {}): Result =>
   ({ id, variantId: 'hatch', adopted: false, ...change }) as Result;
 const adoption = (resultId: string | undefined, variantId = 'hatch'): Adoption => ({
+  id: `adoption of ${resultId}`,
   variantId,
-  resultId,
+  resultIds: resultId === undefined ? [] : [resultId],
+  rule: 'newest',
   comment: 'seen',
   at: '2026-09-15T08:00:00Z',
   by: 'Ingrid Falk',
@@ -38,23 +41,23 @@ describe('the results’ slice', () => {
     const state = after(
       opened,
       loaded,
-      ResultsApiActions.adopted({ programmeId: 'dunlin', adoption: adoption('new') }),
+      ResultsApiActions.adopted({ programmeId: 'dunlin', adoptions: [adoption('new')] }),
     );
     expect(state.results.map(({ id, adopted }) => [id, adopted])).toEqual([
       ['old', false],
       ['new', true],
     ]);
-    expect(resultsFeature.selectStanding({ results: state }).get('hatch')?.resultId).toBe('new');
+    expect(resultsFeature.selectStanding({ results: state }).get('hatch')?.resultIds).toEqual(['new']);
   });
 
   it('takes a released adoption for none', () => {
     const state = after(
       opened,
       loaded,
-      ResultsApiActions.adopted({ programmeId: 'dunlin', adoption: adoption(undefined) }),
+      ResultsApiActions.adopted({ programmeId: 'dunlin', adoptions: [adoption(undefined)] }),
     );
     expect(state.results.some(({ adopted }) => adopted)).toBe(false);
-    expect(resultsFeature.selectStanding({ results: state }).get('hatch')?.resultId).toBeUndefined();
+    expect(resultsFeature.selectStanding({ results: state }).get('hatch')).toBeUndefined();
   });
 
   it('takes no late answer for another programme', () => {

@@ -30,6 +30,11 @@ export function ruleWords(rule: ViewExclusionRule, format: QuantityFormat, local
     const items = listWords(rule.items.map((item) => itemWords(item, locale)));
     return $localize`not comparable with the reference condition: ${items}:ITEMS:`;
   }
+  if (rule.rule === 'set-aside') {
+    return rule.detail === null
+      ? $localize`set aside by judgement`
+      : $localize`set aside: ${rule.detail}:REASON:`;
+  }
   if (rule.rule === 'mach') {
     const [value, limit] = [rule.value, rule.limit].map((number) =>
       format.value(number ?? 0, 'number', { digits: 2 }),
@@ -64,10 +69,11 @@ export function ruleTitle(rule: ViewExclusionRule, format: QuantityFormat, local
 }
 
 const REMEDIES: Readonly<Record<Remedy, string>> = {
-  'include-with-reason': $localize`An aerodynamicist may include it with a written reason once adjustments are open; until then measure in the reference condition.`,
+  'include-with-reason': $localize`An aerodynamicist may include it with a written reason; an adjustment for what differs brings it in without one.`,
   'change-policy': $localize`The limit is a policy of the organisation; a programme manager or aerodynamicist may ask for another.`,
   'enter-anew': $localize`An aerodynamicist may withdraw it and enter it anew.`,
   'measure-yaw': $localize`It counts at zero yaw; a yaw sweep would bring it in here.`,
+  'bring-back': $localize`An aerodynamicist may bring it back.`,
 };
 
 export const remedyWords = (remedy: Remedy): string => REMEDIES[remedy];

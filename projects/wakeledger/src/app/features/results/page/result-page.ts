@@ -19,6 +19,7 @@ import { Undo } from '../../../core/editing/undo';
 import { Preferences } from '../../../core/preferences/preferences';
 import { Session } from '../../../core/session/session';
 import { facilitiesFeature } from '../../../data/facilities/facilities.feature';
+import { policiesFeature } from '../../../data/policies/policies.feature';
 import { ResultPageActions } from '../../../data/results/results.actions';
 import { resultsFeature } from '../../../data/results/results.feature';
 import { variantsFeature } from '../../../data/variants/variants.feature';
@@ -28,9 +29,11 @@ import { askInDialog } from '../../../ui/confirm-dialog/confirm-dialog';
 import { DerivationOpener } from '../../../ui/derivation-sheet/derivation-sheet';
 import { derivationFromTrace } from '../../../ui/derivation-sheet/from-trace';
 import { ProblemBanner } from '../../../ui/problem-banner/problem-banner';
+import { Checks } from '../../../ui/checks/checks';
+import { machWords, reynoldsWords } from '../../../ui/checks/check-figures';
 import { QuantityFormat } from '../../../ui/quantity/quantity-format';
 import { FACILITY_KIND_WORDS } from '../../../ui/words/evidence-words';
-import { CHECK_INKS, CHECK_SHAPES, CHECK_WORDS, checkOf, reynoldsWords } from '../result-check';
+import { CHECK_INKS, CHECK_SHAPES, CHECK_WORDS, checkOf } from '../result-check';
 import { AttachmentLine } from './attachment-line';
 import { pointRows, pointColumns } from './point-rows';
 import { rawLines } from './raw-lines';
@@ -46,7 +49,7 @@ const VERDICT_WORDS = {
 /** What does this result say? Raw values, derivation, checks, attachment, adoption and withdrawal. */
 @Component({
   selector: 'wl-result-page',
-  imports: [AttachmentLine, Busy, DatePipe, ProblemBanner, RouterLink, YawChart],
+  imports: [AttachmentLine, Busy, Checks, DatePipe, ProblemBanner, RouterLink, YawChart],
   templateUrl: './result-page.html',
   styleUrl: './result-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -74,6 +77,7 @@ export class ResultPage {
   private readonly deed = this.store.selectSignal(resultsFeature.selectDeed);
   private readonly variants = this.store.selectSignal(variantsFeature.selectById);
   private readonly facilities = this.store.selectSignal(facilitiesFeature.selectById);
+  private readonly limits = this.store.selectSignal(policiesFeature.selectLimits);
 
   protected readonly busy = computed(() => this.deed().kind === 'under-way');
   protected readonly refusal = signal<ApiProblem | undefined>(undefined);
@@ -99,7 +103,7 @@ export class ResultPage {
       value: this.format.value(zeroYaw.dragAreaM2, 'drag-area'),
       u: this.format.value(zeroYaw.expandedUncertaintyM2, 'drag-area'),
       reynolds: reynoldsWords(output.reynolds, this.format),
-      mach: this.format.value(output.mach, 'number', { digits: 2 }),
+      mach: machWords(output.mach, this.format),
       blockage:
         output.blockageRatio === null
           ? undefined
@@ -121,6 +125,8 @@ export class ResultPage {
         reduction: this.reduction(),
         refused: refused.get(result.id),
         unchecked: refusal?.detail,
+        limits: this.limits(),
+        bodyShape: this.variant()?.bodyShape,
       },
       { format: this.format, locale: this.preferences.numberLocale() },
     );
@@ -161,10 +167,10 @@ export class ResultPage {
   /** The result that the variant rests on now, if it is another one. */
   protected readonly replaced = computed(() => {
     const result = this.result();
-    const adoptedId = result && this.standing().get(result.variantId)?.resultId;
-    return adoptedId === undefined || adoptedId === result?.id
+    const adoptedIds = (result && this.standing().get(result.variantId)?.resultIds) ?? [];
+    return result === undefined || adoptedIds.includes(result.id)
       ? undefined
-      : this.results().find(({ id }) => id === adoptedId);
+      : this.results().find(({ id }) => adoptedIds.includes(id));
   });
   protected readonly history = computed(() => {
     const variantId = this.result()?.variantId;
@@ -172,7 +178,7 @@ export class ResultPage {
       .filter((each) => each.variantId === variantId)
       .map((each) => ({
         ...each,
-        name: this.results().find(({ id }) => id === each.resultId)?.name,
+        results: this.results().filter(({ id }) => each.resultIds.includes(id)),
       }));
   });
 
@@ -189,7 +195,7 @@ export class ResultPage {
         if (deed.kind === 'refused') this.onRefused(deed.problem);
         if (deed.kind === 'adopted') {
           this.undo.say(
-            deed.adoption.resultId === undefined
+            deed.adoptions.every(({ resultIds }) => resultIds.length === 0)
               ? $localize`The adoption is released; the newest result counts again.`
               : $localize`${this.result()?.name ?? ''}:NAME: is adopted.`,
           );
@@ -270,11 +276,12 @@ export class ResultPage {
 
   private order(variantId: string, comment: string, resultId?: string): void {
     this.refusal.set(undefined);
-    const expectedCurrentResultId = this.standing().get(variantId)?.resultId;
+    const resultIds = resultId === undefined ? [] : [resultId];
+    const expectedAdoptionId = this.standing().get(variantId)?.id;
     this.store.dispatch(
       ResultPageActions.adoptionConfirmed({
         programmeId: this.programmeId(),
-        order: { variantId, comment, resultId, expectedCurrentResultId },
+        order: { variantId, comment, resultIds, rule: 'newest', expectedAdoptionId },
       }),
     );
   }

@@ -58,6 +58,15 @@ export const rankedVariantSchema = figureSchema.extend({
   coefficientOnCommonArea: number,
   coefficientOnOwnArea: number,
   ownAreaCoefficientStandardUncertainty: number,
+  combination: z
+    .strictObject({
+      weights: z.array(number),
+      chiSquared: number,
+      birgeRatio: number.nullable(),
+      betweenResultsVarianceM4: number,
+      randomEffectsMeanM2: number,
+    })
+    .optional(),
 });
 
 export const variantEnergySchema = z.strictObject({

@@ -1,9 +1,10 @@
+import type { Combination } from '../combination/combination';
 import { byCodeUnits } from '../text-order';
 import { figureOf, type KeyedFigure } from '../uncertainty/budget';
 import { comparablesOf, type Comparables } from './comparables';
 import type { VariantEvidence } from './evidence';
 import type { VariantInput } from './ranking-input';
-import type { RankedVariant } from './ranking-output';
+import type { RankedCombination, RankedVariant } from './ranking-output';
 
 /** Ascending by a number, equal ones by id. */
 export function ascending<T>(
@@ -42,9 +43,14 @@ export function ownAreaCoefficientUncertainty(
   return Math.sqrt(variance + throughArea * throughArea);
 }
 
+function rankedCombination(combination: Combination): RankedCombination {
+  const { weights, chiSquared, birgeRatio, betweenResultsVarianceM4, randomEffectsMeanM2 } = combination;
+  return { weights, chiSquared, birgeRatio, betweenResultsVarianceM4, randomEffectsMeanM2 };
+}
+
 /** The ranking's rows from evidence in rank order. The common area [m²] changes coefficients only, never the order. */
 export function rankedVariants(ordered: readonly VariantEvidence[], commonAreaM2: number): RankedVariant[] {
-  return ordered.map(({ variant, evidence, resultIds, figure }) => ({
+  return ordered.map(({ variant, evidence, resultIds, figure, combination }) => ({
     variantId: variant.id,
     evidence,
     resultIds,
@@ -52,6 +58,7 @@ export function rankedVariants(ordered: readonly VariantEvidence[], commonAreaM2
     coefficientOnCommonArea: figure.dragAreaM2 / commonAreaM2,
     coefficientOnOwnArea: figure.dragAreaM2 / variant.frontalAreaM2,
     ownAreaCoefficientStandardUncertainty: ownAreaCoefficientUncertainty(figure, variant),
+    ...(combination !== null && { combination: rankedCombination(combination) }),
   }));
 }
 

@@ -1,3 +1,4 @@
+import { combine, type Combination } from '../combination/combination';
 import type { ReducedSet } from '../reduction/reduce';
 import { exclusionRules } from '../reduction/reduce';
 import type { Reduction } from '../reduction/reduction';
@@ -13,7 +14,10 @@ export interface VariantEvidence {
   /** Used results, oldest first. */
   readonly resultIds: readonly string[];
   readonly figure: KeyedFigure;
+  /** Of the same results. */
   readonly zeroYaw: KeyedFigure;
+  /** How the results of a weighted mean agree on the basis, in the order of `resultIds`; null for the newest result. */
+  readonly combination: Combination | null;
 }
 
 export interface PickedEvidence {
@@ -32,44 +36,100 @@ function byAge({ parts: { result: a } }: Reduction, { parts: { result: b } }: Re
   );
 }
 
+/** A result that may be used on a basis, with its figure there. */
+interface Usable {
+  readonly reduction: Reduction;
+  readonly figure: KeyedFigure;
+}
+
 function figureOn(basis: Basis, reduction: Reduction): KeyedFigure | null {
   return basis === 'wind-averaged' ? reduction.windAverage.figure : reduction.zeroYaw;
 }
 
-function newestByVariant(reduced: ReducedSet, basis: Basis): ReadonlyMap<string, Reduction> {
-  const newest = new Map<string, Reduction>();
+/** The usable results of every variant, in the order of the reductions. */
+function usableByVariant(reduced: ReducedSet, basis: Basis): ReadonlyMap<string, readonly Usable[]> {
+  const usable = new Map<string, Usable[]>();
   for (const reduction of reduced.reductions) {
-    if (exclusionRules(reduction, basis).length > 0) continue;
+    const figure = figureOn(basis, reduction);
+    if (figure === null || exclusionRules(reduction, basis).length > 0) continue;
     const { variantId } = reduction.output;
-    const before = newest.get(variantId);
-    if (before === undefined || byAge(before, reduction) < 0) newest.set(variantId, reduction);
+    const before = usable.get(variantId);
+    if (before === undefined) usable.set(variantId, [{ reduction, figure }]);
+    else before.push({ reduction, figure });
   }
-  return newest;
+  return usable;
 }
 
-/** The newest usable result of every variant; variants without one are said. */
+function newestOf(variant: VariantInput, usable: readonly Usable[]): VariantEvidence | null {
+  const [first, ...others] = usable;
+  if (first === undefined) return null;
+  const { reduction, figure } = others.reduce(
+    (newest, one) => (byAge(newest.reduction, one.reduction) < 0 ? one : newest),
+    first,
+  );
+  return {
+    variant,
+    evidence: 'newest',
+    resultIds: [reduction.output.resultId],
+    figure,
+    zeroYaw: reduction.zeroYaw,
+    combination: null,
+  };
+}
+
+/** @throws {Refused} uncertainty-zero */
+function weightedMeanOf(
+  variant: VariantInput,
+  usable: readonly Usable[],
+  basis: Basis,
+): VariantEvidence | null {
+  if (usable.length === 0) return null;
+  const oldestFirst = [...usable].sort((a, b) => byAge(a.reduction, b.reduction));
+  const where = `variant:${variant.id}.results`;
+  const combination = combine(
+    oldestFirst.map(({ figure }) => figure),
+    variant.id,
+    where,
+  );
+  const zeroYaw =
+    basis === 'zero-yaw'
+      ? combination.figure
+      : combine(
+          oldestFirst.map(({ reduction }) => reduction.zeroYaw),
+          variant.id,
+          where,
+        ).figure;
+  return {
+    variant,
+    evidence: 'weighted-mean',
+    resultIds: oldestFirst.map(({ reduction }) => reduction.output.resultId),
+    figure: combination.figure,
+    zeroYaw,
+    combination,
+  };
+}
+
+/**
+ * The newest usable result of every variant, or the weighted mean of all its usable ones; variants without any are said.
+ *
+ * @throws {Refused} uncertainty-zero: a result without an uncertainty of its own in a weighted mean
+ */
 export function pickEvidence(
   variants: readonly VariantInput[],
   reduced: ReducedSet,
   basis: Basis,
 ): PickedEvidence {
-  const newest = newestByVariant(reduced, basis);
+  const usable = usableByVariant(reduced, basis);
   const chosen: VariantEvidence[] = [];
   const without: string[] = [];
   for (const variant of variants) {
-    const reduction = newest.get(variant.id);
-    const figure = reduction === undefined ? null : figureOn(basis, reduction);
-    if (reduction === undefined || figure === null) {
-      without.push(variant.id);
-      continue;
-    }
-    chosen.push({
-      variant,
-      evidence: 'newest',
-      resultIds: [reduction.output.resultId],
-      figure,
-      zeroYaw: reduction.zeroYaw,
-    });
+    const results = usable.get(variant.id) ?? [];
+    const evidence =
+      variant.evidence === 'weighted-mean'
+        ? weightedMeanOf(variant, results, basis)
+        : newestOf(variant, results);
+    if (evidence === null) without.push(variant.id);
+    else chosen.push(evidence);
   }
   return {
     chosen,

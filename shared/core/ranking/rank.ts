@@ -26,7 +26,7 @@ export function confidenceOf(programme: ProgrammeInput): number {
  * `reduceResults` → `pickEvidence` → `byDragArea`, `rankedVariants`, `inseparableGroups` → `rankByEnergy`, `sampleLowest`.
  *
  * @throws {Refused} the codes that refuse the whole: not-available, duplicate-id, confidence-out-of-range, not-positive, those
- *   of the programme's air and of the cycle, missing-input (mass or rolling resistance)
+ *   of the programme's air and of the cycle, uncertainty-zero (weighted mean), missing-input (mass or rolling resistance)
  */
 export function evaluateRank(input: RankingInput, builtIn: BuiltInCycles): RankOutput {
   const { programme, variants, request } = input;

@@ -69,6 +69,18 @@ export interface VariantWithoutEvidence {
   readonly rule: 'no-usable-evidence';
 }
 
+/** How the results of a weighted mean agree, in the order of the results used. */
+export interface RankedCombination {
+  /** Sum to 1. */
+  readonly weights: readonly number[];
+  readonly chiSquared: number;
+  /** Null for one result; above 1 the mean is widened by it. */
+  readonly birgeRatio: number | null;
+  /** After DerSimonian and Laird [m⁴, m²]. */
+  readonly betweenResultsVarianceM4: number;
+  readonly randomEffectsMeanM2: number;
+}
+
 /** One variant in the ranking: its figure on the basis asked for, and what it comes from. */
 export interface RankedVariant extends Figure {
   readonly variantId: string;
@@ -78,6 +90,8 @@ export interface RankedVariant extends Figure {
   readonly coefficientOnCommonArea: number;
   readonly coefficientOnOwnArea: number;
   readonly ownAreaCoefficientStandardUncertainty: number;
+  /** Only for a weighted mean. */
+  readonly combination?: RankedCombination;
 }
 
 /** Energy of one variant on the cycle, from its zero-yaw drag area. */

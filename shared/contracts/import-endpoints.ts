@@ -22,7 +22,7 @@ export const importUpload = endpoint({
   method: 'POST',
   path: '/api/v1/programmes/:programmeId/imports',
   summary:
-    'Bring in a CSV file of results (multipart, field `file`, at most 25 MB and 20 000 rows); nothing counts yet',
+    'Bring in a CSV file or a workbook (.xlsx) of results (multipart, field `file`, at most 25 MB and 20 000 rows); nothing counts yet',
   access: 'imports.run',
   params: programmeParams,
   query: nothing,
@@ -61,6 +61,21 @@ export const importRead = endpoint({
   command: false,
   versioned: false,
   problems: [],
+});
+
+export const importChooseSheet = endpoint({
+  kind: 'json',
+  method: 'PUT',
+  path: '/api/v1/programmes/:programmeId/imports/:importId/sheet',
+  summary: 'Read another sheet of the workbook; what was assigned and corrected so far is given up',
+  access: 'imports.run',
+  params: importParams,
+  query: nothing,
+  body: z.strictObject({ sheet: z.int().min(0).max(10_000) }),
+  response: importDetail,
+  command: true,
+  versioned: true,
+  problems: ['wrong-state', 'conflict', 'too-large', 'unsupported-file', 'unusable-input'],
 });
 
 export const importMap = endpoint({

@@ -109,15 +109,25 @@ export const importSummary = z.strictObject({
 });
 export type ImportSummary = z.infer<typeof importSummary>;
 
+/** A sheet of a workbook, for the person who chooses one. */
+export const importSheet = z.strictObject({
+  name: z.string(),
+  hidden: z.boolean(),
+  filledRows: z.int(),
+  hasTable: z.boolean().describe('A row of headings with rows below it: such a sheet can be read'),
+});
+
 export const importDetail = importSummary.extend({
   sha256: z.string(),
-  encoding: z.enum(ENCODINGS),
-  delimiter: z.enum(DELIMITERS),
+  encoding: z.enum(ENCODINGS).optional().describe('Of a file of text'),
+  delimiter: z.enum(DELIMITERS).optional().describe('Of a file of text'),
+  sheets: z.array(importSheet).optional().describe('Of a workbook, in its order'),
+  sheet: z.int().min(0).optional().describe('Of a workbook: the place of the sheet that was read'),
   /** What the numbers of the file show; `ambiguous` is asked. Absent: no number shows any. */
   decimalFound: z.enum([...DECIMALS, 'ambiguous']).optional(),
   dateOrderFound: z.enum([...DATE_ORDERS, 'ambiguous']).optional(),
   blankLines: z.int(),
-  /** What was noticed while reading, in words: the encoding, repeated headings, blank lines. */
+  /** What was noticed while reading, in words: the encoding, formulas and merged cells, repeated headings, blank lines. */
   notes: z.array(z.string()),
   columns: z.array(importColumn),
   mapping: importMapping.describe('As confirmed last; before that, as guessed or remembered'),

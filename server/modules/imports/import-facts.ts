@@ -9,6 +9,8 @@ export type ImportFacts = Pick<
   ImportDetail,
   | 'encoding'
   | 'delimiter'
+  | 'sheets'
+  | 'sheet'
   | 'decimalFound'
   | 'dateOrderFound'
   | 'blankLines'
@@ -18,10 +20,12 @@ export type ImportFacts = Pick<
 >;
 
 export function importFacts(read: FileRead, mappingRemembered: boolean): ImportFacts {
-  const { encoding, delimiter, decimalFound, dateOrderFound, blankLines, notes } = read;
+  const { encoding, delimiter, sheets, sheet, decimalFound, dateOrderFound, blankLines, notes } = read;
   return {
-    encoding,
-    delimiter,
+    ...(encoding === undefined ? {} : { encoding }),
+    ...(delimiter === undefined ? {} : { delimiter }),
+    ...(sheets === undefined ? {} : { sheets: sheets.map((one) => ({ ...one })) }),
+    ...(sheet === undefined ? {} : { sheet }),
     ...(decimalFound === undefined ? {} : { decimalFound }),
     ...(dateOrderFound === undefined ? {} : { dateOrderFound }),
     blankLines,

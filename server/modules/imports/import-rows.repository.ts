@@ -3,7 +3,7 @@ import type { ImportFix, ImportRow, RowFilter, RowReason, Verdict } from '#share
 import type { Tx } from '../../db/pools';
 import { importRows } from '../../db/tables/import-rows';
 import type { RowVerdict } from './checking/check-group';
-import type { TableRow } from './reading/read-table';
+import type { TableRow } from './reading/table-under-way';
 
 export interface StoredRow extends TableRow {
   readonly groupKey: string;

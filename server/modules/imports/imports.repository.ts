@@ -126,22 +126,33 @@ export async function describeImport(
     readonly headings: readonly string[];
     readonly rowCount: number;
     readonly mapping: ImportMapping;
+    /** The file itself, where another sheet of it may be asked for. */
+    readonly content?: Buffer;
   },
 ): Promise<void> {
   await tx
     .update(imports)
     .set({
       state: 'mapping',
+      content: read.content ?? null,
       summary: read.facts,
       header: read.headings,
       rowCount: read.rowCount,
       mapping: read.mapping,
-      encoding: read.facts.encoding,
-      delimiter: read.facts.delimiter,
+      encoding: read.facts.encoding ?? null,
+      delimiter: read.facts.delimiter ?? null,
       decimal: read.facts.decimalFound ?? null,
     })
     .where(eq(imports.id, id));
 }
+
+/** The file, where it was kept. */
+export async function contentOf(tx: Tx, id: string): Promise<Buffer | undefined> {
+  const [row] = await tx.select({ content: imports.content }).from(imports).where(eq(imports.id, id));
+  return row?.content ?? undefined;
+}
+
+const OVER: ReadonlySet<ImportState> = new Set<ImportState>(['stored', 'withdrawn', 'cancelled']);
 
 export interface ImportChange {
   readonly state?: ImportState;
@@ -161,6 +172,8 @@ export async function changeImport(tx: Tx, id: string, change: ImportChange): Pr
       ...rest,
       ...(message === undefined ? {} : { failure: message }),
       ...(resultCount === undefined ? {} : { progressRows: resultCount }),
+      // No other sheet of it can be asked for any more.
+      ...(change.state !== undefined && OVER.has(change.state) ? { content: null } : {}),
       updatedAt: sql`clock_timestamp()`,
       version: sql`${imports.version} + 1`,
     })

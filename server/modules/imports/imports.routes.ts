@@ -1,4 +1,5 @@
 import {
+  importChooseSheet,
   importConfirm,
   importDiscard,
   importFixRows,
@@ -16,6 +17,7 @@ import { fixRows } from './import-fixes.service';
 import {
   allImports,
   bringIn,
+  chooseSheet,
   confirm,
   discard,
   mapColumns,
@@ -33,6 +35,9 @@ export const importsRoutes: readonly Route[] = [
     imports: [...(await allImports(context, params.programmeId))],
   })),
   route(importRead, async ({ params }, context) => oneImport(context, params.programmeId, params.importId)),
+  route(importChooseSheet, async ({ params, body, expectedVersion }, context) =>
+    chooseSheet(context, params.programmeId, params.importId, body.sheet, expectedVersion),
+  ),
   route(importMap, async ({ params, body, expectedVersion }, context) =>
     mapColumns(context, params.programmeId, params.importId, body, expectedVersion),
   ),

@@ -21,6 +21,7 @@ import { firstMapping, headerHash, importFacts, memorable, openQuestions } from 
 import { countVerdicts, deleteRows, findRows, insertRows, type Counts } from './import-rows.repository';
 import {
   changeImport,
+  contentOf,
   describeImport,
   findImport,
   insertImport,
@@ -32,7 +33,8 @@ import {
   type ImportRecord,
 } from './imports.repository';
 import { readImportFile, type FileRead } from './reading/read-file';
-import { UnreadableFile, type TableRow } from './reading/read-table';
+import type { TableRow } from './reading/table-under-way';
+import { UnreadableFile } from './reading/unreadable-file';
 import { STORE_JOB } from './store-import.job';
 import { adoptedOfImport, lockVariantsOfImport, withdrawResultsOf } from './store-results.repository';
 
@@ -49,14 +51,7 @@ export async function bringIn(
     sha256: file.sha256,
     sizeBytes: file.content.length,
   });
-  const read = await readable(file, (rows) => insertRows(context.tx, id, rows));
-  const remembered = await rememberedMapping(context.tx, headerHash(read.headings));
-  await describeImport(context.tx, id, {
-    facts: importFacts(read, remembered !== undefined),
-    headings: read.headings,
-    rowCount: read.rowCount,
-    mapping: firstMapping(read, remembered),
-  });
+  const read = await describe(context, id, file.content, undefined);
   await audit(context, 'import.brought-in', id, [
     { field: 'fileName', after: file.fileName },
     { field: 'sha256', after: file.sha256 },
@@ -65,16 +60,69 @@ export async function bringIn(
   return oneImport(context, programmeId, id);
 }
 
+/** Reads a file into the rows of an import, and says of the import what was found. */
+async function describe(
+  context: MemberContext,
+  id: string,
+  content: Buffer,
+  sheet: number | undefined,
+): Promise<FileRead> {
+  const read = await readable(content, (rows) => insertRows(context.tx, id, rows), sheet);
+  const remembered = await rememberedMapping(context.tx, headerHash(read.headings));
+  const tables = read.sheets?.filter(({ hasTable }) => hasTable) ?? [];
+  await describeImport(context.tx, id, {
+    facts: importFacts(read, remembered !== undefined),
+    headings: read.headings,
+    rowCount: read.rowCount,
+    mapping: firstMapping(read, remembered),
+    ...(tables.length > 1 ? { content } : {}),
+  });
+  return read;
+}
+
 async function readable(
-  file: UploadedFile,
+  content: Buffer,
   store: (rows: readonly TableRow[]) => Promise<void>,
+  sheet: number | undefined,
 ): Promise<FileRead> {
   try {
-    return await readImportFile(file.content, store);
+    return await readImportFile(content, store, sheet);
   } catch (error) {
-    if (error instanceof UnreadableFile) fail(error.code, { where: 'body.file', detail: error.detail });
+    const where = sheet === undefined ? 'body.file' : 'body.sheet';
+    if (error instanceof UnreadableFile) fail(error.code, { where, detail: error.detail });
     throw error;
   }
+}
+
+/** Reads another sheet of a workbook in place of the one before. */
+export async function chooseSheet(
+  context: MemberContext,
+  programmeId: string,
+  id: string,
+  sheet: number,
+  expectedVersion: number,
+): Promise<ImportDetail> {
+  const record = await held(context, programmeId, id);
+  demandVersion(record, expectedVersion);
+  demandState(record, 'mapping', 'ready');
+  const content = await contentOf(context.tx, id);
+  if (content === undefined)
+    fail('unusable-input', {
+      where: 'body.sheet',
+      detail: 'This import has no other sheet that could be read. Bring the file in again.',
+    });
+  await deleteRows(context.tx, id);
+  const read = await describe(context, id, content, sheet);
+  await changeImport(context.tx, id, { message: null });
+  await audit(context, 'import.sheet-chosen', id, [
+    { field: 'sheet', before: nameOfSheet(record.facts), after: nameOfSheet(read) },
+    { field: 'rows', before: record.rowCount, after: read.rowCount },
+  ]);
+  return oneImport(context, programmeId, id);
+}
+
+function nameOfSheet({ sheets, sheet }: Pick<FileRead, 'sheets' | 'sheet'>): string {
+  return sheets?.[sheet ?? 0]?.name ?? '';
 }
 
 export async function allImports(work: Work, programmeId: string): Promise<readonly ImportSummary[]> {

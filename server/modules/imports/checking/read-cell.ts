@@ -16,6 +16,10 @@ export interface Writing {
 const TEXT_LIMITS: Partial<Record<ImportField, number>> = { source: 400, remark: 4000 };
 const TEXT_LIMIT = 120;
 
+/** What a sheet shows where a formula has no value (ISO/IEC 29500-1, 18.18.11), and our own word for one that never had any. */
+const SHEET_ERROR =
+  /^#(?:DIV\/0!|N\/A|NAME\?|NULL!|NUM!|REF!|VALUE!|SPILL!|CALC!|GETTING_DATA|FIELD!|BLOCKED!|NOT CALCULATED)$/;
+
 /** Reads a cell that is not empty as its field asks, in the unit of the contract. */
 export function readCell(
   field: ImportField,
@@ -23,6 +27,10 @@ export function readCell(
   unit: string | undefined,
   writing: Writing,
 ): Reading<CellValue> {
+  if (SHEET_ERROR.test(text))
+    return {
+      problem: `“${text}” is what a sheet shows where a formula has no value. Mend the formula in the file, or write the value here.`,
+    };
   const rule = importFieldRule(field);
   switch (rule.kind) {
     case 'text':

@@ -2,7 +2,7 @@ import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { resultFields } from '#shared/contracts/results';
 import type { ImportMapping } from '#shared/contracts/imports';
-import { UnreadableFile } from '../reading/read-table';
+import { UnreadableFile } from '../reading/unreadable-file';
 import { CORPUS_SURROUNDINGS } from './corpus-surroundings';
 import { judgeFile, type JudgedFile } from './judge-file';
 
@@ -14,6 +14,10 @@ interface Expected {
   readonly decimal?: string;
   readonly dateOrder?: string;
   readonly blankLines?: number;
+  /** Of a workbook: its sheets with their filled rows, the one that is proposed, and all that is said of it. */
+  readonly sheets?: Readonly<Record<string, string>>;
+  readonly sheet?: string;
+  readonly notes?: readonly string[];
   readonly columns?: Readonly<Record<string, string>>;
   /** What is asked before rows can be checked. */
   readonly asks?: readonly string[];
@@ -22,9 +26,10 @@ interface Expected {
 }
 
 const corpus = join(__dirname);
-const files = readdirSync(corpus).filter((file) => file.endsWith('.csv'));
+/** The workbooks were written by openpyxl 3.1.5 and XlsxWriter 3.2.9, two libraries that have no part in reading them. */
+const files = readdirSync(corpus).filter((file) => /\.(csv|xlsx)$/.test(file));
 const expectedOf = (file: string): Expected =>
-  JSON.parse(readFileSync(join(corpus, file.replace(/\.csv$/, '.expected.json')), 'utf8')) as Expected;
+  JSON.parse(readFileSync(join(corpus, file.replace(/\.(csv|xlsx)$/, '.expected.json')), 'utf8')) as Expected;
 
 async function judged(file: string): Promise<JudgedFile | UnreadableFile> {
   try {
@@ -43,6 +48,18 @@ function seen(file: JudgedFile | UnreadableFile): Omit<Expected, 'choices'> {
   if (file instanceof UnreadableFile) return { refused: { code: file.code, says: file.detail } };
   const { read, issues, groups } = file;
   return {
+    ...(read.sheets === undefined
+      ? {}
+      : {
+          sheets: Object.fromEntries(
+            read.sheets.map(({ name, filledRows, hasTable, hidden }) => [
+              name,
+              `${String(filledRows)} rows${hasTable ? '' : ', no table'}${hidden ? ', hidden' : ''}`,
+            ]),
+          ),
+          sheet: read.sheets[read.sheet ?? -1]?.name,
+          notes: read.notes,
+        }),
     encoding: read.encoding,
     delimiter: read.delimiter,
     decimal: read.decimalFound,

@@ -4,7 +4,7 @@ import type { CheckContext } from '../checking/check-context';
 import { compileMapping, mappingIssues } from '../checking/compiled-mapping';
 import { guessedMapping } from '../reading/guessed-mapping';
 import { readImportFile, type FileRead } from '../reading/read-file';
-import type { TableRow } from '../reading/read-table';
+import type { TableRow } from '../reading/table-under-way';
 
 export interface JudgedFile {
   readonly read: FileRead;

@@ -24,7 +24,7 @@ export class ColumnSurvey {
     this.#filled += 1;
     const sample = cell.slice(0, SAMPLE_LENGTH);
     if (this.samples.length < SAMPLES && !this.samples.includes(sample)) this.samples.push(sample);
-    const decimal = decimalEvidence(cell);
+    const decimal = decimalEvidence(cell.replace(/\s*%$/, ''));
     if (decimal !== undefined) {
       this.#numbers += 1;
       this.#decimals[decimal] += 1;

@@ -11,7 +11,6 @@ const SIGNATURES: readonly Signature[] = [
   { bytes: [0xcf, 0xfa, 0xed, 0xfe], looksLike: 'a macOS program' },
   { bytes: [0xca, 0xfe, 0xba, 0xbe], looksLike: 'a program' },
   { bytes: [0x23, 0x21], looksLike: 'a script' },
-  { bytes: [0xd0, 0xcf, 0x11, 0xe0], looksLike: 'an old Office document (.xls)' },
   { bytes: [0x25, 0x50, 0x44, 0x46], looksLike: 'a PDF document' },
   { bytes: [0x89, 0x50, 0x4e, 0x47], looksLike: 'a PNG picture' },
   { bytes: [0xff, 0xd8, 0xff], looksLike: 'a JPEG picture' },
@@ -31,23 +30,40 @@ function startsWith(head: Uint8Array, bytes: readonly number[], at = 0): boolean
   return bytes.every((byte, index) => head[at + index] === byte);
 }
 
-/** A spreadsheet is a zip archive; its table of contents stands in clear text. */
-function zipKind(head: Uint8Array): string {
-  const text = new TextDecoder('latin1').decode(head);
-  if (text.includes('xl/') || text.includes('[Content_Types].xml')) return 'an Excel workbook (.xlsx)';
-  if (text.includes('opendocument.spreadsheet')) return 'an OpenDocument spreadsheet (.ods)';
-  return 'a zip archive';
+/** Whether a file is a zip archive, as workbooks are. */
+export function isZip(head: Uint8Array): boolean {
+  return startsWith(head, ZIP);
 }
 
-/** What the first bytes of a file say it is, in words; undefined when nothing speaks against text. */
-export function otherKindOfFile(head: Uint8Array): string | undefined {
-  if (startsWith(head, ZIP)) return zipKind(head);
+/** A compound file: an old Office document, or a new one behind a password. */
+const COMPOUND = [0xd0, 0xcf, 0x11, 0xe0] as const;
+
+function compoundKind(content: Uint8Array): string {
+  const bytes = Buffer.from(content.buffer, content.byteOffset, content.byteLength);
+  return bytes.includes('EncryptedPackage', 0, 'utf16le')
+    ? 'a workbook locked with a password'
+    : 'an old Office document (.xls)';
+}
+
+/** An OpenDocument file names its kind in clear text at its beginning. */
+const OPEN_DOCUMENT = 'application/vnd.oasis.opendocument';
+
+/** What a file is by its bytes, in words; undefined when nothing speaks against text or a workbook. */
+export function otherKindOfFile(content: Uint8Array): string | undefined {
+  const head = content.subarray(0, 4096);
+  if (startsWith(head, COMPOUND)) return compoundKind(content);
+  if (isZip(head))
+    return new TextDecoder('latin1').decode(head).includes(OPEN_DOCUMENT)
+      ? 'an OpenDocument file (.ods)'
+      : undefined;
   return SIGNATURES.find((signature) => startsWith(head, signature.bytes, signature.at))?.looksLike;
 }
 
 /** How such a file becomes one that can be read. */
 export function wayOut(looksLike: string): string {
-  return /Excel|OpenDocument|Office/.test(looksLike)
-    ? 'Open it there and save the sheet as CSV, then bring that in.'
-    : 'A CSV file is accepted: text, one row a line, columns set apart by semicolon, comma or tab.';
+  if (looksLike.includes('password'))
+    return 'Open it, take the password off, save it as .xlsx and bring that in.';
+  return /OpenDocument|Office/.test(looksLike)
+    ? 'Open it there, save it as a workbook (.xlsx) or the sheet as CSV, then bring that in.'
+    : 'A CSV file is accepted (text, one row a line, columns set apart by semicolon, comma or tab), or a workbook (.xlsx).';
 }

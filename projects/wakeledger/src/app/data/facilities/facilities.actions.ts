@@ -1,5 +1,5 @@
 import { createActionGroup, emptyProps, props } from '@ngrx/store';
-import type { Facility, FacilityFields } from '#shared/contracts/facilities';
+import type { Facility, FacilityChange, FacilityFields } from '#shared/contracts/facilities';
 import type { ApiProblem } from '../../core/api/api-problem';
 
 export const FacilityListPageActions = createActionGroup({
@@ -11,12 +11,17 @@ export const FacilityListPageActions = createActionGroup({
   },
 });
 
+export const FacilityPageActions = createActionGroup({
+  source: 'Facility Page',
+  events: { Opened: emptyProps() },
+});
+
 export const FacilityFormPageActions = createActionGroup({
   source: 'Facility Form Page',
   events: {
     Opened: emptyProps(),
     'Creation Confirmed': props<{ fields: FacilityFields; commandKey: string }>(),
-    'Change Confirmed': props<{ facility: Facility; fields: FacilityFields; commandKey: string }>(),
+    'Change Confirmed': props<{ facility: Facility; fields: FacilityChange; commandKey: string }>(),
     'Retirement Confirmed': props<{ facility: Facility; retired: boolean }>(),
     'Outcome Seen': emptyProps(),
     Left: emptyProps(),

@@ -10,6 +10,7 @@ import {
   FacilityFormPageActions,
   FacilityListPageActions,
   FacilityNamesActions,
+  FacilityPageActions,
   FacilitiesApiActions,
 } from './facilities.actions';
 
@@ -21,6 +22,7 @@ export const loadFacilities = createEffect(
         FacilityListPageActions.opened,
         FacilityListPageActions.askedAgain,
         FacilityFormPageActions.opened,
+        FacilityPageActions.opened,
         FacilityNamesActions.needed,
       ),
       switchMap(() =>

@@ -6,6 +6,7 @@ import {
   FacilityFormPageActions,
   FacilityListPageActions,
   FacilityNamesActions,
+  FacilityPageActions,
   FacilitiesApiActions,
 } from './facilities.actions';
 
@@ -43,6 +44,7 @@ export const facilitiesFeature = createFeature({
       FacilityListPageActions.opened,
       FacilityListPageActions.askedAgain,
       FacilityFormPageActions.opened,
+      FacilityPageActions.opened,
       FacilityNamesActions.needed,
       asked,
     ),

@@ -4,6 +4,7 @@ import { needs } from '../../core/session/session-guards';
 import { provideFacilities } from '../../data/facilities/provide-facilities';
 import { FacilityFormPage } from './facility-form-page';
 import { FacilityListPage } from './facility-list-page';
+import { FacilityPage } from './facility-page';
 
 export const routes: Routes = [
   {
@@ -26,6 +27,12 @@ export const routes: Routes = [
       {
         path: ':facilityId',
         title: $localize`How sure is what this facility says?`,
+        component: FacilityPage,
+      },
+      {
+        path: ':facilityId/edit',
+        title: $localize`What changes at this facility?`,
+        canActivate: [needs('facilities.edit')],
         canDeactivate: [keepUnsavedChanges],
         component: FacilityFormPage,
       },

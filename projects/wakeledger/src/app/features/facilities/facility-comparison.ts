@@ -49,11 +49,16 @@ export function facilityComparison(
       read: ({ repeatabilityURelative: relative, repeatabilityDegreesOfFreedom: degreesOfFreedom }) =>
         uncertaintyWords({ relative, degreesOfFreedom }, format),
     },
+    {
+      label: $localize`Check body`,
+      read: ({ checkBody }) => [checkBody?.name, checkBody?.remark].filter(Boolean).join(': '),
+    },
     { label: $localize`Remark`, read: ({ remark }) => remark ?? '' },
   ];
 }
 
-function blockageWords(blockage: FacilityFields['blockage']): string {
+/** How a facility corrects for blockage, in one line; empty where it does not say. */
+export function blockageWords(blockage: FacilityFields['blockage']): string {
   if (blockage === undefined) return '';
   const { method, theta, factor, uFractionOfCorrection, uRelative } = blockage;
   return [

@@ -13,6 +13,7 @@ import {
   signal,
   untracked,
 } from '@angular/core';
+import { rxResource } from '@angular/core/rxjs-interop';
 import { type AbstractControl, NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { Router, RouterLink } from '@angular/router';
 import { Store } from '@ngrx/store';
@@ -20,8 +21,9 @@ import {
   BLOCKAGE_METHODS,
   FACILITY_KINDS,
   type Facility,
-  type FacilityFields,
+  type FacilityChange,
 } from '#shared/contracts/facilities';
+import { changedCorrections } from '#shared/core/reduction/facility-corrections';
 import type { ApiProblem, ProblemIssue } from '../../core/api/api-problem';
 import { newCommandKey } from '../../core/api/command-key';
 import { resolveConflict } from '../../core/editing/conflict-dialog';
@@ -32,6 +34,7 @@ import { Undo } from '../../core/editing/undo';
 import { type HoldsChanges, warnBeforeUnload } from '../../core/editing/unsaved-changes';
 import { Preferences } from '../../core/preferences/preferences';
 import { Session } from '../../core/session/session';
+import { FacilitiesApi } from '../../data/facilities/facilities-api';
 import { FacilityFormPageActions } from '../../data/facilities/facilities.actions';
 import { facilitiesFeature } from '../../data/facilities/facilities.feature';
 import { Busy } from '../../ui/busy/busy';
@@ -44,8 +47,17 @@ import { QuantityFormat } from '../../ui/quantity/quantity-format';
 import { BLOCKAGE_METHOD_WORDS, FACILITY_KIND_WORDS } from '../../ui/words/evidence-words';
 import { confirmFacilityRetirement } from './confirm-facility-retirement';
 import { facilityComparison } from './facility-comparison';
-import { facilityFieldsOf, facilityForm, isTunnel, setFacility } from './facility-form';
+import {
+  facilityChangeOf,
+  facilityFieldsOf,
+  facilityForm,
+  isTunnel,
+  setFacility,
+  takeOver,
+} from './facility-form';
 import { BLOCKAGE_METHOD_HINTS } from './facility-words';
+import { scatterFromAddress } from './scatter-address';
+import { tooLargeModels } from './tested-models';
 import { UNCERTAINTY_LINES } from './uncertainty-lines';
 
 /** One facility: kind, blockage, usual condition and how sure its figures are. */
@@ -68,6 +80,8 @@ import { UNCERTAINTY_LINES } from './uncertainty-lines';
 export class FacilityFormPage implements HoldsChanges {
   /** Absent: a new facility. */
   readonly facilityId = input<string>();
+  /** From the address: a session scatter to be taken over from the check body, see `scatter-address.ts`. */
+  readonly scatter = input<string>();
 
   private readonly store = inject(Store);
   private readonly router = inject(Router);
@@ -78,10 +92,10 @@ export class FacilityFormPage implements HoldsChanges {
   private readonly builder = inject(NonNullableFormBuilder);
   private readonly host = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
   private readonly session = inject(Session);
+  private readonly api = inject(FacilitiesApi);
 
   protected readonly form = facilityForm(this.builder);
   private readonly pulse = formPulse(signal(this.form));
-  protected readonly mayEdit = computed(() => this.session.may('facilities.edit'));
   protected readonly loading = this.store.selectSignal(facilitiesFeature.selectLoading);
   private readonly saving = this.store.selectSignal(facilitiesFeature.selectSaving);
   private readonly known = this.store.selectSignal(facilitiesFeature.selectById);
@@ -113,10 +127,35 @@ export class FacilityFormPage implements HoldsChanges {
   protected readonly areaLabel = computed(() =>
     this.kind() === 'open-jet' ? $localize`Area of the nozzle` : $localize`Area of the test section`,
   );
+  protected readonly back = computed(() => {
+    const id = this.facilityId();
+    return id === undefined ? ['/facilities'] : ['/facilities', id];
+  });
+  /** Before a change of corrections is saved, the person says why. */
+  protected readonly commentNeeded = computed(() => {
+    this.pulse();
+    const base = this.base();
+    return base !== undefined && changedCorrections(base, facilityFieldsOf(this.form)).length > 0;
+  });
+  private readonly taken = computed(() => scatterFromAddress(this.scatter()));
+  protected readonly takenOver = computed(() =>
+    this.facilityId() === undefined ? undefined : this.taken()?.comment,
+  );
+  private readonly models = rxResource({
+    params: () => (this.session.may('results.read') ? this.facilityId() : undefined),
+    stream: ({ params }) => this.api.models(params),
+  });
+  protected readonly tooLarge = computed(() => {
+    this.pulse();
+    if (!this.tunnel() || !this.models.hasValue()) return undefined;
+    return tooLargeModels(this.models.value(), this.form.controls.areaM2.value, this.format);
+  });
   protected readonly methodHint = computed(() => BLOCKAGE_METHOD_HINTS[this.method()]);
 
   /** One key for one wish: sending the same form again after a lost answer does it once. */
   private commandKey = newCommandKey();
+  /** What the address carries is put into the form once, not again over what stands after saving. */
+  private taking = false;
   private wanted: 'save' | 'retire' | 'bring-back' = 'save';
 
   constructor() {
@@ -143,7 +182,7 @@ export class FacilityFormPage implements HoldsChanges {
   }
 
   hasUnsavedChanges(): boolean {
-    return this.mayEdit() && this.form.dirty;
+    return this.form.dirty;
   }
 
   protected error(control: AbstractControl): string | undefined {
@@ -158,11 +197,13 @@ export class FacilityFormPage implements HoldsChanges {
 
   protected save(): void {
     revealErrors(this.form);
+    const { comment } = this.form.controls;
+    if (this.commentNeeded() && comment.value.trim() === '') comment.setErrors({ required: true });
     if (this.form.invalid) {
       afterNextRender(() => focusFirstFault(this.host), { injector: this.injector });
       return;
     }
-    this.send(facilityFieldsOf(this.form), this.base());
+    this.send(facilityChangeOf(this.form), this.base());
   }
 
   protected async retire(): Promise<void> {
@@ -196,19 +237,25 @@ export class FacilityFormPage implements HoldsChanges {
 
   private fill(facility: Facility): void {
     setFacility(this.form, facility);
-    if (!this.mayEdit()) this.form.disable();
+    const taken = this.taken();
+    if (taken && !this.taking) takeOver(this.form, taken);
+    this.taking = true;
     this.base.set(facility);
     this.filled.set(true);
   }
 
-  private send(fields: FacilityFields, against: Facility | undefined): void {
+  private send({ comment, ...fields }: FacilityChange, against: Facility | undefined): void {
     this.problem.set(undefined);
     this.wanted = 'save';
     const { commandKey } = this;
     this.store.dispatch(
       against === undefined
         ? FacilityFormPageActions.creationConfirmed({ fields, commandKey })
-        : FacilityFormPageActions.changeConfirmed({ facility: against, fields, commandKey }),
+        : FacilityFormPageActions.changeConfirmed({
+            facility: against,
+            fields: comment === undefined ? fields : { ...fields, comment },
+            commandKey,
+          }),
     );
   }
 
@@ -235,7 +282,7 @@ export class FacilityFormPage implements HoldsChanges {
     }
     this.form.markAsPristine();
     this.undo.say($localize`${facility.name}:NAME: is saved.`);
-    void this.router.navigate(['/facilities']);
+    void this.router.navigate(['/facilities', facility.id]);
   }
 
   private onRefused(problem: ApiProblem): void {
@@ -255,7 +302,7 @@ export class FacilityFormPage implements HoldsChanges {
       if (!this.form.dirty) this.fill(theirs);
       return;
     }
-    const mine = facilityFieldsOf(this.form);
+    const mine = facilityChangeOf(this.form);
     const rows = conflictRows(facilityComparison(this.format, this.preferences.numberLocale()), {
       before,
       mine,

@@ -3,7 +3,7 @@ import { NonNullableFormBuilder } from '@angular/forms';
 import { facilityFields as contract, type FacilityFields } from '#shared/contracts/facilities';
 import { facilityFields } from '#shared/testing/domain-fields';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
-import { facilityFieldsOf, facilityForm, setFacility } from './facility-form';
+import { facilityChangeOf, facilityFieldsOf, facilityForm, setFacility, takeOver } from './facility-form';
 import { uncertaintyLines } from './facility-words';
 
 describe('a facility’s form', () => {
@@ -20,6 +20,27 @@ describe('a facility’s form', () => {
     expect(facilityFieldsOf(form)).toEqual(fields);
     expect(contract.safeParse(facilityFieldsOf(form)).success).toBe(true);
     expect(form.dirty).toBe(false);
+  });
+
+  it('keeps the check body, and sends none where its name is empty', () => {
+    const fields = facilityFields({ checkBody: { name: 'Grey box', remark: 'aluminium, 1.2 m' } });
+    const form = filled(fields);
+    expect(facilityFieldsOf(form)).toEqual(fields);
+    form.controls.checkBody.controls.name.setValue(' ');
+    expect(facilityFieldsOf(form)).not.toHaveProperty('checkBody');
+  });
+
+  it('takes over a session scatter in the place of the stated one, with a comment, and counts as changed', () => {
+    const form = filled(facilityFields({ sessionUM2: 0.001, sessionURelative: 0.001 }));
+    takeOver(form, { uRelative: 0.00213, degreesOfFreedom: 4.2, comment: 'From six sessions' });
+    const change = facilityChangeOf(form);
+    expect(change).toMatchObject({
+      sessionURelative: 0.00213,
+      sessionDegreesOfFreedom: 4.2,
+      comment: 'From six sessions',
+    });
+    expect(change).not.toHaveProperty('sessionUM2');
+    expect(form.dirty).toBe(true);
   });
 
   it('asks a proving ground for no section and no blockage', () => {

@@ -1,6 +1,6 @@
 import { type NonNullableFormBuilder, Validators } from '@angular/forms';
 import { TUNNEL_KINDS } from '#shared/core/ranking/ranking-input';
-import type { Facility, FacilityFields } from '#shared/contracts/facilities';
+import type { Facility, FacilityChange, FacilityFields } from '#shared/contracts/facilities';
 import { filledOrAbsent, withoutBlanks } from '../../core/editing/without-blanks';
 import { conditionForm, conditionOf, setCondition } from '../../ui/condition/condition-form';
 import type { BlockageMethodName, FacilityKindName } from '../../ui/words/evidence-words';
@@ -51,7 +51,13 @@ export function facilityForm(builder: NonNullableFormBuilder) {
     installationDegreesOfFreedom: measure(),
     repeatabilityURelative: measure(),
     repeatabilityDegreesOfFreedom: measure(),
+    checkBody: builder.group({
+      name: ['', [Validators.maxLength(120)]],
+      remark: ['', [Validators.maxLength(4000)]],
+    }),
     remark: ['', [Validators.maxLength(4000)]],
+    /** Why corrections change; kept with the version, not with the facility. */
+    comment: ['', [Validators.minLength(3), Validators.maxLength(1000)]],
   });
 }
 export type FacilityForm = ReturnType<typeof facilityForm>;
@@ -67,6 +73,7 @@ export function setFacility(form: FacilityForm, fields: FacilityFields | Facilit
     name: fields.name,
     kind: fields.kind,
     remark: fields.remark ?? '',
+    checkBody: { name: fields.checkBody?.name ?? '', remark: fields.checkBody?.remark ?? '' },
     blockage: {
       method: blockage?.method ?? 'none',
       theta: blockage?.theta ?? null,
@@ -90,7 +97,7 @@ export function setFacility(form: FacilityForm, fields: FacilityFields | Facilit
 /** What the form says, as the contract wants it. Fields that do not belong to the chosen kind or method are left out. */
 export function facilityFieldsOf(form: FacilityForm): FacilityFields {
   const value = form.getRawValue();
-  const { name, kind, areaM2, blockage, remark } = value;
+  const { name, kind, areaM2, blockage, checkBody, remark } = value;
   const tunnel = isTunnel(kind);
   const relative = Object.fromEntries(
     RELATIVE.map((field) => {
@@ -107,7 +114,34 @@ export function facilityFieldsOf(form: FacilityForm): FacilityFields {
     usualCondition: conditionOf(form.controls.usualCondition),
     ...withoutBlanks({ areaM2: tunnel ? areaM2 : null, remark, ...relative, ...asTyped }),
     ...(tunnel ? { blockage: blockageOf(blockage) } : {}),
+    ...(checkBody.name.trim() === ''
+      ? {}
+      : { checkBody: { name: checkBody.name.trim(), ...withoutBlanks({ remark: checkBody.remark }) } }),
   };
+}
+
+/** As {@link facilityFieldsOf}, with the comment that goes with the change. */
+export function facilityChangeOf(form: FacilityForm): FacilityChange {
+  return { ...facilityFieldsOf(form), ...withoutBlanks({ comment: form.controls.comment.value }) };
+}
+
+/** What a check body says of the session scatter, on its way into the form. */
+export interface TakenOver {
+  /** Of the drag area. */
+  readonly uRelative: number;
+  readonly degreesOfFreedom: number;
+  readonly comment: string;
+}
+
+/** Puts a measured session scatter in the place of the stated one; still to be confirmed by saving. */
+export function takeOver(form: FacilityForm, { uRelative, degreesOfFreedom, comment }: TakenOver): void {
+  form.patchValue({
+    sessionURelative: toPercent(uRelative),
+    sessionUM2: null,
+    sessionDegreesOfFreedom: degreesOfFreedom,
+    comment,
+  });
+  form.markAsDirty();
 }
 
 function blockageOf(

@@ -149,6 +149,16 @@ const viewRow = z.strictObject({
   rankByEnergy: z.int().nullable(),
   probabilityLowerThanNext: number.nullable(),
   evidence: z.array(viewEvidence),
+  rule: z.enum(EVIDENCE_RULES),
+  combination: z
+    .strictObject({
+      weights: z.array(number),
+      chiSquared: number,
+      birgeRatio: number.nullable(),
+      betweenResultsVarianceM4: number,
+      randomEffectsMeanM2: number,
+    })
+    .nullable(),
   newer: viewEvidence.nullable(),
   reynolds: number.nullable(),
   mach: number.nullable(),

@@ -1,8 +1,10 @@
 import * as z from 'zod';
 import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import { airInputSchema } from './air';
+import { correlationPairSchema } from './correlation';
 import { cycleInputSchema } from './cycle';
 import { degreesOfFreedomSchema, uncertaintySchema } from './figure';
+import { sweepPointSchema } from './reynolds-sweep';
 import { roadLoadReferenceSchema } from './road-load';
 
 const text = z.string();
@@ -137,7 +139,7 @@ const resultSchema = z.strictObject({
 
 const sweepSchema = z.strictObject({
   ...named,
-  points: z.array(z.strictObject({ reynolds: number.positive(), dragAreaM2: number.positive() })),
+  points: z.array(sweepPointSchema),
 });
 
 const adjustmentSchema = z.strictObject({
@@ -158,14 +160,7 @@ const correlationSchema = z.strictObject({
   facilityId: text,
   referenceFacilityId: text,
   replaces: z.array(z.enum(['blockage', 'reynolds', 'ground-simulation'])).nullish(),
-  pairs: z.array(
-    z.strictObject({
-      dragAreaM2: number.positive(),
-      uM2: uncertaintySchema,
-      referenceDragAreaM2: number.positive(),
-      referenceUM2: uncertaintySchema,
-    }),
-  ),
+  pairs: z.array(correlationPairSchema),
 });
 
 /** Input of the operations `rank` and `reduce`; the response of `ranking-inputs` is of the same shape. */

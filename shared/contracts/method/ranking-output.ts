@@ -8,8 +8,8 @@ const ids = z.array(z.string());
 export const reducedResultSchema = z.strictObject({
   resultId: z.string(),
   variantId: z.string(),
-  reynolds: number,
-  mach: number,
+  reynolds: number.nullable(),
+  mach: number.nullable(),
   blockageRatio: number.nullable(),
   dynamicPressurePa: number.nullable(),
   modelDragAreaM2: number,

@@ -9,7 +9,7 @@ import { pressureSuspicion, temperatureSuspicion } from './unit-suspicion';
 function formulaCheck({ parts }: Reduction, temperatureC: number, pressurePa: number): Check {
   const { minC, maxC, minPa, maxPa } = CIPM_2007_RANGE;
   const byTemperature = temperatureC < minC || temperatureC > maxC;
-  const outside = parts.air.notes.includes('outside-cipm-2007-range');
+  const outside = parts.air?.notes.includes('outside-cipm-2007-range') === true;
   return check({
     check: 'air-formula',
     verdict: outside ? 'caution' : 'passes',

@@ -8,7 +8,7 @@ import { conditionCheck } from './condition-check';
 import { blockageCheck, machCheck, transitionCheck } from './flow-checks';
 import type { CheckLimits } from './limits';
 import { repeatabilityCheck, yawCoverageCheck, yawPairsCheck } from './reading-checks';
-import { refusedAirSuspicion } from './unit-suspicion';
+import { refusedAir } from './unit-suspicion';
 
 /** What results are checked against. */
 export interface CheckSurroundings {
@@ -30,7 +30,7 @@ export function checksOf(
 ): readonly Check[] {
   return [
     conditionCheck(reduction, context),
-    machCheck(reduction, limits),
+    ...machCheck(reduction, limits),
     ...blockageCheck(reduction, limits),
     ...transitionCheck(reduction, limits),
     ...plausibilityChecks(reduction, limits, bodyShape),
@@ -53,7 +53,7 @@ export function checksOfRefused(
     check({
       check: 'refused',
       verdict: 'excluded',
-      finding: refusedAirSuspicion(code, result.air, limits),
+      ...refusedAir(code, result.air, limits),
       refusal: { code, where, detail },
     }),
   ];

@@ -5,15 +5,18 @@ import { machVerdict } from '../similarity/flow';
 import { check, limit, type Check } from './check';
 import type { CheckLimits } from './limits';
 
-/** The highest Mach number of the points against the limits (method section 4). */
-export function machCheck({ output }: Reduction, limits: CheckLimits): Check {
-  return check({
-    check: 'mach',
-    verdict: machVerdict(output.mach, limits),
-    value: output.mach,
-    limit: limit({ to: limits.machCaution, excludedAbove: limits.machExcluded }),
-    policy: 'machCaution',
-  });
+/** The highest Mach number of the points against the limits (method section 4); nothing where no speed or air is stated. */
+export function machCheck({ output }: Reduction, limits: CheckLimits): Check[] {
+  if (output.mach === null) return [];
+  return [
+    check({
+      check: 'mach',
+      verdict: machVerdict(output.mach, limits),
+      value: output.mach,
+      limit: limit({ to: limits.machCaution, excludedAbove: limits.machExcluded }),
+      policy: 'machCaution',
+    }),
+  ];
 }
 
 /** How much of the section or nozzle the model fills (method section 5); nothing outside tunnels. */
@@ -40,7 +43,7 @@ export function blockageCheck({ parts }: Reduction, limits: CheckLimits): Check[
  * generation or trips, unless a flat sweep that reaches above it has shown that it does not matter (method sections 4 and 6).
  */
 export function transitionCheck({ output, parts }: Reduction, limits: CheckLimits): Check[] {
-  if (parts.scale >= 1) return [];
+  if (parts.scale >= 1 || output.reynolds === null) return [];
   const below = output.reynolds < limits.minimumReynolds;
   const cautioned = output.cautions.includes('transition');
   const tripped = parts.result.turbulenceGenerationOrTrips === true;

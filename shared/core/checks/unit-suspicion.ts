@@ -1,6 +1,6 @@
 import type { AirInput } from '../air/air-input';
 import { AIR_LIMITS, CELSIUS_ZERO_K } from '../constants';
-import type { CheckFinding } from './check';
+import type { Check, CheckFinding } from './check';
 import type { LimitRange } from './limits';
 
 const inside = (value: number, { from, to }: LimitRange): boolean => value >= from && value <= to;
@@ -28,23 +28,34 @@ export function pressureSuspicion(typed: number, usualPa: LimitRange): CheckFind
   return PRESSURE_UNITS.find(([, pascals]) => inside(typed * pascals, usualPa))?.[0] ?? null;
 }
 
-/** Why air was refused, if it is a unit: the codes are those of `airOf`. */
-export function refusedAirSuspicion(
+type SuspectedAir = Partial<Pick<Check, 'value' | 'unit' | 'finding'>>;
+
+const suspected = (value: number, unit: Check['unit'], finding: CheckFinding | null): SuspectedAir => ({
+  value,
+  unit,
+  finding,
+});
+
+/** Which value of the air was refused and what unit it probably has; the codes are those of `airOf`. */
+export function refusedAir(
   code: string,
   air: AirInput | null | undefined,
   usual: { readonly airTemperatureC: LimitRange; readonly airPressurePa: LimitRange },
-): CheckFinding | null {
+): SuspectedAir {
   const { temperatureC, pressurePa, relativeHumidity } = air ?? {};
   if (code === 'temperature-out-of-range' && temperatureC != null) {
     const possible = { from: AIR_LIMITS.minC, to: AIR_LIMITS.maxC };
-    return (
+    const finding =
       temperatureSuspicion(temperatureC, usual.airTemperatureC) ??
-      temperatureSuspicion(temperatureC, possible)
-    );
+      temperatureSuspicion(temperatureC, possible);
+    return suspected(temperatureC, '°C', finding);
   }
   if (code === 'pressure-out-of-range' && pressurePa != null) {
-    return pressureSuspicion(pressurePa, usual.airPressurePa);
+    return suspected(pressurePa, 'Pa', pressureSuspicion(pressurePa, usual.airPressurePa));
   }
-  const isPercent = relativeHumidity != null && relativeHumidity > 1 && relativeHumidity <= 100;
-  return code === 'humidity-out-of-range' && isPercent ? 'percent' : null;
+  if (code === 'humidity-out-of-range' && relativeHumidity != null) {
+    const isPercent = relativeHumidity > 1 && relativeHumidity <= 100;
+    return suspected(relativeHumidity, 'number', isPercent ? 'percent' : null);
+  }
+  return {};
 }

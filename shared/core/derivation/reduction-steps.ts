@@ -2,6 +2,7 @@ import { CELSIUS_ZERO_K, KMH_PER_MS } from '../constants';
 import { correctForBlockage } from '../reduction/blockage';
 import { measuredDragArea, pointFlow } from '../reduction/measured-value';
 import type { ReducedPoint, Reduction, ReductionContext, ResultParts } from '../reduction/reduction';
+import { needed } from '../reduction/result-parts';
 import { fullScaleDragArea } from '../reduction/scale';
 import { differingItems } from '../similarity/condition';
 import type { PointInput, ResultInput } from '../ranking/ranking-input';
@@ -15,7 +16,9 @@ function cautionIf(condition: boolean, words: string): string[] {
   return condition ? [words] : [];
 }
 
+/** None where the result states no air, which only a correlation for Reynolds allows. */
 function airSteps({ result, air }: ResultParts): DerivationStep[] {
+  if (air === null) return [];
   const { state, temperatureC, pressurePa, relativeHumidity } = result.air ?? {};
   const named = state != null && state !== 'custom';
   const density = named
@@ -60,8 +63,8 @@ function pressureStep(parts: ResultParts, point: PointInput): DerivationStep[] {
   const method = flow.dynamicPressureMeasured ? METHODS.measuredDynamicPressure : METHODS.dynamicPressure;
   const values = flow.dynamicPressureMeasured
     ? inValues`q = ${flow.dynamicPressurePa} Pa`
-    : inValues`½ × ${parts.air.densityKgM3} kg/m³ × (${flow.speedMs} m/s)²`;
-  return [stepOf(method, { values, value: flow.dynamicPressurePa, unit: 'Pa' })];
+    : inValues`½ × ${parts.air?.densityKgM3} kg/m³ × (${flow.speedMs} m/s)²`;
+  return [stepOf(method, { values, value: needed(flow.dynamicPressurePa, 'dynamicPressurePa'), unit: 'Pa' })];
 }
 
 function modelStep(parts: ResultParts, point: PointInput): DerivationStep {
@@ -84,7 +87,7 @@ function modelStep(parts: ResultParts, point: PointInput): DerivationStep {
     case 'coastdown-f2':
       return stepOf(METHODS.coastdown, {
         ...outcome,
-        values: inValues`2 × 3.6² × ${point.value} N/(km/h)² / ${air.densityKgM3} kg/m³`,
+        values: inValues`2 × 3.6² × ${point.value} N/(km/h)² / ${air?.densityKgM3} kg/m³`,
         assumed: ['all of f2 is aerodynamic drag'],
       });
     default:
@@ -142,36 +145,39 @@ function fullScaleStep({ scale, result, model }: ResultParts, correctedM2: numbe
   });
 }
 
-function flowStep(reduction: Reduction, context: ReductionContext): DerivationStep {
+function flowStep(reduction: Reduction, context: ReductionContext): DerivationStep[] {
   const { parts, output, zeroYawPoints } = reduction;
-  const { speedMs } = zeroYawPoints[0]?.flow ?? { speedMs: NaN };
+  const speedMs = zeroYawPoints[0]?.flow.speedMs ?? null;
+  const { air } = parts;
+  if (speedMs === null || air === null || output.reynolds === null) return [];
   const { characteristicLengthM } = context.programme;
   const differing = differingItems(context.referenceCondition, parts.result.condition);
-  return stepOf(METHODS.flow, {
-    values: joined(
-      [
-        inValues`U = ${speedMs} m/s (${speedMs * KMH_PER_MS} km/h), L = ${characteristicLengthM} m`,
-        inValues`s = ${parts.scale}, ν_k = ${parts.air.kinematicViscosityM2S} m²/s`,
-        inValues`M = ${output.mach} (highest), Re_ref = ${context.referenceReynolds}`,
+  return [
+    stepOf(METHODS.flow, {
+      values: joined(
+        [
+          inValues`U = ${speedMs} m/s (${speedMs * KMH_PER_MS} km/h), L = ${characteristicLengthM} m`,
+          inValues`s = ${parts.scale}, ν_k = ${air.kinematicViscosityM2S} m²/s`,
+          inValues`M = ${output.mach} (highest), Re_ref = ${context.referenceReynolds}`,
+        ],
+        ', ',
+      ),
+      value: output.reynolds,
+      unit: '',
+      cautions: [
+        ...cautionIf(
+          output.cautions.includes('mach'),
+          'compressibility: the Mach number is above the caution limit',
+        ),
+        ...cautionIf(output.cautions.includes('transition'), 'transition may sit in the wrong place'),
+        ...cautionIf(output.excludedBy.includes('mach'), 'excluded: the Mach number is above its limit'),
+        ...cautionIf(
+          differing.length > 0,
+          `not comparable: ${differing.join(', ')} differ from the reference condition`,
+        ),
       ],
-      ', ',
-    ),
-    value: output.reynolds,
-    unit: '',
-    assumed: ['the drag area is that at the reference Reynolds number: no correction between them'],
-    cautions: [
-      ...cautionIf(
-        output.cautions.includes('mach'),
-        'compressibility: the Mach number is above the caution limit',
-      ),
-      ...cautionIf(output.cautions.includes('transition'), 'transition may sit in the wrong place'),
-      ...cautionIf(output.excludedBy.includes('mach'), 'excluded: the Mach number is above its limit'),
-      ...cautionIf(
-        differing.length > 0,
-        `not comparable: ${differing.join(', ')} differ from the reference condition`,
-      ),
-    ],
-  });
+    }),
+  ];
 }
 
 function meanStep(points: readonly ReducedPoint[]): DerivationStep[] {
@@ -201,7 +207,7 @@ export function zeroYawSteps(reduction: Reduction, context: ReductionContext): D
     ...airSteps(parts),
     ...tareStep(point, parts.result, zeroYawPoints[0]?.netForceN ?? NaN),
     ...pressureStep(parts, point),
-    flowStep(reduction, context),
+    ...flowStep(reduction, context),
     model,
     ...blockage,
     fullScaleStep(parts, (blockage.at(-1) ?? model).value),

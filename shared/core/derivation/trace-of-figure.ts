@@ -1,5 +1,4 @@
 import type { Basis, RankingInput } from '../ranking/ranking-input';
-import { checkAvailability } from '../reduction/not-available';
 import { reduceResult } from '../reduction/reduce-result';
 import type { Reduction, ReductionContext } from '../reduction/reduction';
 import { reductionContextOf } from '../reduction/reduction-context';
@@ -106,7 +105,6 @@ export function traceOfReduction(
  */
 export function traceOfFigure(input: RankingInput, resultId: string, basis: Basis): Derivation {
   const context = reductionContextOf(input);
-  checkAvailability(input);
   const result =
     input.results.find(({ id }) => id === resultId) ??
     refuse('unknown-result', resultId, `There is no result “${resultId}”.`);

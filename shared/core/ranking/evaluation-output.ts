@@ -1,16 +1,5 @@
 import type { Figure } from '../uncertainty/figure';
-import type { ReductionStep } from './ranking-output';
-
-/** How several results were combined (method section 10). */
-export interface EvaluatedCombination {
-  /** In the order of the used results. */
-  readonly weights: readonly number[];
-  readonly chiSquared: number;
-  /** Null for one result. */
-  readonly birgeRatio: number | null;
-  readonly betweenResultsVarianceM4: number;
-  readonly randomEffectsMeanM2: number;
-}
+import type { RankedCombination, ReductionStep } from './ranking-output';
 
 /** One result of an evaluation at the reference. */
 export interface EvaluatedResult {
@@ -32,7 +21,7 @@ export interface EvaluationOutput {
   /** Of the zero-yaw figure, oldest first. */
   readonly usedResultIds: readonly string[];
   /** Of the zero-yaw figure of a weighted mean, else null. */
-  readonly combination: EvaluatedCombination | null;
+  readonly combination: RankedCombination | null;
   /** By result id. */
   readonly results: readonly EvaluatedResult[];
   readonly excluded: readonly { readonly resultId: string; readonly rules: readonly string[] }[];

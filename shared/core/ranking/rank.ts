@@ -25,7 +25,7 @@ export function confidenceOf(programme: ProgrammeInput): number {
  * The operation `rank`: everything at once. A screen calls the parts by themselves and keeps what has not changed:
  * `reduceResults` → `pickEvidence` → `byDragArea`, `rankedVariants`, `inseparableGroups` → `rankByEnergy`, `sampleLowest`.
  *
- * @throws {Refused} the codes that refuse the whole: not-available, duplicate-id, confidence-out-of-range, not-positive, those
+ * @throws {Refused} the codes that refuse the whole: duplicate-id, confidence-out-of-range, not-positive, those
  *   of the programme's air and of the cycle, uncertainty-zero (weighted mean), missing-input (mass or rolling resistance)
  */
 export function evaluateRank(input: RankingInput, builtIn: BuiltInCycles): RankOutput {

@@ -33,10 +33,10 @@ export type ExclusionRule = 'mach' | 'blockage' | 'not-comparable';
 export interface ReducedResult {
   readonly resultId: string;
   readonly variantId: string;
-  /** Of the zero-yaw point, on the programme's characteristic length. */
-  readonly reynolds: number;
-  /** The highest of the result's points. */
-  readonly mach: number;
+  /** Of the zero-yaw point, the lowest of an own sweep, on the programme's characteristic length; null: no air or speed stated. */
+  readonly reynolds: number | null;
+  /** The highest of the result's points; null: no air or speed stated, which only a correlation for Reynolds allows. */
+  readonly mach: number | null;
   /** Null outside tunnels. */
   readonly blockageRatio: number | null;
   /** Of the first zero-yaw point of a force result, else null [Pa]. */

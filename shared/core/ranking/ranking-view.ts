@@ -1,8 +1,8 @@
 import type { AirInput } from '../air/air-input';
 import type { Contribution } from '../uncertainty/figure';
 import type { EvidenceBasis, RankingOrder } from './ranking-choices';
-import type { Basis, FacilityKind } from './ranking-input';
-import type { ReductionCaution, ReductionStepName } from './ranking-output';
+import type { Basis, EvidenceRule, FacilityKind } from './ranking-input';
+import type { RankedCombination, ReductionCaution, ReductionStepName } from './ranking-output';
 
 /** A drag area [m²] with its uncertainty. */
 export interface ViewFigure {
@@ -85,6 +85,10 @@ export interface ViewRow {
   /** P(this one is lower than the next in the order); null for the last. */
   readonly probabilityLowerThanNext: number | null;
   readonly evidence: readonly ViewEvidence[];
+  /** How the figure is formed from them. */
+  readonly rule: EvidenceRule;
+  /** How they agree, in their order; null for the newest result. */
+  readonly combination: RankedCombination | null;
   /** A usable result that is newer than the adopted one in use. */
   readonly newer: ViewEvidence | null;
   /** Null: the result states no air or speed. */

@@ -18,27 +18,35 @@ export function biasKey(facility: FacilityInput): string {
   return facility.kind === 'simulation' ? `simulation-bias:${facility.id}` : `facility-bias:${facility.id}`;
 }
 
-function biasAmount({ facility }: ResultParts, dragAreaM2: number): number {
+/** The bias of a facility at a drag area [m²]. */
+export function biasAmountOf(facility: FacilityInput, dragAreaM2: number): number {
   return typed(facility.biasURelative, facility.biasUM2, dragAreaM2);
 }
 
 /**
  * A source's own U/k stands for repeatability, installation and session; if the facility's bias is in it, the bias keeps its
  * key and the stated amount is √(u² − u_bias²), 0 if that is negative (method section 9). Of several zero-yaw points each has
- * its own amount, at its own drag area; like every other key theirs is their mean.
+ * its own amount, at its own drag area; like every other key theirs are weighed as the figure weighs the points.
  */
-function statedAmount(parts: ResultParts, points: readonly ReducedPoint[]): Amount[] {
+function statedAmount(
+  parts: ResultParts,
+  points: readonly ReducedPoint[],
+  weights: readonly number[] | null,
+): Amount[] {
   const { result } = parts;
   const { stated } = result;
   if (stated == null) return [];
   const uValue = needed(stated.expandedU, 'stated.expandedU') / neededPositive(stated.k, 'stated.k');
   const ownAmounts = points.map(({ perValue, dragAreaM2 }) => {
     const u = uValue * perValue;
-    const bias = stated.includesFacilityBias ? biasAmount(parts, dragAreaM2) : 0;
+    const bias = stated.includesFacilityBias ? biasAmountOf(parts.facility, dragAreaM2) : 0;
     return Math.sqrt(Math.max(0, u * u - bias * bias));
   });
-  const mean = ownAmounts.reduce((sum, own) => sum + own, 0) / points.length;
-  return [amount(`stated:${result.id}`, mean, stated.degreesOfFreedom)];
+  const held =
+    weights === null
+      ? ownAmounts.reduce((sum, own) => sum + own, 0) / points.length
+      : ownAmounts.reduce((sum, own, i) => sum + own * (weights[i] ?? NaN), 0);
+  return [amount(`stated:${result.id}`, held, stated.degreesOfFreedom)];
 }
 
 /**
@@ -89,14 +97,18 @@ function sessionAndInstallation({ result, facility }: ResultParts, dragAreaM2: n
  * What comes with the facility and the reading rather than with a correction, at the full-scale drag area [m²] of the
  * zero-yaw points.
  *
+ * @param weights how much of each point the figure of an own sweep holds; the sweep's own scatter stands for the repeatability.
+ *   Null: their mean.
  * @throws {Refused} missing-input
  */
 export function facilityAmounts(
   parts: ResultParts,
   points: readonly ReducedPoint[],
   dragAreaM2: number,
+  weights: readonly number[] | null = null,
 ): Amount[] {
-  const bias = amount(biasKey(parts.facility), biasAmount(parts, dragAreaM2));
-  if (parts.result.stated != null) return [bias, ...statedAmount(parts, points)];
-  return [bias, repeatabilityAmount(parts, points), ...sessionAndInstallation(parts, dragAreaM2)];
+  const bias = amount(biasKey(parts.facility), biasAmountOf(parts.facility, dragAreaM2));
+  if (parts.result.stated != null) return [bias, ...statedAmount(parts, points, weights)];
+  const places = sessionAndInstallation(parts, dragAreaM2);
+  return weights === null ? [bias, repeatabilityAmount(parts, points), ...places] : [bias, ...places];
 }

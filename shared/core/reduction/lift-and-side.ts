@@ -2,14 +2,14 @@ import type { LiftAndSide } from '../ranking/ranking-output';
 import type { PointInput } from '../ranking/ranking-input';
 import { quotedAreaAtModelScale } from './measured-value';
 import type { PointFlow, ReducedPoint, ResultParts } from './reduction';
-import { quantityOf } from './result-parts';
+import { needed, quantityOf } from './result-parts';
 import { fullScaleDragArea } from './scale';
 
 /** Full-scale area per unit of a lift or side-force value; null where the quantity has none (coastdown). */
 function areaPerValue(parts: ResultParts, flow: PointFlow): number | null {
   switch (quantityOf(parts.result)) {
     case 'force':
-      return fullScaleDragArea(1 / flow.dynamicPressurePa, parts.scale);
+      return fullScaleDragArea(1 / needed(flow.dynamicPressurePa, 'dynamicPressurePa'), parts.scale);
     case 'coefficient':
       return fullScaleDragArea(quotedAreaAtModelScale(parts), parts.scale);
     case 'drag-area':

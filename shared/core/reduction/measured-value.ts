@@ -20,26 +20,28 @@ const givenPositive = (value: number | null | undefined, where: string): number 
 
 /**
  * Speed and dynamic pressure of a point; its own go before the result's. q is the facility's measured one where given, else
- * ½ρU²; where q is measured and U is not, U = √(2q/ρ) (method section 2).
+ * ½ρU²; where q is measured and U is not, U = √(2q/ρ) (method section 2). Neither is needed where the correlation replaces
+ * Reynolds.
  *
  * @throws {Refused} missing-input (neither), not-positive
  */
-export function pointFlow(point: PointInput, { result, air }: ResultParts): PointFlow {
+export function pointFlow(point: PointInput, { result, air, replaced }: ResultParts): PointFlow {
   const speedKmh = givenPositive(point.speedKmh ?? result.speedKmh, 'speedKmh');
   const measuredPa = givenPositive(point.dynamicPressurePa ?? result.dynamicPressurePa, 'dynamicPressurePa');
   if (speedKmh !== null) {
     const speedMs = speedKmh / KMH_PER_MS;
     return {
       speedMs,
-      dynamicPressurePa: measuredPa ?? dynamicPressureOf(speedMs, air.densityKgM3),
+      dynamicPressurePa: measuredPa ?? (air === null ? null : dynamicPressureOf(speedMs, air.densityKgM3)),
       dynamicPressureMeasured: measuredPa !== null,
     };
   }
   if (measuredPa === null) {
+    if (replaced.reynolds) return { speedMs: null, dynamicPressurePa: null, dynamicPressureMeasured: false };
     refuse('missing-input', 'speedKmh', 'Neither a speed nor a dynamic pressure is given.');
   }
   return {
-    speedMs: speedOfDynamicPressure(measuredPa, air.densityKgM3),
+    speedMs: air === null ? null : speedOfDynamicPressure(measuredPa, air.densityKgM3),
     dynamicPressurePa: measuredPa,
     dynamicPressureMeasured: true,
   };
@@ -62,8 +64,8 @@ function measured(value: number, point: PointInput, parts: ResultParts, flow: Po
   switch (quantityOf(result)) {
     case 'force': {
       const netForceN = netForce(value, point, result);
-      const perValue = 1 / flow.dynamicPressurePa;
-      return { modelDragAreaM2: netForceN / flow.dynamicPressurePa, perValue, netForceN };
+      const pressurePa = needed(flow.dynamicPressurePa, 'dynamicPressurePa');
+      return { modelDragAreaM2: netForceN / pressurePa, perValue: 1 / pressurePa, netForceN };
     }
     case 'coefficient': {
       const areaM2 = quotedAreaAtModelScale(parts);
@@ -72,9 +74,10 @@ function measured(value: number, point: PointInput, parts: ResultParts, flow: Po
     case 'drag-area':
       return { modelDragAreaM2: value * scale * scale, perValue: scale * scale, netForceN: null };
     case 'coastdown-f2': {
-      const perValue = dragAreaOfF2(1, air.densityKgM3) * scale * scale;
+      const { densityKgM3 } = needed(air, 'air');
+      const perValue = dragAreaOfF2(1, densityKgM3) * scale * scale;
       return {
-        modelDragAreaM2: dragAreaOfF2(value, air.densityKgM3) * scale * scale,
+        modelDragAreaM2: dragAreaOfF2(value, densityKgM3) * scale * scale,
         perValue,
         netForceN: null,
       };

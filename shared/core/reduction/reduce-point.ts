@@ -13,12 +13,14 @@ import { repeatabilityOf } from './repeatability';
 import { needed } from './result-parts';
 import { asBuiltScaleAmount, fullScaleDragArea } from './scale';
 
-const alreadyCorrected = ({ result }: ResultParts): boolean => result.blockageAlreadyCorrectedBy != null;
+/** The source has corrected, or the correlation stands for the correction. */
+const notCorrectedHere = ({ result, replaced }: ResultParts): boolean =>
+  result.blockageAlreadyCorrectedBy != null || replaced.blockage;
 
-/** The blockage step of a point; outside tunnels and where the source has corrected already there is none. */
+/** The blockage step of a point; outside tunnels, where the source has corrected or a correlation replaces it there is none. */
 function blockageStep(modelDragAreaM2: number, parts: ResultParts): BlockageCorrection {
   const { tunnel, facility } = parts;
-  if (tunnel === null || alreadyCorrected(parts)) return { modelDragAreaM2, derivative: 1 };
+  if (tunnel === null || notCorrectedHere(parts)) return { modelDragAreaM2, derivative: 1 };
   const method = needed(facility.blockage, 'facility.blockage');
   return correctForBlockage(method, modelDragAreaM2, tunnel.blockageRatio, tunnel.areaM2);
 }
@@ -32,7 +34,7 @@ function statedAreaAmount({ result }: ResultParts, uncorrectedM2: number, deriva
 
 function blockageAmounts(parts: ResultParts, uncorrectedM2: number, correctedM2: number): Amount[] {
   const { tunnel, facility, variant, scale } = parts;
-  if (tunnel === null || alreadyCorrected(parts)) return [];
+  if (tunnel === null || notCorrectedHere(parts)) return [];
   const method = needed(facility.blockage, 'facility.blockage');
   const throughArea = frontalAreaThroughBlockage(
     method,
@@ -81,13 +83,17 @@ export function reducePoint(point: PointInput, parts: ResultParts, context: Redu
   const dragAreaM2 = fullScaleDragArea(blockage.modelDragAreaM2, scale);
   const perValue = fullScaleDragArea(measuredArea.perValue, scale) * blockage.derivative;
   const { characteristicLengthM } = context.programme;
+  const known = air === null || flow.speedMs === null ? null : { air, speedMs: flow.speedMs };
   return {
     yawDeg: point.yawDeg ?? 0,
     value: needed(point.value, 'points.value'),
     netForceN: measuredArea.netForceN,
     flow,
-    mach: machNumber(flow.speedMs, air.speedOfSoundMs),
-    reynolds: reynoldsNumber(flow.speedMs, characteristicLengthM, scale, air.kinematicViscosityM2S),
+    mach: known === null ? null : machNumber(known.speedMs, known.air.speedOfSoundMs),
+    reynolds:
+      known === null
+        ? null
+        : reynoldsNumber(known.speedMs, characteristicLengthM, scale, known.air.kinematicViscosityM2S),
     modelDragAreaM2: measuredArea.modelDragAreaM2,
     blockage,
     uncorrectedDragAreaM2: fullScaleDragArea(measuredArea.modelDragAreaM2, scale),
@@ -98,7 +104,9 @@ export function reducePoint(point: PointInput, parts: ResultParts, context: Redu
   };
 }
 
-/** Mean of several points by key: every amount over their number. */
-export function meanAmounts(points: readonly ReducedPoint[]): Amount[] {
-  return points.flatMap((point) => scaled(point.amounts, 1 / points.length));
+/** Several points by key: every amount times its point's weight; null: their mean. */
+export function weighedAmounts(points: readonly ReducedPoint[], weights: readonly number[] | null): Amount[] {
+  return points.flatMap((point, i) =>
+    scaled(point.amounts, weights === null ? 1 / points.length : (weights[i] ?? NaN)),
+  );
 }

@@ -1,17 +1,16 @@
-import type { ExclusionRule, LiftAndSide, ReducedResult, ReductionCaution } from '../ranking/ranking-output';
+import type { LiftAndSide, ReducedResult, ReductionStep } from '../ranking/ranking-output';
 import type { PointInput, ResultInput } from '../ranking/ranking-input';
 import { refuse } from '../refusal';
-import { differingItems } from '../similarity/condition';
-import { machVerdict } from '../similarity/flow';
-import { budgetOf, figureOf, standardUncertainty, type KeyedFigure } from '../uncertainty/budget';
-import { blockageVerdict } from './blockage';
-import { facilityAmounts } from './facility-amounts';
+import { figureOf, standardUncertainty } from '../uncertainty/budget';
 import { liftAndSideOf } from './lift-and-side';
-import { meanAmounts, reducePoint } from './reduce-point';
+import { reducePoint } from './reduce-point';
 import type { ReducedPoint, Reduction, ReductionContext, ResultParts, WindAverage } from './reduction';
-import { isTunnel, needed, resultPartsOf } from './result-parts';
+import { needed, resultPartsOf } from './result-parts';
 import { sameSpeed, windAverageOf } from './result-wind-average';
+import { restsOnOwnSweep } from './reynolds-step';
+import { verdictsOf } from './verdicts';
 import { isZeroYaw } from './yaw/yaw-points';
+import { referenceFigureOf, type ReferenceFigure } from './zero-yaw-figure';
 
 function pointsOf(result: ResultInput): readonly PointInput[] {
   const points = needed(result.points, 'points');
@@ -19,84 +18,67 @@ function pointsOf(result: ResultInput): readonly PointInput[] {
   return points;
 }
 
-function zeroYawPointsOf(points: readonly ReducedPoint[]): readonly [ReducedPoint, ...ReducedPoint[]] {
+type ZeroYawPoints = readonly [ReducedPoint, ...ReducedPoint[]];
+
+function zeroYawPointsOf(points: readonly ReducedPoint[], parts: ResultParts): ZeroYawPoints {
   const [first, ...rest] = points.filter((point) => isZeroYaw(point.yawDeg));
   if (first === undefined) refuse('yaw-no-zero', 'points', 'There is no point at zero yaw.');
-  if (rest.some((point) => !sameSpeed(point, first))) {
+  if (!restsOnOwnSweep(parts) && rest.some((point) => !sameSpeed(point, first))) {
     refuse('zero-yaw-mixed-speeds', 'points', 'The zero-yaw points were taken at several speeds.');
   }
   return [first, ...rest];
 }
 
-function zeroYawFigure(parts: ResultParts, points: readonly ReducedPoint[]): KeyedFigure {
-  const dragAreaM2 = points.reduce((sum, point) => sum + point.dragAreaM2, 0) / points.length;
-  return {
-    dragAreaM2,
-    budget: budgetOf([...meanAmounts(points), ...facilityAmounts(parts, points, dragAreaM2)]),
-  };
+/** The drag area after each step that is listed; a later step that does not apply is not. */
+function stepsOf(reference: ReferenceFigure): ReductionStep[] {
+  const { fullScaleM2, afterReynoldsM2, afterConditionM2, correlation } = reference;
+  const steps: ReductionStep[] = [{ step: 'full-scale-drag-area', dragAreaM2: fullScaleM2 }];
+  if (afterReynoldsM2 !== null) steps.push({ step: 'reynolds', dragAreaM2: afterReynoldsM2 });
+  if (afterConditionM2 !== null) steps.push({ step: 'condition-adjustments', dragAreaM2: afterConditionM2 });
+  if (correlation !== null) steps.push({ step: 'facility-correlation', dragAreaM2: correlation.dragAreaM2 });
+  return steps;
 }
 
-interface Verdicts {
-  readonly cautions: readonly ReductionCaution[];
-  readonly excludedBy: readonly ExclusionRule[];
-}
-
-function verdictsOf(
-  parts: ResultParts,
-  mach: number,
-  reynolds: number,
-  windAverage: WindAverage,
-  context: ReductionContext,
-): Verdicts {
-  const { result, facility, tunnel, scale, air } = parts;
-  const { policies } = context;
-  const cautions = new Set<ReductionCaution>([...air.notes, ...(windAverage.yaw?.cautions ?? [])]);
-  const excludedBy: ExclusionRule[] = [];
-  const byMach = machVerdict(mach, policies);
-  if (byMach === 'caution') cautions.add('mach');
-  if (byMach === 'excluded') excludedBy.push('mach');
-  if (tunnel !== null && isTunnel(facility.kind)) {
-    const byBlockage = blockageVerdict(facility.kind, tunnel.blockageRatio, policies);
-    if (byBlockage === 'caution') cautions.add('blockage');
-    if (byBlockage === 'excluded') excludedBy.push('blockage');
+/** The highest Mach number of the points; null where none is known. */
+function highestMach(points: readonly ReducedPoint[]): number | null {
+  let highest: number | null = null;
+  for (const { mach } of points) {
+    if (mach !== null && (highest === null || mach > highest)) highest = mach;
   }
-  if (scale < 1 && reynolds < policies.minimumReynolds && result.turbulenceGenerationOrTrips !== true) {
-    cautions.add('transition');
-  }
-  if (differingItems(context.referenceCondition, result.condition).length > 0)
-    excludedBy.push('not-comparable');
-  return { cautions: [...cautions].sort(), excludedBy };
+  return highest;
 }
 
 function outputOf(
   parts: ResultParts,
   points: readonly ReducedPoint[],
   first: ReducedPoint,
-  zeroYaw: KeyedFigure,
+  reference: ReferenceFigure,
   windAverage: WindAverage,
   liftAndSide: readonly LiftAndSide[],
   context: ReductionContext,
 ): ReducedResult {
   const { result, tunnel } = parts;
-  const mach = Math.max(...points.map((point) => point.mach));
+  const mach = highestMach(points);
+  const { reynolds: reynoldsStep, condition } = reference;
+  const reynolds = reynoldsStep.kind === 'own-sweep' ? reynoldsStep.fit.lowestReynolds : first.reynolds;
   return {
     resultId: result.id,
     variantId: result.variantId,
-    reynolds: first.reynolds,
+    reynolds,
     mach,
     blockageRatio: tunnel?.blockageRatio ?? null,
     dynamicPressurePa: result.quantity === 'force' ? first.flow.dynamicPressurePa : null,
     modelDragAreaM2: first.modelDragAreaM2,
     blockageCorrectedModelDragAreaM2: first.blockage.modelDragAreaM2,
-    steps: [{ step: 'full-scale-drag-area', dragAreaM2: zeroYaw.dragAreaM2 }],
+    steps: stepsOf(reference),
     yawRatio: windAverage.yaw?.yawRatio ?? null,
-    zeroYaw: figureOf(zeroYaw),
+    zeroYaw: figureOf(reference.figure),
     windAveragedDragAreaM2: windAverage.figure?.dragAreaM2 ?? null,
     windAveragedStandardUncertaintyM2:
       windAverage.figure === null ? null : standardUncertainty(windAverage.figure.budget),
     windAveragedRefusal: windAverage.refusal,
     liftAndSide,
-    ...verdictsOf(parts, mach, first.reynolds, windAverage, context),
+    ...verdictsOf({ parts, mach, reynolds, reynoldsStep, condition, windAverage }, context),
   };
 }
 
@@ -109,16 +91,20 @@ export function reduceResult(result: ResultInput, context: ReductionContext): Re
   const parts = resultPartsOf(result, context);
   const given = pointsOf(result);
   const points = given.map((point) => reducePoint(point, parts, context));
-  const zeroYawPoints = zeroYawPointsOf(points);
-  const zeroYaw = zeroYawFigure(parts, zeroYawPoints);
-  const windAverage = windAverageOf(parts, points, zeroYaw, context);
+  const zeroYawPoints = zeroYawPointsOf(points, parts);
+  const reference = referenceFigureOf(parts, zeroYawPoints, context);
+  const windAverage = windAverageOf(parts, points, reference.figure, context);
   const liftAndSide = liftAndSideOf(given, points, parts);
   return {
     parts,
     points,
     zeroYawPoints,
-    zeroYaw,
+    fullScaleM2: reference.fullScaleM2,
+    reynolds: reference.reynolds,
+    condition: reference.condition,
+    correlation: reference.correlation,
+    zeroYaw: reference.figure,
     windAverage,
-    output: outputOf(parts, points, zeroYawPoints[0], zeroYaw, windAverage, liftAndSide, context),
+    output: outputOf(parts, points, zeroYawPoints[0], reference, windAverage, liftAndSide, context),
   };
 }

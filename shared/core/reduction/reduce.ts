@@ -2,7 +2,6 @@ import type { Basis, RankingInput } from '../ranking/ranking-input';
 import type { ExcludedResult, ReduceOutput } from '../ranking/ranking-output';
 import { Refused, type Refusal } from '../refusal';
 import { byCodeUnits } from '../text-order';
-import { checkAvailability } from './not-available';
 import { reduceResult } from './reduce-result';
 import type { Reduction, ReductionContext } from './reduction';
 import { reductionContextOf } from './reduction-context';
@@ -24,11 +23,10 @@ export interface ReducedSet {
 /**
  * Reduces every result; what refuses one result leaves the others.
  *
- * @throws {Refused} not-available, duplicate-id, and the codes of the programme's air
+ * @throws {Refused} duplicate-id, missing-input (of an adjustment), and the codes of the programme's air
  */
 export function reduceResults(input: RankingInput): ReducedSet {
   const context = reductionContextOf(input);
-  checkAvailability(input);
   const reductions: Reduction[] = [];
   const refused: RefusedResult[] = [];
   for (const result of input.results) {

@@ -11,7 +11,7 @@ import {
 } from '../ranking/ranking-input';
 import { refuse } from '../refusal';
 import { blockageRatio } from './blockage';
-import type { ReductionContext, ResultParts, TunnelParts } from './reduction';
+import type { ReductionContext, ReplacedSteps, ResultParts, TunnelParts } from './reduction';
 import { checkScale } from './scale';
 
 /** @throws {Refused} missing-input where there is nothing */
@@ -51,9 +51,13 @@ function tunnelOf(facility: FacilityInput, variant: VariantInput, scale: number)
   return { areaM2, blockageRatio: blockageRatio(scale, variant.frontalAreaM2, areaM2) };
 }
 
-function resultAir(result: ResultInput): Air {
+/** Air is needed for the Reynolds number above all; where a correlation stands for that, it may be unknown. */
+function resultAir(result: ResultInput, replaced: ReplacedSteps): Air | null {
+  if (result.air == null && replaced.reynolds) return null;
   return airOf(needed(result.air, 'air'), 'air');
 }
+
+const NOTHING_REPLACED: ReplacedSteps = { blockage: false, reynolds: false, groundSimulation: false };
 
 /**
  * Finds what a result names and checks what it must state.
@@ -69,6 +73,8 @@ export function resultPartsOf(result: ResultInput, context: ReductionContext): R
     context.facilities.get(result.facilityId) ??
     refuse('unknown-facility', 'facilityId', `There is no facility “${result.facilityId}”.`);
   const model = modelOf(result, context);
+  const correlation = context.correlations.get(facility.id) ?? null;
+  const replaced = correlation?.replaces ?? NOTHING_REPLACED;
   needed(result.testDate, 'testDate');
   quantityOf(result);
   const scale = needed(result.scale, 'scale');
@@ -78,7 +84,9 @@ export function resultPartsOf(result: ResultInput, context: ReductionContext): R
     variant,
     facility,
     model,
-    air: resultAir(result),
+    air: resultAir(result, replaced),
+    correlation,
+    replaced,
     scale,
     tunnel: tunnelOf(facility, variant, scale),
   };

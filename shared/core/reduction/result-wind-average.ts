@@ -7,7 +7,9 @@ import { isZeroYaw, type YawPoint } from './yaw/yaw-points';
 
 /** Two speeds are one when they differ by no more than rounding. */
 export function sameSpeed(a: ReducedPoint, b: ReducedPoint): boolean {
-  return Math.abs(a.flow.speedMs - b.flow.speedMs) <= SPEED_TOLERANCE * b.flow.speedMs;
+  const [speedA, speedB] = [a.flow.speedMs, b.flow.speedMs];
+  if (speedA === null || speedB === null) return speedA === speedB;
+  return Math.abs(speedA - speedB) <= SPEED_TOLERANCE * speedB;
 }
 
 /**

@@ -33,6 +33,8 @@ export interface SweepFit {
   readonly levelUncertaintyM2: number;
   /** ν = n − 2. */
   readonly degreesOfFreedom: number;
+  readonly lowestFriction: number;
+  readonly highestFriction: number;
   readonly lowestReynolds: number;
   readonly highestReynolds: number;
 }
@@ -89,6 +91,8 @@ export function fitSweep(points: readonly SweepPoint[], where = 'points'): Sweep
     slopeUncertaintyM2: residualStandardDeviationM2 / Math.sqrt(frictionSquares),
     levelUncertaintyM2: residualStandardDeviationM2 / Math.sqrt(n),
     degreesOfFreedom: n - 2,
+    lowestFriction: Math.min(...friction),
+    highestFriction: Math.max(...friction),
     lowestReynolds,
     highestReynolds,
   };
@@ -101,10 +105,9 @@ export function fitSweep(points: readonly SweepPoint[], where = 'points'): Sweep
  */
 export function frictionWithin(fit: SweepFit, reynolds: number, where: string): number {
   const friction = skinFriction(reynolds, where);
-  const lowest = skinFriction(fit.highestReynolds);
-  const highest = skinFriction(fit.lowestReynolds);
-  const span = highest - lowest;
-  if (friction < lowest - span || friction > highest + span) {
+  const { lowestFriction, highestFriction } = fit;
+  const span = highestFriction - lowestFriction;
+  if (friction < lowestFriction - span || friction > highestFriction + span) {
     refuse(
       'sweep-extrapolation',
       where,

@@ -98,7 +98,7 @@ function cautionOf(caution: ReductionCaution, output: ReducedResult): readonly M
         {
           code: 'mach',
           field: 'speed',
-          detail: `Mach number ${digits(output.mach)}: compressibility begins to show.`,
+          detail: `Mach number ${digits(output.mach ?? NaN)}: compressibility begins to show.`,
         },
       ];
     case 'blockage':
@@ -114,7 +114,7 @@ function cautionOf(caution: ReductionCaution, output: ReducedResult): readonly M
         {
           code: 'transition',
           field: 'speed',
-          detail: `Reynolds number ${output.reynolds.toExponential(1)} is low for a model: transition may sit in the wrong place.`,
+          detail: `Reynolds number ${output.reynolds?.toExponential(1) ?? ''} is low for a model: transition may sit in the wrong place.`,
         },
       ];
     case 'outside-cipm-2007-range':
@@ -151,7 +151,7 @@ function exclusionOf(
       return {
         code: 'stays-out:mach',
         field: 'speed',
-        detail: `${staysOut} Mach number ${digits(output.mach)} is above ${String(reference.policies.machExcluded)}.`,
+        detail: `${staysOut} Mach number ${digits(output.mach ?? NaN)} is above ${String(reference.policies.machExcluded)}.`,
       };
     case 'blockage':
       return {

@@ -1,6 +1,7 @@
 import { Injectable, inject } from '@angular/core';
 import { type Observable, map } from 'rxjs';
 import {
+  importChooseSheet,
   importConfirm,
   importDiscard,
   importFixRows,
@@ -45,6 +46,14 @@ export class ImportsApi {
 
   upload(programmeId: string, file: File): Observable<ImportDetail> {
     return this.api.call(importUpload, { params: { programmeId }, file });
+  }
+
+  chooseSheet(known: Known, sheet: number): Observable<ImportDetail> {
+    return this.api.call(importChooseSheet, {
+      params: paramsOf(known),
+      body: { sheet },
+      ifMatch: known.version,
+    });
   }
 
   map(known: Known, body: ImportMapping): Observable<ImportDetail> {

@@ -20,7 +20,7 @@ import {
   withUnit,
 } from './column-draft';
 import { ImportInView } from './import-in-view';
-import { DATE_ORDER_WORDS, DECIMAL_WORDS, FIELD_WORDS } from './import-words';
+import { DATE_ORDER_WORDS, DECIMAL_WORDS, FIELD_WORDS, sheetWords } from './import-words';
 
 /** Which column holds what, in which unit, and what holds for all rows. */
 @Component({
@@ -63,6 +63,18 @@ export class ColumnsStep {
   protected readonly issues = computed(
     () => new Map(this.view.problem()?.issues.map(({ where, detail }) => [where, detail]) ?? []),
   );
+
+  protected readonly sheets = computed(() =>
+    (this.detail().sheets ?? []).map((sheet, place) => ({
+      place,
+      hasTable: sheet.hasTable,
+      words: sheetWords(sheet),
+    })),
+  );
+
+  protected async chooseSheet(place: string): Promise<void> {
+    if (!this.view.busy()) await this.view.chooseSheet(Number(place));
+  }
 
   protected unitsOf(field: ImportField | ''): readonly string[] {
     return field === '' ? [] : (importFieldRule(field).units?.map(({ unit }) => unit) ?? []);

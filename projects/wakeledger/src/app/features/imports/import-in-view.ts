@@ -35,6 +35,10 @@ export class ImportInView {
     await this.settle(() => this.api.read(programmeId, importId));
   }
 
+  async chooseSheet(sheet: number): Promise<boolean> {
+    return this.attempt((known) => this.api.chooseSheet(known, sheet));
+  }
+
   async map(mapping: ImportMapping): Promise<boolean> {
     return this.attempt((known) => this.api.map(known, mapping));
   }

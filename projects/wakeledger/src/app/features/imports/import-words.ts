@@ -1,5 +1,5 @@
 import type { ImportField } from '#shared/contracts/import-fields';
-import type { DATE_ORDERS, DECIMALS, ENCODINGS, ImportState, Verdict } from '#shared/contracts/imports';
+import type { DATE_ORDERS, DECIMALS, ImportDetail, ImportState, Verdict } from '#shared/contracts/imports';
 
 export const FIELD_WORDS: Readonly<Record<ImportField, string>> = {
   name: $localize`Name of the result`,
@@ -95,9 +95,12 @@ export const DATE_ORDER_WORDS: Readonly<Record<(typeof DATE_ORDERS)[number], str
   'month-day-year': $localize`month, day, year (05/04/2026)`,
 };
 
-export const ENCODING_WORDS: Readonly<Record<(typeof ENCODINGS)[number], string>> = {
-  'utf-8': 'UTF-8',
-  'utf-16le': 'UTF-16',
-  'utf-16be': 'UTF-16',
-  'windows-1252': 'Windows-1252',
-};
+type Sheet = NonNullable<ImportDetail['sheets']>[number];
+
+/** A sheet of a workbook, with what helps to choose it. */
+export function sheetWords({ name, filledRows, hasTable, hidden }: Sheet): string {
+  if (!hasTable) return $localize`${name}:NAME: (no table)`;
+  return hidden
+    ? $localize`${name}:NAME: (${filledRows}:ROWS: filled rows, hidden)`
+    : $localize`${name}:NAME: (${filledRows}:ROWS: filled rows)`;
+}

@@ -96,8 +96,8 @@ export function resultColumns(
       headerName: $localize`Why`,
       filter: 'agTextColumnFilter',
       width: 420,
-      valueGetter: ({ data }) => data?.check.reasons.join('; ') ?? '',
-      tooltipValueGetter: ({ data }) => data?.check.reasons.join('; ') ?? '',
+      valueGetter: ({ data }) => data?.check.reasons.join(' ') ?? '',
+      tooltipValueGetter: ({ data }) => data?.check.reasons.join(' ') ?? '',
     },
   ];
 }

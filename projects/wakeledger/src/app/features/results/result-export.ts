@@ -37,7 +37,7 @@ export function resultsCsv(rows: readonly ResultRow[]): string {
       row.dragAreaM2,
       row.expandedUM2,
       CHECK_WORDS[row.check.state],
-      row.check.reasons.join('; '),
+      row.check.reasons.join(' '),
       row.adopted ? $localize`adopted` : '',
       row.session,
     ]),

@@ -25,6 +25,7 @@ import { Preferences } from '../../core/preferences/preferences';
 import { Session } from '../../core/session/session';
 import { facilitiesFeature } from '../../data/facilities/facilities.feature';
 import { ResultListPageActions } from '../../data/results/results.actions';
+import { policiesFeature } from '../../data/policies/policies.feature';
 import { resultsFeature } from '../../data/results/results.feature';
 import { variantsFeature } from '../../data/variants/variants.feature';
 import { Busy } from '../../ui/busy/busy';
@@ -70,6 +71,7 @@ export class ResultListPage {
   private readonly inputsProblem = this.store.selectSignal(resultsFeature.selectInputsProblem);
   private readonly variants = this.store.selectSignal(variantsFeature.selectById);
   private readonly facilities = this.store.selectSignal(facilitiesFeature.selectById);
+  private readonly limits = this.store.selectSignal(policiesFeature.selectLimits);
 
   protected readonly problem = computed(() => {
     const loading = this.loading();
@@ -91,9 +93,10 @@ export class ResultListPage {
       {
         variant: (id) => this.variants().get(id)?.name ?? '…',
         facility: (id) => this.facilities().get(id)?.name ?? '…',
+        bodyShape: (id) => this.variants().get(id)?.bodyShape,
       },
       { format: this.format, locale: this.preferences.numberLocale() },
-      this.unchecked(),
+      { unchecked: this.unchecked(), limits: this.limits() },
     ),
   );
   private readonly chosen = computed(() => CHECK_STATES.find((state) => state === this.check()));

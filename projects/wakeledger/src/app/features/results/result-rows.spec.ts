@@ -1,6 +1,7 @@
 import { TestBed } from '@angular/core/testing';
 import type { Result } from '#shared/contracts/results';
 import type { RankingInput } from '#shared/core/ranking/ranking-input';
+import { DEFAULT_LIMITS, type CheckLimits } from '#shared/core/checks/limits';
 import { facilityFields, resultFields } from '#shared/testing/domain-fields';
 import { reducedEvidence } from '../../data/results/reduced-evidence';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
@@ -33,7 +34,10 @@ const RESULTS: readonly Result[] = [
   result('retired', { testDate: '2026-09-19', variantId: 'old' }),
 ];
 
-function rowsOf(results: readonly Result[]): ReadonlyMap<string, ResultRow> {
+function rowsOf(
+  results: readonly Result[],
+  limits: CheckLimits | null = DEFAULT_LIMITS,
+): ReadonlyMap<string, ResultRow> {
   const inputs = {
     programme: {
       referenceSpeedKmh: 120,
@@ -50,9 +54,9 @@ function rowsOf(results: readonly Result[]): ReadonlyMap<string, ResultRow> {
   const rows = resultRows(
     results,
     reducedEvidence(inputs),
-    { variant: (id) => id, facility: () => 'Halmere' },
+    { variant: (id) => id, facility: () => 'Halmere', bodyShape: () => 'hatch' },
     { format: TestBed.inject(QuantityFormat), locale: 'en-GB' },
-    undefined,
+    { unchecked: undefined, limits: limits ?? undefined },
   );
   return new Map(rows.map((row) => [row.id, row]));
 }
@@ -64,19 +68,30 @@ describe('the rows of the results', () => {
 
   it('give each result its check in words', () => {
     const rows = rowsOf(RESULTS);
-    expect(rows.get('good')?.check).toEqual({ state: 'comparable', reasons: [] });
-    expect(rows.get('fast')?.check).toEqual({
+    expect(rows.get('good')?.check).toMatchObject({ state: 'comparable', reasons: [] });
+    expect(rows.get('fast')?.check).toMatchObject({
       state: 'caution',
-      reasons: ['Mach 0.21: compressibility may matter'],
+      reasons: ['Mach 0.21 is over 0.20: the air begins to be compressed, and the drag with it.'],
     });
-    expect(rows.get('floor')?.check).toEqual({
+    expect(rows.get('floor')?.check).toMatchObject({
       state: 'excluded',
-      reasons: ['not comparable with the reference condition: ground fixed floor, not several belts'],
+      reasons: [
+        'Not comparable with the reference condition: ground fixed floor, not several belts. It stays out of the ranking.',
+      ],
     });
     expect(rows.get('broken')?.check.state).toBe('excluded');
     expect(rows.get('broken')?.check.reasons[0]).toContain('no point at zero yaw');
-    expect(rows.get('gone')?.check).toEqual({ state: 'withdrawn', reasons: ['withdrawn: wrong tyres'] });
+    expect(rows.get('gone')?.check).toEqual({
+      state: 'withdrawn',
+      checks: [],
+      reasons: ['Withdrawn: wrong tyres'],
+    });
     expect(rows.get('retired')?.check.state).toBe('unknown');
+  });
+
+  it('are not checked before the organisation’s limits have come', () => {
+    const rows = rowsOf([result('good')], null);
+    expect(rows.get('good')?.check).toMatchObject({ state: 'unknown', checks: [] });
   });
 
   it('show a figure for what is excluded, and none for what is withdrawn or refused', () => {

@@ -1,7 +1,9 @@
 import type { Result } from '#shared/contracts/results';
+import type { CheckLimits } from '#shared/core/checks/limits';
 import type { ReducedEvidence } from '../../data/results/reduced-evidence';
+import type { CheckLanguage } from '../../ui/checks/check-figures';
 import { QUANTITY_UNITS, QUANTITY_WORDS } from '../../ui/words/evidence-words';
-import { checkOf, type Check, type CheckWords } from './result-check';
+import { checkOf, type ResultCheck } from './result-check';
 
 /** One line of the list, values as numbers so that they sort and export as numbers. */
 export interface ResultRow {
@@ -19,7 +21,7 @@ export interface ResultRow {
   readonly scale: number;
   readonly dragAreaM2: number | null;
   readonly expandedUM2: number | null;
-  readonly check: Check;
+  readonly check: ResultCheck;
   readonly adopted: boolean;
   readonly session: string;
 }
@@ -27,6 +29,8 @@ export interface ResultRow {
 export interface ResultNames {
   variant(id: string): string;
   facility(id: string): string;
+  /** Of a variant, for what is plausible. */
+  bodyShape(id: string): string | undefined;
 }
 
 /** The results of a programme as rows, newest test first. */
@@ -34,8 +38,8 @@ export function resultRows(
   results: readonly Result[],
   evidence: ReducedEvidence,
   names: ResultNames,
-  words: CheckWords,
-  unchecked: string | undefined,
+  words: CheckLanguage,
+  ground: { readonly unchecked: string | undefined; readonly limits: CheckLimits | undefined },
 ): readonly ResultRow[] {
   return results
     .map((result) => {
@@ -56,7 +60,17 @@ export function resultRows(
         scale: result.scale,
         dragAreaM2: figure?.dragAreaM2 ?? null,
         expandedUM2: figure?.expandedUncertaintyM2 ?? null,
-        check: checkOf(result, { context: evidence.context, reduction, refused, unchecked }, words),
+        check: checkOf(
+          result,
+          {
+            context: evidence.context,
+            reduction,
+            refused,
+            ...ground,
+            bodyShape: names.bodyShape(result.variantId),
+          },
+          words,
+        ),
         adopted: result.adopted,
         session: result.session ?? '',
       };

@@ -2,6 +2,7 @@ import type { Routes } from '@angular/router';
 import { keepUnsavedChanges } from '../../core/editing/unsaved-changes';
 import { needs } from '../../core/session/session-guards';
 import { provideFacilities } from '../../data/facilities/provide-facilities';
+import { providePolicies } from '../../data/policies/provide-policies';
 import { provideResults } from '../../data/results/provide-results';
 import { provideVariants } from '../../data/variants/provide-variants';
 
@@ -9,7 +10,7 @@ import { provideVariants } from '../../data/variants/provide-variants';
 export const routes: Routes = [
   {
     path: '',
-    providers: [provideFacilities(), provideResults(), provideVariants()],
+    providers: [provideFacilities(), providePolicies(), provideResults(), provideVariants()],
     children: [
       {
         path: '',

@@ -1,12 +1,15 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
-import { Preferences } from '../../../core/preferences/preferences';
+import { gravest } from '#shared/core/checks/check';
+import { Checks } from '../../../ui/checks/checks';
 import { QuantityFormat } from '../../../ui/quantity/quantity-format';
-import { CHECK_INKS, CHECK_SHAPES, CHECK_WORDS, checkOf, reynoldsWords } from '../result-check';
+import { machWords, reynoldsWords } from '../../../ui/checks/check-figures';
+import { CHECK_INKS, CHECK_SHAPES, CHECK_WORDS } from '../result-check';
 import type { Preview } from './preview';
 
 /** What is typed, at the programme's reference, while it is typed. Nothing of it is stored. */
 @Component({
   selector: 'wl-preview-panel',
+  imports: [Checks],
   template: `
     <h2 i18n>What it would come to</h2>
     <div role="status">
@@ -22,19 +25,23 @@ import type { Preview } from './preview';
             <ng-container i18n>, blockage {{ blockage }}</ng-container>
           }
         </p>
-        <p [class]="it.check.ink">
+        <p [class]="it.ink">
           <strong
-            ><span aria-hidden="true">{{ it.check.shape }}</span> {{ it.check.words }}</strong
+            ><span aria-hidden="true">{{ it.shape }}</span> {{ it.words }}</strong
           >
         </p>
-        @for (reason of it.check.reasons; track $index) {
-          <p class="small">{{ reason }}</p>
-        }
         <p class="small" i18n>From {{ before() }} as it came. Nothing is stored before you save.</p>
-      } @else if (refused(); as words) {
+      } @else if (refused()) {
         <p class="wl-ochre">
           <strong
             ><span aria-hidden="true">▲ </span><ng-container i18n>not reducible yet</ng-container></strong
+          >
+        </p>
+      } @else if (noReference(); as words) {
+        <p class="wl-ochre">
+          <strong
+            ><span aria-hidden="true">▲ </span
+            ><ng-container i18n>the programme has no usable reference</ng-container></strong
           >
         </p>
         <p class="small">{{ words }}</p>
@@ -45,6 +52,9 @@ import type { Preview } from './preview';
         </p>
       }
     </div>
+    @if (checks(); as made) {
+      <wl-checks [checks]="made" />
+    }
   `,
   styles: `
     :host {
@@ -80,34 +90,34 @@ export class PreviewPanel {
   readonly before = input('');
 
   private readonly format = inject(QuantityFormat);
-  private readonly preferences = inject(Preferences);
 
-  protected readonly refused = computed(() => {
+  protected readonly refused = computed(() => this.preview()?.kind === 'refused');
+  protected readonly noReference = computed(() => {
     const preview = this.preview();
-    return preview?.kind === 'refused' ? preview.refusal.detail : undefined;
+    return preview?.kind === 'no-reference' ? preview.refusal.detail : undefined;
+  });
+  protected readonly checks = computed(() => {
+    const preview = this.preview();
+    return preview === undefined || preview.kind === 'no-reference' ? undefined : preview.checks;
   });
   protected readonly shown = computed(() => {
     const preview = this.preview();
     if (preview?.kind !== 'reduced') return undefined;
-    const { reduction, context } = preview;
-    const { output } = reduction;
-    const words = { format: this.format, locale: this.preferences.numberLocale() };
-    const check = checkOf({}, { context, reduction }, words);
+    const { output } = preview.reduction;
+    const verdict = gravest(preview.checks);
+    const state = verdict === 'passes' ? 'comparable' : verdict;
     return {
       value: this.format.value(output.zeroYaw.dragAreaM2, 'drag-area'),
       u: this.format.value(output.zeroYaw.expandedUncertaintyM2, 'drag-area'),
       reynolds: reynoldsWords(output.reynolds, this.format),
-      mach: this.format.value(output.mach, 'number', { digits: 2 }),
+      mach: machWords(output.mach, this.format),
       blockage:
         output.blockageRatio === null
           ? undefined
           : this.format.text(output.blockageRatio * 100, 'percent', { digits: 1 }),
-      check: {
-        reasons: check.reasons,
-        words: CHECK_WORDS[check.state],
-        shape: CHECK_SHAPES[check.state],
-        ink: CHECK_INKS[check.state],
-      },
+      words: CHECK_WORDS[state],
+      shape: CHECK_SHAPES[state],
+      ink: CHECK_INKS[state],
     };
   });
 }

@@ -1,6 +1,8 @@
 import type { Facility } from '#shared/contracts/facilities';
+import type { PolicyVersion } from '#shared/contracts/policies';
 import type { Programme } from '#shared/contracts/programmes';
 import type { Variant } from '#shared/contracts/variants';
+import { DEFAULT_LIMITS } from '#shared/core/checks/limits';
 import { facilityFields, programmeFields, resultFields, variantFields } from '#shared/testing/domain-fields';
 import { previewOf } from './preview';
 
@@ -9,6 +11,7 @@ const surroundings = {
   programme: { ...programmeFields(), id: 'programme', version: 1, milestones: [] } as Programme,
   variant: { ...variantFields(), id: 'variant', programmeId: 'programme', version: 1 } as Variant,
   facility: { ...facilityFields(), id: 'facility', version: 1 } as Facility,
+  policies: { number: 0, values: DEFAULT_LIMITS } as unknown as PolicyVersion,
 };
 
 describe('the preview of a typed result', () => {
@@ -37,5 +40,26 @@ describe('the preview of a typed result', () => {
   it('finds no figure in a result without a point at zero yaw', () => {
     const preview = previewOf(resultFields(ids, { points: [{ yawDeg: 5, value: 0.28 }] }), surroundings);
     expect(preview).toMatchObject({ kind: 'refused', refusal: { code: 'yaw-no-zero' } });
+  });
+
+  it('checks what is typed against the organisation’s limits', () => {
+    const verdictOf = (limits: object): string | undefined => {
+      const policies = { number: 1, values: { ...DEFAULT_LIMITS, ...limits } } as unknown as PolicyVersion;
+      const preview = previewOf(resultFields(ids), { ...surroundings, policies });
+      return preview.kind === 'reduced'
+        ? preview.checks.find(({ check }) => check === 'mach')?.verdict
+        : undefined;
+    };
+    expect(verdictOf({})).toBe('passes');
+    expect(verdictOf({ machCaution: 0.05 })).toBe('caution');
+    expect(verdictOf({ machCaution: 0.05, machExcluded: 0.06 })).toBe('excluded');
+  });
+
+  it('says which unit was probably meant', () => {
+    const air = { state: 'custom' as const, temperatureC: 293.15, pressurePa: 100000, relativeHumidity: 0.5 };
+    expect(previewOf(resultFields(ids, { air }), surroundings)).toMatchObject({
+      kind: 'refused',
+      checks: [{ check: 'refused', finding: 'kelvin' }],
+    });
   });
 });

@@ -1,35 +1,47 @@
 import type { Facility } from '#shared/contracts/facilities';
+import type { PolicyVersion } from '#shared/contracts/policies';
 import type { Programme } from '#shared/contracts/programmes';
 import type { ResultFields } from '#shared/contracts/results';
 import type { FrontalArea, Variant } from '#shared/contracts/variants';
+import type { Check } from '#shared/core/checks/check';
+import { checksOf, checksOfRefused } from '#shared/core/checks/checks-of';
+import { policiesInputOf } from '#shared/core/checks/limits';
 import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import { reduceResults } from '#shared/core/reduction/reduce';
-import type { Reduction, ReductionContext } from '#shared/core/reduction/reduction';
+import type { Reduction } from '#shared/core/reduction/reduction';
 import { Refused, type Refusal } from '#shared/core/refusal';
 
 export type Preview =
-  | { readonly kind: 'reduced'; readonly reduction: Reduction; readonly context: ReductionContext }
-  | { readonly kind: 'refused'; readonly refusal: Refusal };
+  | { readonly kind: 'reduced'; readonly reduction: Reduction; readonly checks: readonly Check[] }
+  | { readonly kind: 'refused'; readonly refusal: Refusal; readonly checks: readonly Check[] }
+  /** Nothing to do with this result: the programme itself cannot be used. */
+  | { readonly kind: 'no-reference'; readonly refusal: Refusal };
 
 export interface PreviewSurroundings {
   readonly programme: Programme;
   readonly variant: Variant;
   readonly facility: Facility;
+  /** The limits in force. */
+  readonly policies: PolicyVersion;
 }
 
 const ID = 'typed';
 
-/** What the result would come to at the programme's reference, by the very functions that rank it once it is saved. */
+/** What the result would come to at the programme's reference, and its checks, by the very functions that rank it later. */
 export function previewOf(fields: ResultFields, surroundings: PreviewSurroundings): Preview {
+  const limits = surroundings.policies.values;
+  const { bodyShape } = surroundings.variant;
   try {
     const { context, reductions, refused } = reduceResults(inputOf(fields, surroundings));
     const [reduction] = reductions;
-    if (reduction) return { kind: 'reduced', reduction, context };
+    if (reduction) {
+      return { kind: 'reduced', reduction, checks: checksOf(reduction, { context, limits }, bodyShape) };
+    }
     const [refusal] = refused;
-    if (refusal) return { kind: 'refused', refusal };
+    if (refusal) return { kind: 'refused', refusal, checks: checksOfRefused(refusal, fields, limits) };
     throw new Error('A result is either reduced or refused.');
   } catch (error) {
-    if (error instanceof Refused) return { kind: 'refused', refusal: error };
+    if (error instanceof Refused) return { kind: 'no-reference', refusal: error };
     throw error;
   }
 }
@@ -42,7 +54,7 @@ function newest(areas: readonly FrontalArea[]): FrontalArea | undefined {
 }
 
 function inputOf(fields: ResultFields, surroundings: PreviewSurroundings): RankingInput {
-  const { programme, variant, facility } = surroundings;
+  const { programme, variant, facility, policies } = surroundings;
   const area = newest(variant.frontalAreas);
   return {
     programme: {
@@ -53,7 +65,11 @@ function inputOf(fields: ResultFields, surroundings: PreviewSurroundings): Ranki
       confidence: programme.confidence,
       referenceCondition: programme.referenceCondition,
       windSpeedMs: programme.windSpeedMs,
-      policies: { frictionLine: 'off', frictionShare: 0, frictionShareU: 0 },
+      policies: {
+        ...policiesInputOf(policies.values, policies.number, 'off'),
+        frictionShare: 0,
+        frictionShareU: 0,
+      },
     },
     facilities: [facility],
     models: fields.model === undefined ? [] : [{ id: fields.model, name: fields.model }],

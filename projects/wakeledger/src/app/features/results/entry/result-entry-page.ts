@@ -22,6 +22,7 @@ import { focusFirstFault, revealErrors } from '../../../core/editing/reveal-erro
 import { Undo } from '../../../core/editing/undo';
 import { type HoldsChanges, warnBeforeUnload } from '../../../core/editing/unsaved-changes';
 import { facilitiesFeature } from '../../../data/facilities/facilities.feature';
+import { policiesFeature } from '../../../data/policies/policies.feature';
 import { ResultEntryPageActions } from '../../../data/results/results.actions';
 import { resultsFeature } from '../../../data/results/results.feature';
 import { variantsFeature } from '../../../data/variants/variants.feature';
@@ -77,6 +78,7 @@ export class ResultEntryPage implements HoldsChanges {
   private readonly programme = this.store.selectSignal(resultsFeature.selectProgramme);
   private readonly results = this.store.selectSignal(resultsFeature.selectResults);
   private readonly loading = this.store.selectSignal(resultsFeature.selectLoading);
+  private readonly policies = this.store.selectSignal(policiesFeature.selectInForce);
   protected readonly variants = this.store.selectSignal(variantsFeature.selectActive);
   protected readonly facilities = this.store.selectSignal(facilitiesFeature.selectActive);
   protected readonly busy = computed(() => this.deed().kind === 'under-way');
@@ -123,14 +125,17 @@ export class ResultEntryPage implements HoldsChanges {
 
   protected readonly preview = computed(() => {
     const { points } = this.value();
-    const [programme, variant, facility] = [this.programme(), this.chosenVariant(), this.chosenFacility()];
-    if (!programme || !variant || !facility || points.every(({ value }) => value === null)) return undefined;
+    const [programme, policies] = [this.programme(), this.policies()];
+    const [variant, facility] = [this.chosenVariant(), this.chosenFacility()];
+    if (!programme || !policies || !variant || !facility) return undefined;
+    if (points.every(({ value }) => value === null)) return undefined;
     const complete = resultFieldsOf(this.form);
     // Rows that are only begun do not stop the others from being shown.
     const typed = complete.points.filter(
       ({ value, yawDeg }) => !Number.isNaN(value) && !Number.isNaN(yawDeg),
     );
-    return previewOf({ ...complete, points: typed }, { programme, variant, facility });
+    const fields = { ...complete, points: typed };
+    return previewOf(fields, { programme, variant, facility, policies });
   });
   protected readonly before = computed(() => {
     const value = this.value().points.find((point) => point.yawDeg === 0)?.value ?? null;

@@ -2,7 +2,7 @@
 export type CsvCell = string | number | boolean | null | undefined;
 
 /** Text that a spreadsheet would run as a formula, after blanks that it skips. */
-const FORMULA = /^[\s\u00a0\ufeff]*[=+\-@\t\r\uff1d\uff0b\uff0d\uff20\u2212]/u;
+export const FORMULA = /^[\s\u00a0\ufeff]*[=+\-@\t\r\uff1d\uff0b\uff0d\uff20\u2212]/u;
 const NUMBER = /^-?\d+(\.\d+)?([eE][+-]?\d+)?$/;
 const NEEDS_QUOTES = /[",\r\n;\t]/;
 

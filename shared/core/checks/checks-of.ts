@@ -5,7 +5,7 @@ import { airChecks } from './air-checks';
 import { liftChecks, plausibilityChecks, quotedAreaCheck } from './body-checks';
 import { check, type Check } from './check';
 import { conditionCheck } from './condition-check';
-import { blockageCheck, machCheck, transitionCheck } from './flow-checks';
+import { blockageCheck, machCheck, reynoldsCheck, transitionCheck } from './flow-checks';
 import type { CheckLimits } from './limits';
 import { repeatabilityCheck, yawCoverageCheck, yawPairsCheck } from './reading-checks';
 import { refusedAir } from './unit-suspicion';
@@ -32,6 +32,7 @@ export function checksOf(
     conditionCheck(reduction, context),
     ...machCheck(reduction, limits),
     ...blockageCheck(reduction, limits),
+    ...reynoldsCheck(reduction, limits),
     ...transitionCheck(reduction, limits),
     ...plausibilityChecks(reduction, limits, bodyShape),
     ...quotedAreaCheck(reduction),

@@ -1,25 +1,31 @@
 import type { Reduction, ReductionContext } from '../reduction/reduction';
-import { differingItems } from '../similarity/condition';
 import { check, type Check, type CheckFinding, type CheckVerdict, type DifferingItem } from './check';
 
-function itemsOf({ parts }: Reduction, { referenceCondition }: ReductionContext): DifferingItem[] {
-  const { condition } = parts.result;
-  return differingItems(referenceCondition, condition).flatMap((item) => {
+function itemsOf(
+  names: readonly string[],
+  { parts }: Reduction,
+  { referenceCondition }: ReductionContext,
+): DifferingItem[] {
+  return names.flatMap((item) => {
     const reference = referenceCondition[item];
-    return reference == null ? [] : [{ item, reference, stated: condition?.[item] ?? null }];
+    return reference == null ? [] : [{ item, reference, stated: parts.result.condition?.[item] ?? null }];
   });
 }
 
 /**
  * Whether the test condition is the programme's reference (method section 8): it passes where nothing differs or adjustments
- * have brought it there, is a caution where somebody included it with a reason, and else keeps the result out.
+ * have brought it there, is a caution where somebody included it with a reason, and else keeps the result out. Items that a
+ * correlation stands for are not compared.
  */
 export function conditionCheck(reduction: Reduction, context: ReductionContext): Check {
-  const items = itemsOf(reduction, context);
-  const { excludedBy, cautions } = reduction.output;
-  const told = (verdict: CheckVerdict, finding: CheckFinding | null): Check =>
-    check({ check: 'condition', verdict, finding, items });
-  if (excludedBy.includes('not-comparable')) return told('excluded', null);
-  if (cautions.includes('included-with-reason')) return told('caution', 'included-with-reason');
-  return told('passes', items.length > 0 ? 'adjusted' : null);
+  const { applied, notComparable, includedReason } = reduction.condition;
+  const told = (verdict: CheckVerdict, finding: CheckFinding | null, names: readonly string[]): Check =>
+    check({ check: 'condition', verdict, finding, items: itemsOf(names, reduction, context) });
+  if (notComparable.length > 0) {
+    return includedReason === null
+      ? told('excluded', null, notComparable)
+      : told('caution', 'included-with-reason', notComparable);
+  }
+  const adjusted = applied.map(({ item }) => item);
+  return told('passes', adjusted.length > 0 ? 'adjusted' : null, adjusted);
 }

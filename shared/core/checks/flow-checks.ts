@@ -2,7 +2,7 @@ import { blockageVerdict } from '../reduction/blockage';
 import type { Reduction } from '../reduction/reduction';
 import { isTunnel } from '../reduction/result-parts';
 import { machVerdict } from '../similarity/flow';
-import { check, limit, type Check } from './check';
+import { check, limit, within, type Check } from './check';
 import type { CheckLimits } from './limits';
 
 /** The highest Mach number of the points against the limits (method section 4); nothing where no speed or air is stated. */
@@ -36,6 +36,31 @@ export function blockageCheck({ parts }: Reduction, limits: CheckLimits): Check[
       policy: openJet ? 'openJetLimit' : 'blockageCaution',
     }),
   ];
+}
+
+/**
+ * How far the figure was moved to the reference Reynolds number by an estimate [m²], against what the organisation tolerates
+ * (method section 6): a measured sweep needs no look. Nothing where a correlation stands for the step or no friction is
+ * assumed at all.
+ */
+export function reynoldsCheck({ reynolds }: Reduction, limits: CheckLimits): Check[] {
+  const told = { check: 'reynolds', unit: 'm²', policy: 'reynoldsToleranceM2' } as const;
+  const upTo = limit({ to: limits.reynoldsToleranceM2 });
+  switch (reynolds.kind) {
+    case 'replaced':
+    case 'none':
+      return [];
+    case 'own-sweep':
+      return [check({ ...told, verdict: 'passes', limit: upTo, finding: 'own-sweep' })];
+    case 'sweep':
+      return [check({ ...told, verdict: 'passes', limit: upTo, finding: 'other-sweep' })];
+    case 'friction-line': {
+      // The shape's amount is half of the move by definition, signed.
+      const movedM2 = Math.abs(2 * reynolds.move.reynoldsShapeAmountM2);
+      const finding = reynolds.applied ? 'friction-line' : 'no-reynolds-correction';
+      return [check({ ...told, verdict: within(movedM2, upTo), value: movedM2, limit: upTo, finding })];
+    }
+  }
 }
 
 /**

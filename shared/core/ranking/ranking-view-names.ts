@@ -10,6 +10,8 @@ export interface RankingNames {
   readonly results: ReadonlyMap<string, ResultInput>;
   readonly models: ReadonlyMap<string, string>;
   readonly sessions: ReadonlyMap<string, string>;
+  /** Which version of each facility's corrections and uncertainties counts. */
+  readonly facilityVersions: ReadonlyMap<string, number>;
   /** Results that some variant rests on by adoption. */
   readonly adopted: ReadonlySet<string>;
 }
@@ -24,6 +26,7 @@ export function namesIn(inputs: RankingInput, context: RankingContext): RankingN
     results: byId(inputs.results),
     models: new Map((inputs.models ?? []).map(({ id, name }) => [id, name ?? id])),
     sessions: new Map(context.sessions.map(({ id, name }) => [id, name])),
+    facilityVersions: new Map(context.facilityVersions.map(({ facilityId, number }) => [facilityId, number])),
     adopted: new Set(context.adoptions.flatMap(({ resultIds }) => resultIds)),
   };
 }
@@ -32,13 +35,19 @@ export const variantName = (names: RankingNames, id: string): string => names.va
 
 export const facilityName = (names: RankingNames, id: string): string => names.facilities.get(id)?.name ?? id;
 
+/** With the version that its amounts come from, once there is more than one. */
+function versionedFacility(names: RankingNames, id: string): string {
+  const version = names.facilityVersions.get(id) ?? 1;
+  return version === 1 ? facilityName(names, id) : `${facilityName(names, id)}, version ${version}`;
+}
+
 /** What a person calls the thing that a key of a budget belongs to. */
 function nameOfKey(names: RankingNames, kind: string, id: string): string {
   switch (kind) {
     case 'facility-bias':
     case 'simulation-bias':
     case 'blockage-method':
-      return facilityName(names, id);
+      return versionedFacility(names, id);
     case 'frontal-area':
       return variantName(names, id);
     case 'as-built-scale':

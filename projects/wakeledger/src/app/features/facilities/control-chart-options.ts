@@ -62,6 +62,8 @@ export function controlChartOptions(
       nameLocation: 'middle',
       nameGap: 46,
       boundaryGap: true,
+      // Two lines: the name and the day.
+      axisLabel: { lineHeight: 16 },
       data: chart.points.map((point) => {
         const { name, date } = labelOf(point);
         return `${name}\n${date}`;

@@ -45,16 +45,14 @@ export function toCommonGeometry(
   const effectOf = (id: string): KeyedFigure =>
     postings.get(id) ?? refuse('unknown-posting', `posting:${id}`, `There is no posting “${id}”.`);
   contains.forEach(effectOf);
+  const joint = new Map(interactions.map((one) => [one.id, zeroYawInteractionFigure(one, variantId)]));
   const posted = new Set(contains);
   const figures = results.map(({ figure, containsPostings }) => {
     const contained = new Set(containsPostings);
     const active = activeInteractions(interactions, posted, contained);
     const joined = new Set(active.flatMap(({ deltaIds }) => deltaIds));
     const alone = contains.filter((id) => !contained.has(id) && !joined.has(id));
-    return plus(figure, [
-      ...alone.map(effectOf),
-      ...active.map((interaction) => zeroYawInteractionFigure(interaction, variantId)),
-    ]);
+    return plus(figure, [...alone.map(effectOf), ...active.flatMap(({ id }) => joint.get(id) ?? [])]);
   });
   return { figures, contains };
 }

@@ -61,7 +61,8 @@ function windSteps({ windAverage, output }: Reduction, zeroYawM2: number): Deriv
   ];
 }
 
-function uncertaintyStep(figure: KeyedFigure): DerivationStep {
+/** The last step of every derivation of a drag area: u, t and U. */
+export function uncertaintyStep(figure: KeyedFigure): DerivationStep {
   const { standardUncertaintyM2, coverageFactor, expandedUncertaintyM2, effectiveDegreesOfFreedom } =
     figureOf(figure);
   const nu = effectiveDegreesOfFreedom ?? 'infinite';

@@ -15,6 +15,7 @@ export function programmeSections(programmeId: string): readonly Section[] {
     { words: $localize`Variants`, link: at('variants'), needs: ['variants.read'] },
     { words: $localize`Results`, link: at('results'), needs: ['results.read'] },
     { words: $localize`Import`, link: at('import'), needs: ['imports.run'] },
+    { words: $localize`Test planning`, link: at('test-plans'), needs: ['plans.read'] },
     { words: $localize`Reference`, link: at('settings'), needs: ['programmes.read'] },
   ];
 }

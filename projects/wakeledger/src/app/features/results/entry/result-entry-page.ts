@@ -36,6 +36,7 @@ import { QuantityFormat } from '../../../ui/quantity/quantity-format';
 import { QUANTITY_UNITS, QUANTITY_WORDS } from '../../../ui/words/evidence-words';
 import { exactly } from '../page/raw-lines';
 import { EvidenceFile } from './evidence-file';
+import { ExpectedPlan } from './expected-plan';
 import { FlowFields } from './flow-fields';
 import { PointsTable } from './points-table';
 import { previewOf } from './preview';
@@ -48,6 +49,7 @@ import { resultFieldsOf, resultForm } from './result-form';
   imports: [
     ConditionFields,
     EvidenceFile,
+    ExpectedPlan,
     Field,
     FlowFields,
     NumberField,
@@ -64,6 +66,8 @@ import { resultFieldsOf, resultForm } from './result-form';
 })
 export class ResultEntryPage implements HoldsChanges {
   readonly programmeId = input.required<string>();
+  /** From the address: the planned test that this result is of. */
+  readonly plan = input<string>();
 
   private readonly store = inject(Store);
   private readonly router = inject(Router);

@@ -67,6 +67,8 @@ export function resultForm(builder: NonNullableFormBuilder) {
     remark: text(4000),
     points: builder.array([pointForm(builder, 0)]),
     attachmentId: '',
+    /** The planned test that this was; it stays here and is not sent. */
+    planId: '',
   });
 }
 export type ResultForm = ReturnType<typeof resultForm>;

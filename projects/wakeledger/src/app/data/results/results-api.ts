@@ -2,22 +2,28 @@ import { Injectable, inject } from '@angular/core';
 import { type Observable, catchError, forkJoin, map, of } from 'rxjs';
 import { type Programme, programmeRead } from '#shared/contracts/programmes';
 import { rankingInputsRead } from '#shared/contracts/rankings';
-import { type Adoption, type AdoptionOrder, adoptionList, evidenceAdopt } from '#shared/contracts/adoptions';
+import {
+  type Adoption,
+  type Evaluation,
+  adoptionList,
+  evaluationList,
+  evidenceAdopt,
+} from '#shared/contracts/adoptions';
+import { resultsJudge } from '#shared/contracts/judgements';
 import {
   type Result,
+  type ResultEvent,
   type ResultFields,
   resultEnter,
+  resultHistory,
   resultList,
-  resultWithdraw,
+  resultsCheck,
+  resultsWithdraw,
 } from '#shared/contracts/results';
 import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import { ApiClient } from '../../core/api/api-client';
 import { ApiProblem, asApiProblem } from '../../core/api/api-problem';
-
-/** What a person decides when evidence is adopted, or an adoption is released (no results). */
-export interface AdoptionDecision extends AdoptionOrder {
-  readonly comment: string;
-}
+import type { EvidenceDecision, EvidenceDone } from './evidence-decision';
 
 export interface EvidenceAnswer {
   readonly programme: Programme;
@@ -58,13 +64,48 @@ export class ResultsApi {
     return this.api.call(resultEnter, { params: { programmeId }, body, commandKey });
   }
 
-  adopt(programmeId: string, { comment, ...order }: AdoptionDecision): Observable<readonly Adoption[]> {
-    return this.api
-      .call(evidenceAdopt, { params: { programmeId }, body: { adoptions: [order], comment } })
-      .pipe(map(({ adoptions }) => adoptions));
+  /** Carries out a decision, all of it or nothing. */
+  decide(programmeId: string, decision: EvidenceDecision): Observable<EvidenceDone> {
+    const params = { programmeId };
+    switch (decision.kind) {
+      case 'check': {
+        const { resultIds, state, comment } = decision;
+        return this.api
+          .call(resultsCheck, { params, body: { resultIds: [...resultIds], state, comment } })
+          .pipe(map(({ results }) => ({ kind: 'checked', results, state })));
+      }
+      case 'judge': {
+        const { judgements, comment } = decision;
+        return this.api
+          .call(resultsJudge, { params, body: { judgements: [...judgements], comment } })
+          .pipe(map((answer) => ({ kind: 'judged', judgements: answer.judgements })));
+      }
+      case 'adopt': {
+        const { adoptions, comment } = decision;
+        return this.api
+          .call(evidenceAdopt, { params, body: { adoptions: [...adoptions], comment } })
+          .pipe(map((answer) => ({ kind: 'adopted', adoptions: answer.adoptions })));
+      }
+      case 'withdraw': {
+        const { resultIds, reason } = decision;
+        return this.api
+          .call(resultsWithdraw, { params, body: { resultIds: [...resultIds], reason } })
+          .pipe(map(({ results }) => ({ kind: 'withdrawn', results })));
+      }
+    }
   }
 
-  withdraw(programmeId: string, resultId: string, reason: string): Observable<Result> {
-    return this.api.call(resultWithdraw, { params: { programmeId, resultId }, body: { reason } });
+  /** What happened to a result, newest first. */
+  history(programmeId: string, resultId: string): Observable<readonly ResultEvent[]> {
+    return this.api
+      .call(resultHistory, { params: { programmeId, resultId } })
+      .pipe(map(({ events }) => events));
+  }
+
+  /** What the adoptions of a variant came to when they were made, and come to now; newest first. */
+  evaluations(programmeId: string, variantId: string): Observable<readonly Evaluation[]> {
+    return this.api
+      .call(evaluationList, { params: { programmeId, variantId } })
+      .pipe(map(({ evaluations }) => evaluations));
   }
 }

@@ -1,14 +1,16 @@
 import { createActionGroup, emptyProps, props } from '@ngrx/store';
-import type { Adoption } from '#shared/contracts/adoptions';
 import type { Result, ResultFields } from '#shared/contracts/results';
 import type { ApiProblem } from '../../core/api/api-problem';
-import type { AdoptionDecision, EvidenceAnswer } from './results-api';
+import type { EvidenceAnswer } from './results-api';
+import type { EvidenceDecision, EvidenceDone } from './evidence-decision';
 
 export const ResultListPageActions = createActionGroup({
   source: 'Result List Page',
   events: {
     Opened: props<{ programmeId: string }>(),
     'Asked Again': props<{ programmeId: string }>(),
+    'Decision Confirmed': props<{ programmeId: string; decision: EvidenceDecision }>(),
+    'Outcome Seen': emptyProps(),
   },
 });
 
@@ -16,8 +18,7 @@ export const ResultPageActions = createActionGroup({
   source: 'Result Page',
   events: {
     Opened: props<{ programmeId: string }>(),
-    'Adoption Confirmed': props<{ programmeId: string; order: AdoptionDecision }>(),
-    'Withdrawal Confirmed': props<{ programmeId: string; resultId: string; reason: string }>(),
+    'Decision Confirmed': props<{ programmeId: string; decision: EvidenceDecision }>(),
     'Outcome Seen': emptyProps(),
   },
 });
@@ -37,8 +38,7 @@ export const ResultsApiActions = createActionGroup({
     Loaded: props<{ programmeId: string; answer: EvidenceAnswer }>(),
     'Loading Failed': props<{ problem: ApiProblem }>(),
     Entered: props<{ programmeId: string; result: Result }>(),
-    Adopted: props<{ programmeId: string; adoptions: readonly Adoption[] }>(),
-    Withdrawn: props<{ programmeId: string; result: Result }>(),
+    Decided: props<{ programmeId: string; done: EvidenceDone }>(),
     Refused: props<{ problem: ApiProblem }>(),
   },
 });

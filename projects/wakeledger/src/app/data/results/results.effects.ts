@@ -26,8 +26,7 @@ export const loadEvidence = createEffect(
         ResultPageActions.opened,
         ResultEntryPageActions.opened,
         ResultsApiActions.entered,
-        ResultsApiActions.adopted,
-        ResultsApiActions.withdrawn,
+        ResultsApiActions.decided,
       ),
       switchMap(({ programmeId }) =>
         api.evidence(programmeId).pipe(
@@ -78,30 +77,15 @@ export const enterResult = createEffect(
   { functional: true },
 );
 
-export const adoptResult = createEffect(
+/** Whatever is decided about results: checked, judged, adopted, withdrawn. One at a time, as above. */
+export const decideOnEvidence = createEffect(
   (actions = inject(Actions), api = inject(ResultsApi)) =>
     actions.pipe(
-      ofType(ResultPageActions.adoptionConfirmed),
-      exhaustMap(({ programmeId, order }) =>
-        api.adopt(programmeId, order).pipe(
+      ofType(ResultPageActions.decisionConfirmed, ResultListPageActions.decisionConfirmed),
+      exhaustMap(({ programmeId, decision }) =>
+        api.decide(programmeId, decision).pipe(
           mapResponse({
-            next: (adoptions) => ResultsApiActions.adopted({ programmeId, adoptions }),
-            error: (error) => ResultsApiActions.refused({ problem: asApiProblem(error) }),
-          }),
-        ),
-      ),
-    ),
-  { functional: true },
-);
-
-export const withdrawResult = createEffect(
-  (actions = inject(Actions), api = inject(ResultsApi)) =>
-    actions.pipe(
-      ofType(ResultPageActions.withdrawalConfirmed),
-      exhaustMap(({ programmeId, resultId, reason }) =>
-        api.withdraw(programmeId, resultId, reason).pipe(
-          mapResponse({
-            next: (result) => ResultsApiActions.withdrawn({ programmeId, result }),
+            next: (done) => ResultsApiActions.decided({ programmeId, done }),
             error: (error) => ResultsApiActions.refused({ problem: asApiProblem(error) }),
           }),
         ),

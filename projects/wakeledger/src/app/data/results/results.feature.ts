@@ -5,6 +5,7 @@ import type { Result } from '#shared/contracts/results';
 import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import type { ApiProblem } from '../../core/api/api-problem';
 import { NOT_ASKED, type Loading } from '../loading';
+import type { EvidenceDone } from './evidence-decision';
 import { reducedEvidence } from './reduced-evidence';
 import {
   ResultEntryPageActions,
@@ -18,8 +19,7 @@ export type Deed =
   | { readonly kind: 'none' }
   | { readonly kind: 'under-way' }
   | { readonly kind: 'entered'; readonly result: Result }
-  | { readonly kind: 'adopted'; readonly adoptions: readonly Adoption[] }
-  | { readonly kind: 'withdrawn'; readonly result: Result }
+  | { readonly kind: 'decided'; readonly done: EvidenceDone }
   | { readonly kind: 'refused'; readonly problem: ApiProblem };
 
 export interface ResultsState {
@@ -72,6 +72,29 @@ function withAdoptions(results: readonly Result[], adoptions: readonly Adoption[
   });
 }
 
+/** What a decision changed, in view before the server has told everything anew. */
+function withDone(state: ResultsState, done: EvidenceDone): ResultsState {
+  switch (done.kind) {
+    case 'checked':
+    case 'withdrawn':
+      return { ...state, results: done.results.reduce(withResult, state.results) };
+    case 'judged': {
+      const judged = new Map(done.judgements.map(({ resultId, ...judgement }) => [resultId, judgement]));
+      const results = state.results.map((result) => {
+        const judgement = judged.get(result.id);
+        return judgement === undefined ? result : { ...result, judgement };
+      });
+      return { ...state, results };
+    }
+    case 'adopted':
+      return {
+        ...state,
+        adoptions: [...done.adoptions, ...state.adoptions],
+        results: withAdoptions(state.results, done.adoptions),
+      };
+  }
+}
+
 export const resultsFeature = createFeature({
   name: 'results',
   reducer: createReducer(
@@ -91,8 +114,8 @@ export const resultsFeature = createFeature({
       loading: { kind: 'failed', problem },
     })),
     on(
-      ResultPageActions.adoptionConfirmed,
-      ResultPageActions.withdrawalConfirmed,
+      ResultPageActions.decisionConfirmed,
+      ResultListPageActions.decisionConfirmed,
       ResultEntryPageActions.entryConfirmed,
       (state): ResultsState => ({ ...state, deed: { kind: 'under-way' } }),
     ),
@@ -101,25 +124,20 @@ export const resultsFeature = createFeature({
       results: withResult(state.results, result),
       deed: { kind: 'entered', result },
     })),
-    on(ResultsApiActions.withdrawn, (state, { result }): ResultsState => ({
-      ...state,
-      results: withResult(state.results, result),
-      deed: { kind: 'withdrawn', result },
-    })),
-    on(ResultsApiActions.adopted, (state, { adoptions }): ResultsState => ({
-      ...state,
-      adoptions: [...adoptions, ...state.adoptions],
-      results: withAdoptions(state.results, adoptions),
-      deed: { kind: 'adopted', adoptions },
+    on(ResultsApiActions.decided, (state, { done }): ResultsState => ({
+      ...withDone(state, done),
+      deed: { kind: 'decided', done },
     })),
     on(ResultsApiActions.refused, (state, { problem }): ResultsState => ({
       ...state,
       deed: { kind: 'refused', problem },
     })),
-    on(ResultPageActions.outcomeSeen, ResultEntryPageActions.outcomeSeen, (state): ResultsState => ({
-      ...state,
-      deed: { kind: 'none' },
-    })),
+    on(
+      ResultPageActions.outcomeSeen,
+      ResultListPageActions.outcomeSeen,
+      ResultEntryPageActions.outcomeSeen,
+      (state): ResultsState => ({ ...state, deed: { kind: 'none' } }),
+    ),
   ),
   extraSelectors: ({ selectInputs, selectAdoptions }) => ({
     /** Every result brought to the reference, by its id; made anew only when the inputs change. */

@@ -41,7 +41,10 @@ describe('the results’ slice', () => {
     const state = after(
       opened,
       loaded,
-      ResultsApiActions.adopted({ programmeId: 'dunlin', adoptions: [adoption('new')] }),
+      ResultsApiActions.decided({
+        programmeId: 'dunlin',
+        done: { kind: 'adopted', adoptions: [adoption('new')] },
+      }),
     );
     expect(state.results.map(({ id, adopted }) => [id, adopted])).toEqual([
       ['old', false],
@@ -54,7 +57,10 @@ describe('the results’ slice', () => {
     const state = after(
       opened,
       loaded,
-      ResultsApiActions.adopted({ programmeId: 'dunlin', adoptions: [adoption(undefined)] }),
+      ResultsApiActions.decided({
+        programmeId: 'dunlin',
+        done: { kind: 'adopted', adoptions: [adoption(undefined)] },
+      }),
     );
     expect(state.results.some(({ adopted }) => adopted)).toBe(false);
     expect(resultsFeature.selectStanding({ results: state }).get('hatch')).toBeUndefined();

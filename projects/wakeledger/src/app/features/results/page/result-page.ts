@@ -20,6 +20,7 @@ import { Preferences } from '../../../core/preferences/preferences';
 import { Session } from '../../../core/session/session';
 import { facilitiesFeature } from '../../../data/facilities/facilities.feature';
 import { policiesFeature } from '../../../data/policies/policies.feature';
+import type { EvidenceDecision } from '../../../data/results/evidence-decision';
 import { ResultPageActions } from '../../../data/results/results.actions';
 import { resultsFeature } from '../../../data/results/results.feature';
 import { variantsFeature } from '../../../data/variants/variants.feature';
@@ -34,6 +35,7 @@ import { machWords, reynoldsWords } from '../../../ui/checks/check-figures';
 import { QuantityFormat } from '../../../ui/quantity/quantity-format';
 import { FACILITY_KIND_WORDS } from '../../../ui/words/evidence-words';
 import { CHECK_INKS, CHECK_SHAPES, CHECK_WORDS, checkOf } from '../result-check';
+import { doneWords } from '../done-words';
 import { AttachmentLine } from './attachment-line';
 import { pointRows, pointColumns } from './point-rows';
 import { rawLines } from './raw-lines';
@@ -193,14 +195,7 @@ export class ResultPage {
         if (deed.kind === 'none' || deed.kind === 'under-way') return;
         this.store.dispatch(ResultPageActions.outcomeSeen());
         if (deed.kind === 'refused') this.onRefused(deed.problem);
-        if (deed.kind === 'adopted') {
-          this.undo.say(
-            deed.adoptions.every(({ resultIds }) => resultIds.length === 0)
-              ? $localize`The adoption is released; the newest result counts again.`
-              : $localize`${this.result()?.name ?? ''}:NAME: is adopted.`,
-          );
-        }
-        if (deed.kind === 'withdrawn') this.undo.say($localize`${deed.result.name}:NAME: is withdrawn.`);
+        if (deed.kind === 'decided') this.undo.say(doneWords(deed.done, this.result()?.name ?? ''));
       });
     });
   }
@@ -264,26 +259,22 @@ export class ResultPage {
       reasonLabel: $localize`Why it is withdrawn (at least three characters)`,
     });
     if (reason === undefined) return;
-    this.refusal.set(undefined);
-    this.store.dispatch(
-      ResultPageActions.withdrawalConfirmed({
-        programmeId: this.programmeId(),
-        resultId: result.id,
-        reason,
-      }),
-    );
+    this.decide({ kind: 'withdraw', resultIds: [result.id], reason });
   }
 
   private order(variantId: string, comment: string, resultId?: string): void {
-    this.refusal.set(undefined);
     const resultIds = resultId === undefined ? [] : [resultId];
     const expectedAdoptionId = this.standing().get(variantId)?.id;
-    this.store.dispatch(
-      ResultPageActions.adoptionConfirmed({
-        programmeId: this.programmeId(),
-        order: { variantId, comment, resultIds, rule: 'newest', expectedAdoptionId },
-      }),
-    );
+    this.decide({
+      kind: 'adopt',
+      adoptions: [{ variantId, resultIds, rule: 'newest', expectedAdoptionId }],
+      comment,
+    });
+  }
+
+  private decide(decision: EvidenceDecision): void {
+    this.refusal.set(undefined);
+    this.store.dispatch(ResultPageActions.decisionConfirmed({ programmeId: this.programmeId(), decision }));
   }
 
   /** A colleague chose meanwhile: show what stands now, and let the person decide again. */

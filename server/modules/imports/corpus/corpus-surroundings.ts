@@ -1,4 +1,5 @@
 import type { Facility } from '#shared/contracts/facilities';
+import { DEFAULT_LIMITS, policiesInputOf } from '#shared/core/checks/limits';
 import { reductionContextOf } from '#shared/core/reduction/reduction-context';
 import { nameKey, type CheckContext, type KnownVariant } from '../checking/check-context';
 
@@ -7,16 +8,24 @@ const VARIANTS: readonly (KnownVariant & { readonly aliases: readonly string[] }
   {
     key: '018f0000-0000-7000-8000-000000000001',
     name: 'Liftback',
+    bodyShape: 'liftback',
     frontalAreaM2: 2.2,
     aliases: ['LB 5-door'],
   },
   {
     key: '018f0000-0000-7000-8000-000000000002',
     name: 'Hatch',
+    bodyShape: 'hatch',
     frontalAreaM2: 2.17,
     aliases: ['Hatch – long', 'Hatch - long'],
   },
-  { key: '018f0000-0000-7000-8000-000000000003', name: 'Tourer', frontalAreaM2: 2.24, aliases: [] },
+  {
+    key: '018f0000-0000-7000-8000-000000000003',
+    name: 'Tourer',
+    bodyShape: 'estate',
+    frontalAreaM2: 2.24,
+    aliases: [],
+  },
 ];
 
 const FACILITIES: readonly Facility[] = [
@@ -57,7 +66,7 @@ const variantsByName = new Map<string, KnownVariant | 'skip'>([
     [variant.name, ...variant.aliases].map((known): [string, KnownVariant] => [nameKey(known), variant]),
   ),
   ['mule 7', 'skip'],
-  ['speedster', { key: 'new:speedster', name: 'Speedster', frontalAreaM2: 1.98 }],
+  ['speedster', { key: 'new:speedster', name: 'Speedster', bodyShape: 'coupe', frontalAreaM2: 1.98 }],
 ]);
 const facilitiesByName = new Map(FACILITIES.map((facility) => [nameKey(facility.name), facility]));
 
@@ -66,17 +75,20 @@ export const CORPUS_SURROUNDINGS: CheckContext = {
   variantOf: (text) => variantsByName.get(nameKey(text)),
   facilityOf: (text) => facilitiesByName.get(nameKey(text)),
   isNameTaken: (name) => nameKey(name) === 'r-001',
-  reduction: reductionContextOf({
-    programme: {
-      referenceSpeedKmh: 140,
-      referenceAir: { state: 'iso-2533-sea-level' },
-      characteristicLengthM: 4.5,
-      commonAreaM2: 2.2,
-      referenceCondition: { wheels: 'rotating' },
-      policies: { frictionLine: 'off', frictionShare: 0, frictionShareU: 0 },
-    },
-    facilities: [],
-    variants: [],
-    results: [],
-  }),
+  checks: {
+    limits: DEFAULT_LIMITS,
+    context: reductionContextOf({
+      programme: {
+        referenceSpeedKmh: 140,
+        referenceAir: { state: 'iso-2533-sea-level' },
+        characteristicLengthM: 4.5,
+        commonAreaM2: 2.2,
+        referenceCondition: { wheels: 'rotating' },
+        policies: policiesInputOf(DEFAULT_LIMITS, 0, 'on'),
+      },
+      facilities: [],
+      variants: [],
+      results: [],
+    }),
+  },
 };

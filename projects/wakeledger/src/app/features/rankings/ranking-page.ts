@@ -15,6 +15,7 @@ import { CHOICE_NAMES, type ChoiceName, type ChoiceQuery } from '#shared/core/ra
 import { lowestInputOfView } from '#shared/core/ranking/ranking-view-lowest';
 import { csvText } from '../../core/export/csv';
 import { saveText } from '../../core/export/save-file';
+import { saveWorkbook } from '../../core/export/workbook';
 import { Session } from '../../core/session/session';
 import { LowestProbabilities } from '../../data/rankings/lowest-probabilities';
 import { type RankingMode, RankingPageActions } from '../../data/rankings/rankings.actions';
@@ -163,6 +164,13 @@ export class RankingPage {
   protected saveCsv(): void {
     const view = this.view();
     if (view) saveText(csvText(rankingRows(view, this.lowest())), `${view.programmeName} ranking.csv`);
+  }
+
+  protected async saveAsWorkbook(): Promise<void> {
+    const view = this.view();
+    if (!view) return;
+    const rows = rankingRows(view, this.lowest());
+    await saveWorkbook([{ name: $localize`Ranking`, rows }], `${view.programmeName} ranking.xlsx`);
   }
 
   private worded(words: (view: NonNullable<ReturnType<RankingPage['view']>>) => string): string {

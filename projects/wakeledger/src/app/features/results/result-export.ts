@@ -1,10 +1,14 @@
-import { csvText } from '../../core/export/csv';
+import { csvText, type CsvCell } from '../../core/export/csv';
 import { CHECK_WORDS } from './result-check';
 import type { ResultRow } from './result-rows';
 
-/** The rows that are shown, in their order, as a file: plain numbers, units in the heads. */
 export function resultsCsv(rows: readonly ResultRow[]): string {
-  return csvText([
+  return csvText(resultsTable(rows));
+}
+
+/** The rows that are shown, in their order, as a table to take along: plain numbers, units in the heads. */
+export function resultsTable(rows: readonly ResultRow[]): readonly (readonly CsvCell[])[] {
+  return [
     [
       $localize`Result`,
       $localize`Variant`,
@@ -41,5 +45,5 @@ export function resultsCsv(rows: readonly ResultRow[]): string {
       row.adopted ? $localize`adopted` : '',
       row.session,
     ]),
-  ]);
+  ];
 }

@@ -21,6 +21,7 @@ import type {
 } from 'ag-grid-community';
 import { problemWords } from '../../core/errors/problem-words';
 import { saveText } from '../../core/export/save-file';
+import { saveWorkbook } from '../../core/export/workbook';
 import { Preferences } from '../../core/preferences/preferences';
 import { Session } from '../../core/session/session';
 import { facilitiesFeature } from '../../data/facilities/facilities.feature';
@@ -36,7 +37,7 @@ import { QuantityFormat } from '../../ui/quantity/quantity-format';
 import { GridMemory } from './grid-memory';
 import { CHECK_INKS, CHECK_SHAPES, CHECK_STATES, CHECK_WORDS, type CheckState } from './result-check';
 import { resultColumns } from './result-columns';
-import { resultsCsv } from './result-export';
+import { resultsCsv, resultsTable } from './result-export';
 import { resultRows, type ResultRow } from './result-rows';
 
 const GRID = 'results';
@@ -183,11 +184,20 @@ export class ResultListPage {
 
   /** What is shown, in its order: every filter and the sorting count. */
   protected save(): void {
+    saveText(resultsCsv(this.rowsInOrder()), $localize`results.csv`);
+  }
+
+  protected async saveAsWorkbook(): Promise<void> {
+    const rows = resultsTable(this.rowsInOrder());
+    await saveWorkbook([{ name: $localize`Results`, rows }], $localize`results.xlsx`);
+  }
+
+  private rowsInOrder(): readonly ResultRow[] {
     const rows: ResultRow[] = [];
     this.api?.forEachNodeAfterFilterAndSort(({ data }) => {
       if (data) rows.push(data);
     });
-    saveText(resultsCsv(rows), $localize`results.csv`);
+    return rows;
   }
 
   private addressOf({ id }: Pick<ResultRow, 'id'>): string {

@@ -2,6 +2,7 @@ import { Clipboard } from '@angular/cdk/clipboard';
 import { TestBed } from '@angular/core/testing';
 import type { Derivation } from './derivation';
 import { DerivationOpener } from './derivation-sheet';
+import { derivationSheets } from './derivation-sheets';
 import { derivationText, percent } from './derivation-text';
 
 const DERIVATION: Derivation = {
@@ -90,5 +91,53 @@ describe('the derivation sheet', () => {
       '     0 %  nothing',
     ]);
     expect(percent(0.001)).toBe('< 1 %');
+  });
+});
+
+describe('derivationSheets', () => {
+  it('takes the figure apart into value, U and unit', () => {
+    const [figure] = derivationSheets(DERIVATION);
+    expect(figure?.rows[1]).toEqual(['Dunlin Hatch, zero yaw.', 0.5941, 0.0082, 'm²']);
+  });
+
+  it('gives each step a row with its result as a number', () => {
+    const [, steps] = derivationSheets(DERIVATION);
+    expect(steps?.rows).toHaveLength(2);
+    expect(steps?.rows[1]).toEqual([
+      1,
+      'Dynamic pressure',
+      899.3456,
+      'Pa',
+      'q = ½ρU²',
+      '½ × 1.18932 × U_m²',
+      'moist air after CIPM-2007',
+      'dynamic-pressure@1',
+      undefined,
+      'relative humidity 44 %',
+      'Over 5 %',
+    ]);
+  });
+
+  it('keeps what is no number as text, and leaves the uncertainty out where there is none', () => {
+    const [step] = DERIVATION.steps;
+    const words = { shown: 'as stated', plain: 'as stated' };
+    const sheets = derivationSheets({
+      ...DERIVATION,
+      figure: { ...DERIVATION.figure, plain: '0.59 m²' },
+      steps: [{ ...step!, result: words }],
+      budget: [],
+    });
+    expect(sheets).toHaveLength(2);
+    expect(sheets[0]?.rows[1]).toEqual(['Dunlin Hatch, zero yaw.', 0.59, undefined, 'm²']);
+    expect(sheets[1]?.rows[1]?.slice(2, 4)).toEqual(['as stated', undefined]);
+  });
+
+  it('lists every contribution with its share of the variance', () => {
+    const [, , budget] = derivationSheets(DERIVATION);
+    expect(budget?.rows.slice(1)).toEqual([
+      ['session', 0.3],
+      ['facility bias', 0.7, 0.00312, 'm²'],
+      ['nothing', 0],
+    ]);
   });
 });

@@ -2,9 +2,11 @@ import { Clipboard } from '@angular/cdk/clipboard';
 import { DIALOG_DATA, Dialog, DialogRef } from '@angular/cdk/dialog';
 import { Overlay } from '@angular/cdk/overlay';
 import { ChangeDetectionStrategy, Component, Injectable, computed, inject, signal } from '@angular/core';
+import { saveWorkbook } from '../../core/export/workbook';
 import { Formula } from '../formula/formula';
 import { Symbols } from '../formula/symbols';
 import type { Derivation } from './derivation';
+import { derivationSheets } from './derivation-sheets';
 import { derivationText, percent } from './derivation-text';
 
 /** The chain of steps from what was measured to the figure on screen, as a sheet from the right. */
@@ -30,6 +32,10 @@ export class DerivationSheet {
 
   protected copy(): void {
     this.copied.set(this.clipboard.copy(derivationText(this.derivation)) ? 'yes' : 'failed');
+  }
+
+  protected async saveAsWorkbook(): Promise<void> {
+    await saveWorkbook(derivationSheets(this.derivation), $localize`derivation.xlsx`);
   }
 
   protected close(): void {

@@ -24,12 +24,8 @@ function traced(
   });
   const reduced = reduceResults(input);
   const evidence = pickEvidence(input.variants, reduced, basis).chosen[0]!;
-  const trace = traceOfCombination(
-    { variantId: 'a', reductions: reduced.reductions, combination: evidence.combination! },
-    reduced.context,
-    basis,
-    new Map([['a', 'Estate']]),
-  );
+  const names = new Map([['a', 'Estate']]);
+  const trace = traceOfCombination('a', reduced.reductions, reduced.context, basis, names);
   const { dragAreaM2, standardUncertaintyM2: u } = figureOf(evidence.figure);
   return { trace, dragAreaM2, u };
 }

@@ -1,18 +1,26 @@
-import type { Combination } from '../combination/combination';
+import { combine, type Combination } from '../combination/combination';
 import type { Basis } from '../ranking/ranking-input';
 import type { Reduction, ReductionContext } from '../reduction/reduction';
-import { figureOf } from '../uncertainty/budget';
+import { refuse } from '../refusal';
+import { figureOf, type KeyedFigure } from '../uncertainty/budget';
 import { COMBINATION_METHODS as METHODS } from './combination-methods';
 import { stepOf, type Derivation, type DerivationStep } from './derivation';
 import { inValues, joined } from './in-values';
 import type { KeyNames } from './key-labels';
 import { budgetShares, traceOfReduction, uncertaintyStep } from './trace-of-figure';
 
-/** A weighted mean at hand: the results that it used, in the order of its weights. */
-export interface CombinedEvidence {
-  readonly variantId: string;
+/** Results of one variant with their mean on a basis, in the order of its weights. */
+interface CombinedResults {
   readonly reductions: readonly Reduction[];
+  readonly figures: readonly KeyedFigure[];
   readonly combination: Combination;
+}
+
+/** @throws {Refused} the code why a result has no wind average */
+function figureOn(basis: Basis, { zeroYaw, windAverage, output }: Reduction): KeyedFigure {
+  if (basis === 'zero-yaw') return zeroYaw;
+  if (windAverage.figure !== null) return windAverage.figure;
+  return refuse(windAverage.refusal, `result:${output.resultId}`, 'There is no wind average of this result.');
 }
 
 const resultName = ({ parts: { result } }: Reduction): string => result.name ?? result.id;
@@ -28,11 +36,11 @@ function stepsOfResult(
   return steps.slice(0, -1).map((step) => ({ ...step, title: `${resultName(reduction)}: ${step.title}` }));
 }
 
-function meanStep({ reductions, combination }: CombinedEvidence, basis: Basis): DerivationStep {
-  const parts = reductions.map((reduction, i) => {
-    const figure = basis === 'wind-averaged' ? reduction.windAverage.figure : reduction.zeroYaw;
-    return inValues`${combination.weights[i]} × ${figure?.dragAreaM2} m² (${resultName(reduction)})`;
-  });
+function meanStep({ reductions, figures, combination }: CombinedResults): DerivationStep {
+  const parts = reductions.map(
+    (reduction, i) =>
+      inValues`${combination.weights[i]} × ${figures[i]?.dragAreaM2} m² (${resultName(reduction)})`,
+  );
   return stepOf(METHODS.weightedMean, {
     values: joined(parts, ' + '),
     value: combination.figure.dragAreaM2,
@@ -40,7 +48,7 @@ function meanStep({ reductions, combination }: CombinedEvidence, basis: Basis): 
   });
 }
 
-function agreementSteps({ reductions, combination }: CombinedEvidence): readonly DerivationStep[] {
+function agreementSteps({ reductions, combination }: CombinedResults): readonly DerivationStep[] {
   const { birgeRatio, chiSquared, betweenResultsVarianceM4, randomEffectsMeanM2 } = combination;
   if (birgeRatio === null) return [];
   return [
@@ -64,33 +72,36 @@ function agreementSteps({ reductions, combination }: CombinedEvidence): readonly
 }
 
 /**
- * The derivation of a weighted mean: every result from its raw value to the reference, then the mean, how the results agree, and the budget.
+ * The derivation of a weighted mean of a variant's results, given oldest first as the ranking uses them: every result from its raw value to the
+ * reference, then the mean, how the results agree, and the budget.
  *
- * @throws {Refused} the code why a result has no wind average, where that basis is asked for
+ * @throws {Refused} nothing-to-combine, uncertainty-zero, the code why a result has no wind average where that basis is asked for
  */
 export function traceOfCombination(
-  evidence: CombinedEvidence,
+  variantId: string,
+  reductions: readonly Reduction[],
   context: ReductionContext,
   basis: Basis,
   names: KeyNames,
 ): Derivation {
-  const { combination, reductions, variantId } = evidence;
-  const figure = figureOf(combination.figure);
-  const results = reductions.flatMap((reduction) => stepsOfResult(reduction, context, basis, names));
+  const figures = reductions.map((reduction) => figureOn(basis, reduction));
+  const combined = { reductions, figures, combination: combine(figures, variantId) };
+  const keyed = combined.combination.figure;
+  const figure = figureOf(keyed);
+  const count = `${reductions.length} ${reductions.length === 1 ? 'result' : 'results'}`;
+  const inWords = basis === 'wind-averaged' ? 'wind-averaged' : 'zero yaw';
   return {
-    title: `Drag area C_D·A of ${names.get(variantId) ?? variantId}, weighted mean of ${reductions.length} ${
-      reductions.length === 1 ? 'result' : 'results'
-    }, ${basis === 'wind-averaged' ? 'wind-averaged' : 'zero yaw'}`,
+    title: `Drag area C_D·A of ${names.get(variantId) ?? variantId}, weighted mean of ${count}, ${inWords}`,
     value: figure.dragAreaM2,
     unit: 'm²',
     standardUncertainty: figure.standardUncertaintyM2,
     expandedUncertainty: figure.expandedUncertaintyM2,
     coverageFactor: figure.coverageFactor,
     steps: [
-      ...results,
-      meanStep(evidence, basis),
-      ...agreementSteps(evidence),
-      uncertaintyStep(combination.figure),
+      ...reductions.flatMap((reduction) => stepsOfResult(reduction, context, basis, names)),
+      meanStep(combined),
+      ...agreementSteps(combined),
+      uncertaintyStep(keyed),
     ],
     budget: budgetShares(figure.contributions, names),
   };

@@ -1,9 +1,13 @@
+import type { Combination } from '../combination/combination';
+import { COMBINATION_METHODS } from '../derivation/combination-methods';
 import { methodChain } from '../derivation/derivation';
+import { nameOf } from '../derivation/method';
 import { traceOfReduction } from '../derivation/trace-of-figure';
 import { excludedResults, reduceResults, type ReducedSet } from '../reduction/reduce';
 import type { Reduction } from '../reduction/reduction';
 import { byCodeUnits } from '../text-order';
 import { figureOf } from '../uncertainty/budget';
+import { rankedVariants } from './drag-ranking';
 import { pickEvidence, type VariantEvidence } from './evidence';
 import type { EvaluatedResult, EvaluationOutput } from './evaluation-output';
 import type { Basis, RankingInput } from './ranking-input';
@@ -35,13 +39,22 @@ function evidenceOn(basis: Basis, input: RankingInput, reduced: ReducedSet): Var
 }
 
 /** The methods of every result that was used, each once; the longer chain where there is a wind average. */
-function methodsOf(reduced: ReducedSet, usedResultIds: readonly string[]): readonly string[] {
-  const used = reduced.reductions.filter(({ output }) => usedResultIds.includes(output.resultId));
+function methodsOf(reduced: ReducedSet, evidence: VariantEvidence | undefined): readonly string[] {
+  const used = reduced.reductions.filter(({ output }) => evidence?.resultIds.includes(output.resultId));
   const chains = used.flatMap((reduction) => {
     const basis = reduction.windAverage.figure === null ? 'zero-yaw' : 'wind-averaged';
     return methodChain(traceOfReduction(reduction, reduced.context, basis, new Map()));
   });
-  return [...new Set(chains)];
+  return [...new Set([...chains, ...combinationMethods(evidence?.combination ?? null)])];
+}
+
+/** What a weighted mean adds to the methods of its results; one result has nothing to agree with. */
+function combinationMethods(combination: Combination | null): readonly string[] {
+  if (combination === null) return [];
+  const { weightedMean, birgeRatio, randomEffects } = COMBINATION_METHODS;
+  const methods =
+    combination.birgeRatio === null ? [weightedMean] : [weightedMean, birgeRatio, randomEffects];
+  return methods.map(nameOf);
 }
 
 /**
@@ -60,10 +73,10 @@ export function evaluateEvidence(input: RankingInput): EvidenceEvaluation {
       zeroYaw: zeroYaw === undefined ? null : figureOf(zeroYaw.figure),
       windAveraged: windAveraged === undefined ? null : figureOf(windAveraged.figure),
       usedResultIds,
-      combination: null,
+      combination: (zeroYaw && rankedVariants([zeroYaw], 1)[0]?.combination) ?? null,
       results: reduced.reductions.map(evaluatedResult).sort((a, b) => byCodeUnits(a.resultId, b.resultId)),
       excluded: excludedResults(reduced, 'zero-yaw').map(({ resultId, rules }) => ({ resultId, rules })),
     },
-    methods: methodsOf(reduced, usedResultIds),
+    methods: methodsOf(reduced, zeroYaw),
   };
 }

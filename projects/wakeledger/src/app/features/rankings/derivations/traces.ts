@@ -1,5 +1,6 @@
 import type { Derivation as Trace } from '#shared/core/derivation/derivation';
 import type { KeyNames } from '#shared/core/derivation/key-labels';
+import { traceOfCombination } from '#shared/core/derivation/trace-of-combination';
 import { traceOfEnergy } from '#shared/core/derivation/trace-of-energy';
 import { traceOfReduction } from '#shared/core/derivation/trace-of-figure';
 import type { RankingView, ViewRow } from '#shared/core/ranking/ranking-view';
@@ -25,12 +26,17 @@ export function dragTrace(
   view: RankingView,
   sources: DerivationSources,
 ): Trace | null {
-  const resultId = row.evidence.at(-1)?.resultId;
-  const reduction = sources.reduced.reductions.find(({ output }) => output.resultId === resultId);
-  if (!reduction) return null;
+  const { reductions, context } = sources.reduced;
+  const used = row.evidence.flatMap(
+    ({ resultId }) => reductions.find(({ output }) => output.resultId === resultId) ?? [],
+  );
+  const newest = used.at(-1);
+  if (!newest) return null;
   // Energy stands on the zero-yaw drag area, as the regulations do.
   const basis = kind === 'energy' ? 'zero-yaw' : view.basis;
-  return traceOfReduction(reduction, sources.reduced.context, basis, keyNames(sources));
+  return row.rule === 'weighted-mean'
+    ? traceOfCombination(row.variantId, used, context, basis, keyNames(sources))
+    : traceOfReduction(newest, context, basis, keyNames(sources));
 }
 
 /** From the zero-yaw drag area on to the energy at the wheel. */

@@ -2,6 +2,7 @@ import type { ServerModule } from '../http/module';
 import { adjustmentsModule } from './adjustments';
 import { attachmentsModule } from './attachments';
 import { auditModule } from './audit';
+import { correlationPairsModule } from './correlation-pairs';
 import { correlationsModule } from './correlations';
 import { cyclesModule } from './cycles';
 import { evaluationsModule } from './evaluations';
@@ -28,6 +29,7 @@ export const MODULES: readonly ServerModule[] = [
   testSessionsModule,
   adjustmentsModule,
   correlationsModule,
+  correlationPairsModule,
   policiesModule,
   cyclesModule,
   resultsModule,

@@ -94,6 +94,7 @@ export const rankingContext: z.ZodType<RankingContext, RankingContext> = z.stric
   policyNumber: z.int().nullable(),
   sessions: z.array(z.strictObject({ id: text, name: text })),
   facilityVersions: z.array(z.strictObject({ facilityId: text, number: z.int() })),
+  correlations: z.array(z.strictObject({ id: text, name: text, number: z.int(), since: text, by: text })),
   cycles: z.array(
     z.strictObject({
       key: text,

@@ -117,6 +117,7 @@ function contextOf(inputs: RankingInput): RankingContext {
     policyNumber: null,
     sessions: [{ id: 'autumn', name: 'Autumn entry' }],
     facilityVersions: [{ facilityId: 'belt', number: 1 }],
+    correlations: [],
     cycles: [SHORT_CYCLE],
   };
 }

@@ -1,7 +1,9 @@
+import { policiesInputOf, type CheckLimits } from '#shared/core/checks/limits';
 import { judgedResult, type ResultJudgement } from '#shared/core/ranking/judged-result';
 import type { AreaChoice } from '#shared/core/ranking/ranking-choices';
 import type { CommonAreaPolicy, RankingContext } from '#shared/core/ranking/ranking-context';
 import type {
+  AdjustmentInput,
   FacilityInput,
   PointInput,
   RankingInput,
@@ -13,6 +15,8 @@ import {
   ruledVariants,
   type ConsideredEvidence,
 } from '#shared/core/ranking/ranking-view-input';
+import type { CorrelationInUse } from '../correlations';
+import { withSweeps } from '#shared/core/ranking/sweeps';
 import { decisionsOf } from './ranking-decisions';
 import type {
   AdoptionRow,
@@ -36,6 +40,11 @@ export interface ProgrammeRows {
   readonly adoptions: readonly AdoptionRow[];
   readonly judgements: readonly JudgementRow[];
   readonly facilityVersions: RankingContext['facilityVersions'];
+  /** The organisation's limits in force. */
+  readonly policies: { readonly number: number; readonly values: CheckLimits };
+  readonly adjustments: readonly AdjustmentInput[];
+  /** To the programme's reference facility, as they are used today. */
+  readonly correlations: readonly CorrelationInUse[];
 }
 
 /** And what only the inputs of the method need. */
@@ -43,9 +52,6 @@ export interface RankingRows extends ProgrammeRows {
   readonly facilities: readonly FacilityRow[];
   readonly points: readonly PointRow[];
 }
-
-/** Reynolds corrections are off until they can be chosen: nothing of method section 6 enters. */
-const POLICIES = { frictionLine: 'off', frictionShare: 0, frictionShareU: 0 } as const;
 
 type Present<T> = { [K in keyof T]?: Exclude<T[K], null> };
 
@@ -207,7 +213,7 @@ export function rankingInputs(
     return area ? [variantInput(variant, area, configurationsOf.get(variant.id)?.[0])] : [];
   });
   const models = [...new Set(considered.flatMap(({ modelId }) => modelId ?? []))].sort();
-  return {
+  const document: RankingInput = {
     programme: {
       name: programme.name,
       referenceSpeedKmh: programme.referenceSpeedKmh,
@@ -218,13 +224,34 @@ export function rankingInputs(
       ...present({ referenceFacilityId: programme.referenceFacilityId }),
       referenceCondition: programme.referenceCondition,
       windSpeedMs: programme.windSpeedMs,
-      policies: POLICIES,
+      policies: policiesInputOf(rows.policies.values, rows.policies.number, programme.frictionLine),
     },
     facilities: rows.facilities.map(facilityInput),
     models: models.map((id) => ({ id, name: id })),
     variants: evidence === 'adopted' ? ruledVariants(variants, decisions, evidence) : variants,
     results: considered,
+    adjustments: rows.adjustments,
+    correlations: correlationsOf(rows).map(({ input }) => input),
   };
+  // The sweep of a result that is ranked may be that of one that is not.
+  return withSweeps(document, results);
+}
+
+/** Of the correlations in use those from facilities that the programme has results of. */
+function correlationsOf({ correlations, results }: ProgrammeRows): readonly CorrelationInUse[] {
+  const facilities = new Set(results.map(({ facilityId }) => facilityId));
+  return correlations.filter(({ input }) => facilities.has(input.facilityId));
+}
+
+/** What a person is told of the correlations that the inputs hold. */
+export function contextCorrelations(rows: ProgrammeRows): RankingContext['correlations'] {
+  return correlationsOf(rows).map(({ input, name, number, since, adoptedBy }) => ({
+    id: input.id,
+    name,
+    number,
+    since,
+    by: adoptedBy,
+  }));
 }
 
 /** The entries in facilities that results name, each once, by name. */

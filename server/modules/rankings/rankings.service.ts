@@ -7,9 +7,14 @@ import { buildRankingView } from '#shared/core/ranking/ranking-view-build';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
 import type { MemberContext } from '../../http/context';
 import { fail } from '../../http/problem-error';
+import { dayOf } from '../../rules/clock';
+import { adjustmentInputs } from '../adjustments';
+import { correlationsInUse } from '../correlations';
 import { currentVersions } from '../facilities';
+import { policiesInForce } from '../policies';
 import {
   commonAreaOf,
+  contextCorrelations,
   contextVariants,
   rankingInputs,
   sessionsOf,
@@ -21,7 +26,8 @@ import { decisionsOf } from './ranking-decisions';
 import * as repository from './rankings.repository';
 import { withoutRawEvidence } from './rankings.policy';
 
-type Tx = MemberContext['tx'];
+/** The transaction to read in, and the moment: correlations are used from a date on. */
+type Reading = Pick<MemberContext, 'tx' | 'now'>;
 
 /** Facilities that the ranking reduces with: those of its results and that of the programme's sign-off. */
 function facilityIdsOf({ programme, results }: Pick<ProgrammeRows, 'programme' | 'results'>): string[] {
@@ -30,27 +36,31 @@ function facilityIdsOf({ programme, results }: Pick<ProgrammeRows, 'programme' |
   return [...ids];
 }
 
-async function programmeRows(tx: Tx, programmeId: string): Promise<ProgrammeRows> {
+async function programmeRows({ tx, now }: Reading, programmeId: string): Promise<ProgrammeRows> {
   const programme = (await repository.findProgramme(tx, programmeId)) ?? fail('not-found');
   const results = await repository.listResults(tx, programmeId);
+  const variants = await repository.listVariants(tx, programmeId);
   return {
     programme,
-    variants: await repository.listVariants(tx, programmeId),
+    variants,
     areas: await repository.newestAreas(tx, programmeId),
     configurations: await repository.listConfigurations(tx, programmeId),
     results,
     facilityVersions: await currentVersions(tx, facilityIdsOf({ programme, results })),
     adoptions: await repository.currentAdoptions(tx, programmeId),
     judgements: await repository.currentJudgements(tx, programmeId),
+    policies: await policiesInForce(tx),
+    adjustments: await adjustmentInputs(tx, variants),
+    correlations: await correlationsInUse(tx, programme.referenceFacilityId, dayOf(now)),
   };
 }
 
-async function rankingRows(tx: Tx, programmeId: string): Promise<RankingRows> {
-  const rows = await programmeRows(tx, programmeId);
+async function rankingRows(reading: Reading, programmeId: string): Promise<RankingRows> {
+  const rows = await programmeRows(reading, programmeId);
   return {
     ...rows,
-    facilities: await repository.facilitiesById(tx, facilityIdsOf(rows)),
-    points: await repository.listPoints(tx, programmeId),
+    facilities: await repository.facilitiesById(reading.tx, facilityIdsOf(rows)),
+    points: await repository.listPoints(reading.tx, programmeId),
   };
 }
 
@@ -70,12 +80,12 @@ function commonArea(rows: ProgrammeRows, asked: AreaChoice): CommonArea {
 
 /** The inputs of the ranking, in the shape that the machine entry takes. */
 export async function readRankingInputs(
-  { tx }: MemberContext,
+  reading: Reading,
   programmeId: string,
   area: RankingQuery['area'],
   evidence: ConsideredEvidence,
 ): Promise<RankingInput> {
-  const rows = await rankingRows(tx, programmeId);
+  const rows = await rankingRows(reading, programmeId);
   return rankingInputs(rows, commonArea(rows, choicesOf({ area }).area).areaM2, evidence);
 }
 
@@ -89,11 +99,8 @@ export interface EvidenceDocument {
  * Evidence stands without a common area: no drag area depends on one. Where none is chosen yet, the first variant's own
  * takes its place in the document.
  */
-export async function readEvidenceDocument(
-  { tx }: Pick<MemberContext, 'tx'>,
-  programmeId: string,
-): Promise<EvidenceDocument> {
-  const rows = await rankingRows(tx, programmeId);
+export async function readEvidenceDocument(reading: Reading, programmeId: string): Promise<EvidenceDocument> {
+  const rows = await rankingRows(reading, programmeId);
   const areaM2 = commonAreaOf(rows, { kind: 'programme' })?.areaM2 ?? rows.areas[0]?.areaM2 ?? 1;
   return {
     inputs: rankingInputs(rows, areaM2, 'all'),
@@ -119,20 +126,22 @@ function contextOf(
     },
     variants: contextVariants(rows),
     ...decisionsOf(rows),
-    policyNumber: null,
+    policyNumber: rows.policies.number === 0 ? null : rows.policies.number,
     sessions: sessionsOf(rows.results),
     facilityVersions: rows.facilityVersions,
+    correlations: contextCorrelations(rows),
     cycles,
   };
 }
 
 /** What the ranking screen needs beside the inputs, the traces of all cycles included. */
 export async function readRankingContext(
-  { tx }: MemberContext,
+  reading: Reading,
   programmeId: string,
   query: RankingQuery,
 ): Promise<RankingContext> {
-  const rows = await programmeRows(tx, programmeId);
+  const { tx } = reading;
+  const rows = await programmeRows(reading, programmeId);
   const area = commonArea(rows, choicesOf(query).area);
   const cycles = await repository.listCycles(tx, 'all');
   return contextOf(rows, area, cycles, await repository.listMilestones(tx, programmeId));
@@ -149,12 +158,13 @@ function choicesOf(query: RankingQuery): RankingChoices {
 
 /** The ranking as it is shown, computed here for those who may not hold the inputs. */
 export async function readRankingView(
-  { tx }: MemberContext,
+  reading: Reading,
   programmeId: string,
   query: RankingQuery,
 ): Promise<RankingView> {
+  const { tx } = reading;
   const choices = choicesOf(query);
-  const rows = await rankingRows(tx, programmeId);
+  const rows = await rankingRows(reading, programmeId);
   const area = commonArea(rows, choices.area);
   const inputs = rankingInputs(rows, area.areaM2, 'all');
   const context = contextOf(rows, area, await repository.listCycles(tx, choices.cycle));

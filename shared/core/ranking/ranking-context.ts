@@ -52,6 +52,15 @@ export interface ContextReason {
   readonly by: string;
 }
 
+/** A version of a correlation that is in use; `since` is a date. */
+export interface ContextCorrelation {
+  readonly id: string;
+  readonly name: string;
+  readonly number: number;
+  readonly since: string;
+  readonly by: string;
+}
+
 export interface ContextCycle {
   readonly key: string;
   readonly name: string;
@@ -81,5 +90,7 @@ export interface RankingContext {
   readonly sessions: readonly { readonly id: string; readonly name: string }[];
   /** Which version of each facility's corrections and uncertainties the inputs hold. */
   readonly facilityVersions: readonly { readonly facilityId: string; readonly number: number }[];
+  /** Which versions of correlations the inputs hold, by the version's id, and since when and by whom they are used. */
+  readonly correlations: readonly ContextCorrelation[];
   readonly cycles: readonly ContextCycle[];
 }

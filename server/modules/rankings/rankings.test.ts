@@ -114,7 +114,7 @@ describe('the ranking over HTTP', () => {
     expect(answer.programme).toMatchObject({
       name: 'Dunlin',
       commonAreaM2: 2.19,
-      policies: { frictionLine: 'off', frictionShare: 0, frictionShareU: 0 },
+      policies: { policyId: 'v0', frictionLine: 'on', frictionShare: 0.12, frictionShareU: 0.06 },
     });
     expect(answer.variants.map(({ name }) => name)).toEqual(['Hatch', 'Liftback', 'Sport']);
     expect(answer.variants[0]).toMatchObject({

@@ -2,6 +2,7 @@ import type { JudgementOrder } from '#shared/contracts/judgements';
 import type { Result } from '#shared/contracts/results';
 import { judgedResult } from '#shared/core/ranking/judged-result';
 import type { RankingInput, ResultInput } from '#shared/core/ranking/ranking-input';
+import { withSweeps } from '#shared/core/ranking/sweeps';
 import { reduceResults } from '#shared/core/reduction/reduce';
 import type { Issue } from '../../rules/issue';
 
@@ -83,7 +84,7 @@ function reducedAs(
   inputs: RankingInput,
   result: ResultInput,
 ): { readonly code?: string; readonly detail?: string; readonly excludedBy: readonly string[] } {
-  const { reductions, refused } = reduceResults({ ...inputs, results: [result] });
+  const { reductions, refused } = reduceResults(withSweeps({ ...inputs, results: [result] }, inputs.results));
   const [refusal] = refused;
   if (refusal !== undefined) return { code: refusal.code, detail: refusal.detail, excludedBy: [] };
   return { excludedBy: reductions[0]?.output.excludedBy ?? [] };

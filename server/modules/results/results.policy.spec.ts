@@ -120,11 +120,25 @@ describe('a result', () => {
     );
   });
 
-  it('refuses zero-yaw readings at different speeds, yet takes other speeds at other angles', () => {
-    expect(issuesOf({ points: [point({}), point({ speedKmh: 100 })] })[0]?.reason).toBe(
-      'zero-yaw-mixed-speeds',
-    );
+  it('takes zero-yaw readings at several speeds for a Reynolds sweep, with four of them that reach to 1.5 times', () => {
+    const sweep = (...speeds: readonly number[]) =>
+      issuesOf({ points: speeds.map((speedKmh) => point({ speedKmh })) }).map(({ reason }) => reason);
+    expect(sweep(100, 120, 140, 150)).toEqual([]);
+    expect(sweep(100, 150)).toEqual(['sweep-too-few-points']);
+    expect(sweep(100, 110, 120, 149)).toEqual(['sweep-too-narrow']);
+    expect(sweep(100, 101)).toEqual(['sweep-too-few-points', 'sweep-too-narrow']);
+    expect(sweep(140, 140, 140, 140)).toEqual([]);
     expect(issuesOf({ points: [point({}), point({ yawDeg: 5, speedKmh: 100 })] })).toEqual([]);
+  });
+
+  it('compares the speeds of a sweep by dynamic pressure where that is all it states', () => {
+    const sweep = (...pressures: readonly number[]) =>
+      issuesOf({
+        speedKmh: undefined,
+        points: pressures.map((dynamicPressurePa) => point({ dynamicPressurePa })),
+      }).map(({ reason }) => reason);
+    expect(sweep(400, 600, 800, 900)).toEqual([]);
+    expect(sweep(400, 600, 800, 890)).toEqual(['sweep-too-narrow']);
   });
 
   it('as a coastdown is full size, on a road, and without lift', () => {

@@ -2,6 +2,7 @@ import type { FacilityFields } from '#shared/contracts/facilities';
 import type { ResultFields, ResultPoint } from '#shared/contracts/results';
 import { airIssues } from '../../rules/air-rules';
 import { Issues, type Issue } from '../../rules/issue';
+import { sweepIssues } from './sweep.policy';
 
 /** Angles closer than this are one (method section 7). */
 const SAME_ANGLE_DEG = 1e-9;
@@ -198,15 +199,9 @@ function dragOf(point: ResultPoint, fields: ResultFields): number {
   return subtract ? point.value - (point.tareN ?? fields.tareN ?? 0) : point.value;
 }
 
-/** Everything is compared at zero yaw, so a result has a reading there; repeats of one angle are welcome. */
+/** Everything is compared at zero yaw, so a result has a reading there; repeats are welcome, and so is a Reynolds sweep. */
 function zeroYawIssues(fields: ResultFields): readonly Issue[] {
   const atZero = fields.points.filter((point) => Math.abs(point.yawDeg) <= SAME_ANGLE_DEG);
-  const speeds = new Set(
-    atZero.map(
-      (point) =>
-        point.speedKmh ?? fields.speedKmh ?? `${point.dynamicPressurePa ?? fields.dynamicPressurePa} Pa`,
-    ),
-  );
   return new Issues()
     .when(
       atZero.length === 0,
@@ -214,10 +209,5 @@ function zeroYawIssues(fields: ResultFields): readonly Issue[] {
       'A result needs a reading at zero yaw, which is what variants are compared by. Add one with yaw 0.',
       'yaw-no-zero',
     )
-    .when(
-      speeds.size > 1,
-      'points',
-      'The readings at zero yaw were taken at different speeds. Enter one result per speed.',
-      'zero-yaw-mixed-speeds',
-    ).list;
+    .add(sweepIssues(atZero, fields)).list;
 }

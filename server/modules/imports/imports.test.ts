@@ -401,7 +401,7 @@ describe('an import over HTTP', () => {
 
   it.each([
     ['renamed-program.csv', 'unsupported-file', 'Windows program'],
-    ['renamed-workbook.csv', 'unsupported-file', 'Excel'],
+    ['cut-off-workbook.csv', 'unusable-input', 'damaged'],
     ['nul-bytes.csv', 'unsupported-file', 'NUL'],
     ['only-headings.csv', 'unusable-input', 'no row'],
     ['open-quotation-mark.csv', 'unusable-input', 'quotation mark'],

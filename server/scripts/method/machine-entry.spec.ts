@@ -154,7 +154,7 @@ describe('The command', () => {
   it('lists its operations, one a line', () => {
     expect(call(['--list'])).toEqual({
       stdout:
-        'air\nblockage\nyaw\nreynolds-sweep\nfriction-line\ncorrelation\nbudget\nrank\nreduce\ncycle-energy\npowertrain\nplan\nstudent-quantile\n',
+        'air\nblockage\nyaw\nreynolds-sweep\nfriction-line\ncorrelation\nbudget\nrank\nreduce\ncycle-energy\npowertrain\ncombine\nplan\nstudent-quantile\n',
       stderr: '',
       status: 0,
     });

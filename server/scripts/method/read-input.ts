@@ -1,5 +1,6 @@
 import type * as z from 'zod';
 import { Refused, refuse } from '#shared/core/refusal';
+import { REFUSAL_TITLES } from './refusal-titles';
 
 type Issue = z.core.$ZodIssue;
 type Path = readonly PropertyKey[];
@@ -48,6 +49,11 @@ function codeOf(issue: Issue, value: unknown, path: Path): string {
   return 'malformed-input';
 }
 
+function wordsOf(code: string, where: string, message: string): string {
+  if (code === 'missing-input') return `${where} is missing.`;
+  return OWN_CODES.has(message) ? `${where}: ${REFUSAL_TITLES[code] ?? message}` : message;
+}
+
 function refusalOf(issue: Issue, root: unknown, above: Path = []): Refused {
   const path = [...above, ...issue.path];
   const value = valueAt(root, path);
@@ -57,7 +63,7 @@ function refusalOf(issue: Issue, root: unknown, above: Path = []): Refused {
   }
   const where = pathOf(issue.code === 'unrecognized_keys' ? [...path, issue.keys[0] ?? ''] : path);
   const code = codeOf(issue, value, path);
-  return new Refused(code, where, code === 'missing-input' ? `${where} is missing.` : issue.message);
+  return new Refused(code, where, wordsOf(code, where, issue.message));
 }
 
 /** @throws {Refused} not-json */

@@ -84,8 +84,11 @@ export function fitCorrelation(pairs: readonly CorrelationPairInput[], where = '
     refuse('correlation-no-spread', where, 'All pairs have the same drag area: there is no slope in them.');
   }
   const total = sum(weights);
-  const weightedMean = (values: readonly number[]): number =>
-    sum(values.map((value, i) => (weights[i] ?? NaN) * value)) / total;
+  // From the first value on, so that equal values have exactly themselves as their mean and no slope from rounding.
+  const weightedMean = (values: readonly number[]): number => {
+    const first = values[0] ?? NaN;
+    return first + sum(values.map((value, i) => (weights[i] ?? NaN) * (value - first))) / total;
+  };
   const centroidM2 = weightedMean(x);
   const referenceCentroidM2 = weightedMean(y);
   const distances = x.map((value) => value - centroidM2);

@@ -10,6 +10,7 @@ import { COMPARISON_METHODS, ENERGY_METHODS } from './energy-methods';
 import { keyLabel } from './key-labels';
 import { nameOf, type Method } from './method';
 import { REDUCTION_METHODS } from './reduction-methods';
+import { REFERENCE_METHODS } from './reference-methods';
 import { traceOfEnergy } from './trace-of-energy';
 import { onCommonArea, traceOfFigure } from './trace-of-figure';
 
@@ -150,9 +151,12 @@ describe('A derivation', () => {
 });
 
 describe('Every method', () => {
-  const methods: readonly Method[] = [REDUCTION_METHODS, ENERGY_METHODS, COMPARISON_METHODS].flatMap((set) =>
-    Object.values(set),
-  );
+  const methods: readonly Method[] = [
+    REDUCTION_METHODS,
+    REFERENCE_METHODS,
+    ENERGY_METHODS,
+    COMPARISON_METHODS,
+  ].flatMap((set) => Object.values(set));
   const page = readFileSync(join(__dirname, '..', 'METHODS.md'), 'utf8');
 
   it('has a name of its own', () => {

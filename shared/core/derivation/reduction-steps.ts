@@ -1,15 +1,21 @@
 import { CELSIUS_ZERO_K, KMH_PER_MS } from '../constants';
 import { correctForBlockage } from '../reduction/blockage';
 import { measuredDragArea, pointFlow } from '../reduction/measured-value';
-import type { ReducedPoint, Reduction, ReductionContext, ResultParts } from '../reduction/reduction';
+import type {
+  ReducedPoint,
+  Reduction,
+  ReductionContext,
+  ResultParts,
+  ReynoldsStep,
+} from '../reduction/reduction';
 import { needed } from '../reduction/result-parts';
 import { fullScaleDragArea } from '../reduction/scale';
-import { differingItems } from '../similarity/condition';
 import type { PointInput, ResultInput } from '../ranking/ranking-input';
 import { isZeroYaw } from '../reduction/yaw/yaw-points';
 import { stepOf, type DerivationStep } from './derivation';
-import { inValues, joined } from './in-values';
+import { inValues, joined, plain } from './in-values';
 import { REDUCTION_METHODS as METHODS } from './reduction-methods';
+import { referenceSteps, type StepsToFigure } from './reference-steps';
 
 /** The cautions that belong to one step, in words. */
 function cautionIf(condition: boolean, words: string): string[] {
@@ -111,6 +117,7 @@ function blockageSteps(
   const { facility, tunnel, result } = parts;
   const { blockage } = facility;
   if (tunnel === null || blockage == null || result.blockageAlreadyCorrectedBy != null) return [];
+  if (parts.replaced.blockage) return [];
   const method = Object.entries(BLOCKAGE_METHODS).find(([name]) => name === blockage.method)?.[1];
   if (method === undefined) return [];
   const { blockageRatio, areaM2 } = tunnel;
@@ -131,7 +138,10 @@ function blockageSteps(
   ];
 }
 
-function fullScaleStep({ scale, result, model }: ResultParts, correctedM2: number): DerivationStep {
+function fullScaleStep(reduction: Reduction, correctedM2: number): DerivationStep {
+  const { parts, zeroYawPoints } = reduction;
+  const { scale, result, model } = parts;
+  const others = zeroYawPoints.length - 1;
   return stepOf(METHODS.fullScale, {
     values: inValues`${correctedM2} m² / ${scale}²`,
     value: fullScaleDragArea(correctedM2, scale),
@@ -141,17 +151,45 @@ function fullScaleStep({ scale, result, model }: ResultParts, correctedM2: numbe
         ? []
         : [`blockage was already corrected by ${result.blockageAlreadyCorrectedBy}`]),
       ...(model === null || model.scaleU != null ? [] : ['the model is exactly to scale']),
+      ...(reduction.reynolds.kind === 'own-sweep'
+        ? [
+            `shown for the first point of the sweep; the other ${others} are reduced alike, each at its own speed`,
+          ]
+        : []),
     ],
+    cautions: conditionCautions(reduction),
   });
+}
+
+/** What it means that no step brings the drag area to the reference Reynolds number. */
+function uncorrectedReynolds(step: ReynoldsStep): string[] {
+  if (step.kind === 'none') {
+    return ['the drag area is that at the reference Reynolds number: no correction between them'];
+  }
+  if (step.kind !== 'friction-line' || step.applied) return [];
+  const omitted = plain(2 * step.move.reynoldsShapeAmountM2);
+  return [
+    `the friction line is off: the correction that it would make, ${omitted} m², counts as uncertainty`,
+  ];
+}
+
+/** Why a result stays out, or counts nevertheless, where its condition is not the reference and nothing adjusts for it. */
+function conditionCautions({ condition }: Reduction): string[] {
+  const { notComparable, includedReason } = condition;
+  if (notComparable.length === 0) return [];
+  return [
+    `not comparable: ${notComparable.join(', ')} differ from the reference condition`,
+    ...(includedReason === null ? [] : [`included with a written reason: “${includedReason}”`]),
+  ];
 }
 
 function flowStep(reduction: Reduction, context: ReductionContext): DerivationStep[] {
   const { parts, output, zeroYawPoints } = reduction;
   const speedMs = zeroYawPoints[0]?.flow.speedMs ?? null;
+  const reynolds = zeroYawPoints[0]?.reynolds ?? null;
   const { air } = parts;
-  if (speedMs === null || air === null || output.reynolds === null) return [];
+  if (speedMs === null || air === null || reynolds === null) return [];
   const { characteristicLengthM } = context.programme;
-  const differing = differingItems(context.referenceCondition, parts.result.condition);
   return [
     stepOf(METHODS.flow, {
       values: joined(
@@ -162,8 +200,9 @@ function flowStep(reduction: Reduction, context: ReductionContext): DerivationSt
         ],
         ', ',
       ),
-      value: output.reynolds,
+      value: reynolds,
       unit: '',
+      assumed: uncorrectedReynolds(reduction.reynolds),
       cautions: [
         ...cautionIf(
           output.cautions.includes('mach'),
@@ -171,10 +210,6 @@ function flowStep(reduction: Reduction, context: ReductionContext): DerivationSt
         ),
         ...cautionIf(output.cautions.includes('transition'), 'transition may sit in the wrong place'),
         ...cautionIf(output.excludedBy.includes('mach'), 'excluded: the Mach number is above its limit'),
-        ...cautionIf(
-          differing.length > 0,
-          `not comparable: ${differing.join(', ')} differ from the reference condition`,
-        ),
       ],
     }),
   ];
@@ -194,8 +229,8 @@ function meanStep(points: readonly ReducedPoint[]): DerivationStep[] {
   ];
 }
 
-/** The steps from the first zero-yaw reading to the zero-yaw drag area at full scale, each from the value of the one before. */
-export function zeroYawSteps(reduction: Reduction, context: ReductionContext): DerivationStep[] {
+/** The steps from the first zero-yaw reading to the zero-yaw figure at the reference, each from the value of the one before. */
+export function zeroYawSteps(reduction: Reduction, context: ReductionContext): StepsToFigure {
   const { parts, zeroYawPoints, output } = reduction;
   const point = (parts.result.points ?? []).find((one) => isZeroYaw(one.yawDeg ?? 0)) ?? {};
   const model = modelStep(parts, point);
@@ -203,14 +238,19 @@ export function zeroYawSteps(reduction: Reduction, context: ReductionContext): D
     ...cautionIf(output.cautions.includes('blockage'), 'the blockage ratio is above the caution limit'),
     ...cautionIf(output.excludedBy.includes('blockage'), 'excluded: the blockage ratio is above its limit'),
   ]);
-  return [
+  const fullScale = fullScaleStep(reduction, (blockage.at(-1) ?? model).value);
+  const mean = reduction.reynolds.kind === 'own-sweep' ? [] : meanStep(zeroYawPoints);
+  const reference = referenceSteps(reduction, context, (mean.at(-1) ?? fullScale).value);
+  const steps = [
     ...airSteps(parts),
     ...tareStep(point, parts.result, zeroYawPoints[0]?.netForceN ?? NaN),
     ...pressureStep(parts, point),
     ...flowStep(reduction, context),
     model,
     ...blockage,
-    fullScaleStep(parts, (blockage.at(-1) ?? model).value),
-    ...meanStep(zeroYawPoints),
+    fullScale,
+    ...mean,
+    ...reference.steps,
   ];
+  return { steps, dragAreaM2: reference.dragAreaM2 };
 }

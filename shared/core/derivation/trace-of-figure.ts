@@ -28,8 +28,17 @@ export function budgetShares(
     .sort((a, b) => b.shareOfVariance - a.shareOfVariance);
 }
 
-function namesIn({ facilities, models, variants, results }: RankingInput): KeyNames {
-  const named = [...facilities, ...(models ?? []), ...variants, ...results];
+function namesIn(input: RankingInput): KeyNames {
+  const { facilities, models, variants, results, sweeps, adjustments, correlations } = input;
+  const named = [
+    ...(sweeps ?? []),
+    ...(adjustments ?? []),
+    ...(correlations ?? []),
+    ...facilities,
+    ...(models ?? []),
+    ...variants,
+    ...results,
+  ];
   return new Map(named.flatMap(({ id, name }) => (name == null ? [] : [[id, name] as const])));
 }
 
@@ -80,15 +89,14 @@ export function traceOfReduction(
   basis: Basis,
   names: KeyNames,
 ): Derivation {
-  const toZeroYaw = zeroYawSteps(reduction, context);
-  const zeroYawM2 = toZeroYaw.at(-1)?.value ?? NaN;
-  const steps = [...toZeroYaw, ...(basis === 'wind-averaged' ? windSteps(reduction, zeroYawM2) : [])];
+  const { steps: toZeroYaw, dragAreaM2 } = zeroYawSteps(reduction, context);
+  const steps = [...toZeroYaw, ...(basis === 'wind-averaged' ? windSteps(reduction, dragAreaM2) : [])];
   const keyed = (basis === 'wind-averaged' ? reduction.windAverage.figure : null) ?? reduction.zeroYaw;
   const figure = figureOf(keyed);
   const { id, name } = reduction.parts.result;
   return {
     title: `Drag area C_D·A of ${name ?? id}, ${basis === 'wind-averaged' ? 'wind-averaged' : 'zero yaw'}`,
-    value: steps.at(-1)?.value ?? NaN,
+    value: basis === 'wind-averaged' ? (steps.at(-1)?.value ?? NaN) : dragAreaM2,
     unit: 'm²',
     standardUncertainty: figure.standardUncertaintyM2,
     expandedUncertainty: figure.expandedUncertaintyM2,

@@ -34,6 +34,14 @@ const KINDS: Readonly<Record<string, string>> = {
   'frontal-area': $localize`frontal area`,
   'yaw-ratio': $localize`yaw ratio`,
   stated: $localize`stated by the source`,
+  'friction-share': $localize`share of friction`,
+  'reynolds-shape': $localize`how the body follows the friction line`,
+  'sweep-level': $localize`level of the Reynolds sweep`,
+  sweep: $localize`slope of the Reynolds sweep`,
+  adjustment: $localize`adjustment to the reference condition`,
+  'correlation-level': $localize`level of the correlation`,
+  'correlation-slope': $localize`slope of the correlation`,
+  'correlation-scatter': $localize`scatter between bodies in the correlation`,
 };
 
 export function contributionWords({ kind, of }: Pick<ViewContribution, 'kind' | 'of'>): string {

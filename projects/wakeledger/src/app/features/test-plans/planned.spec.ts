@@ -1,46 +1,16 @@
-import { facilityFields, programmeFields } from '#shared/testing/domain-fields';
-import type { Programme } from '#shared/contracts/programmes';
 import type { TestPlanInputs } from '#shared/contracts/test-plans';
-import { DEFAULT_POLICIES } from '#shared/core/constants';
-import { planned, type Planned, type PlanSetting, type Tunnel } from './planned';
+import {
+  CLOSED_TUNNEL as tunnel,
+  ONE_FIFTH,
+  PLANNED_PROGRAMME as programme,
+  POLICIES_IN_FORCE as policies,
+} from '../../../testing/planning-ground';
+import { planned, type Planned } from './planned';
 import { waysOut } from './ways-out';
 
 const ID = '00000000-0000-4000-8000-000000000001';
-const programme: Programme = {
-  ...programmeFields({ referenceAir: { state: 'iso-2533-sea-level' } }),
-  id: ID,
-  version: 1,
-  milestones: [],
-};
-const tunnel: Tunnel = {
-  ...facilityFields(),
-  kind: 'closed',
-  areaM2: 8.2,
-  id: ID,
-  version: 1,
-  versionNumber: 1,
-};
-const policies: PlanSetting['policies'] = {
-  ...DEFAULT_POLICIES,
-  yawCoverageDeg: 10,
-  repeatabilityCaution: 0.01,
-  airTemperatureC: { from: 5, to: 40 },
-  airPressurePa: { from: 85_000, to: 106_000 },
-  frontLiftLimit: 0.3,
-  rearLiftLimit: 0.3,
-  plausible: [],
-};
-const oneFifth: TestPlanInputs = {
-  scale: 0.2,
-  target: { basis: 'reference' },
-  tunnelTemperatureC: 15,
-  tunnelPressurePa: 101_325,
-  frontalAreaM2: 2.27,
-  dragCoefficient: 0.285,
-  condition: {},
-};
 const stateOf = (change: Partial<TestPlanInputs> = {}) =>
-  planned({ ...oneFifth, ...change }, { programme, policies, tunnel });
+  planned({ ...ONE_FIFTH, ...change }, { programme, policies, tunnel });
 
 function planOf(change: Partial<TestPlanInputs> = {}): Planned {
   const state = stateOf(change);

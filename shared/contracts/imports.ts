@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { resultCheck } from './checks';
 import { id, name, notNegative, positive, timestamp, version } from './common';
 import { IMPORT_FIELD_NAMES } from './import-fields';
 import { BODY_SHAPES } from './variants';
@@ -151,14 +152,21 @@ export const importDetail = importSummary.extend({
 });
 export type ImportDetail = z.infer<typeof importDetail>;
 
-/** One reason for a verdict: the cell that is meant, and words that say what would be accepted. */
-export const rowReason = z.strictObject({
+const reasonPlace = {
   verdict: z.enum(['cautioned', 'refused']),
   code: z.string(),
   column: columnIndex.optional(),
   field: field.optional(),
-  detail: z.string(),
-});
+};
+
+/**
+ * One reason for a verdict: the cell that is meant, and words that say what would be accepted; or a check of the result,
+ * which the client words as it does everywhere else.
+ */
+export const rowReason = z.union([
+  z.strictObject({ ...reasonPlace, detail: z.string() }),
+  z.strictObject({ ...reasonPlace, check: resultCheck }),
+]);
 export type RowReason = z.infer<typeof rowReason>;
 
 export const importRow = z.strictObject({

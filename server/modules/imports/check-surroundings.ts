@@ -1,13 +1,18 @@
 import type { Facility } from '#shared/contracts/facilities';
 import type { Programme } from '#shared/contracts/programmes';
 import type { Variant } from '#shared/contracts/variants';
+import type { CheckSurroundings } from '#shared/core/checks/checks-of';
+import { policiesInputOf, type CheckLimits } from '#shared/core/checks/limits';
+import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import { reductionContextOf } from '#shared/core/reduction/reduction-context';
-import type { ReductionContext } from '#shared/core/reduction/reduction';
 import { Refused } from '#shared/core/refusal';
 import type { Work } from '../../http/context';
-import { latestPastDay } from '../../rules/clock';
+import { dayOf, latestPastDay } from '../../rules/clock';
 import { demandFound } from '../../rules/refusals';
+import { adjustmentInputs } from '../adjustments';
+import { correlationsInUse } from '../correlations';
 import { listFacilities } from '../facilities';
+import { policiesInForce } from '../policies';
 import { findProgramme } from '../programmes';
 import { listVariants } from '../variants';
 import type { CheckContext } from './checking/check-context';
@@ -28,6 +33,12 @@ export async function surroundingsOf(work: Work, record: ImportRecord): Promise<
   const variants = await listVariants(work.tx, record.programmeId);
   const facilities = await listFacilities(work.tx);
   const taken = new Set((await takenResultNames(work.tx, record.programmeId)).map(nameKey));
+  const policies = await policiesInForce(work.tx);
+  const correlations = await correlationsInUse(
+    work.tx,
+    programme.referenceFacilityId ?? null,
+    dayOf(work.now),
+  );
   return {
     variants,
     facilities,
@@ -36,7 +47,11 @@ export async function surroundingsOf(work: Work, record: ImportRecord): Promise<
       variantOf: variantLookup(variants, record.mapping.variants),
       facilityOf: facilityLookup(facilities, record.mapping.facilities),
       isNameTaken: (name) => taken.has(nameKey(name)),
-      reduction: referenceOf(programme),
+      checks: checkSurroundings(programme, policies, {
+        facilities,
+        adjustments: await adjustmentInputs(work.tx, variants),
+        correlations: correlations.map(({ input }) => input),
+      }),
     },
   };
 }
@@ -44,24 +59,31 @@ export async function surroundingsOf(work: Work, record: ImportRecord): Promise<
 /** The common area has no part in the reduction of one result; any stands in for it where none is chosen yet. */
 const ANY_AREA_M2 = 1;
 
-function referenceOf(programme: Programme): ReductionContext | undefined {
+/** The programme's reference with the limits in force; undefined where it cannot be used as it stands. */
+function checkSurroundings(
+  programme: Programme,
+  policies: { readonly number: number; readonly values: CheckLimits },
+  document: Pick<RankingInput, 'facilities' | 'adjustments' | 'correlations'>,
+): CheckSurroundings | undefined {
   const { referenceSpeedKmh, referenceAir, referenceCondition, characteristicLengthM, windSpeedMs } =
     programme;
   try {
-    return reductionContextOf({
+    const context = reductionContextOf({
+      ...document,
       programme: {
         referenceSpeedKmh,
         referenceAir,
         referenceCondition,
         characteristicLengthM,
         windSpeedMs,
+        referenceFacilityId: programme.referenceFacilityId,
         commonAreaM2: ANY_AREA_M2,
-        policies: { frictionLine: 'off', frictionShare: 0, frictionShareU: 0 },
+        policies: policiesInputOf(policies.values, policies.number, programme.frictionLine ?? 'on'),
       },
-      facilities: [],
       variants: [],
       results: [],
     });
+    return { context, limits: policies.values };
   } catch (error) {
     if (error instanceof Refused) return undefined;
     throw error;

@@ -1,5 +1,5 @@
 import type { Facility } from '#shared/contracts/facilities';
-import type { ReductionContext } from '#shared/core/reduction/reduction';
+import type { CheckSurroundings } from '#shared/core/checks/checks-of';
 
 /** A variant as rows are checked against it: one of the programme, or one that the import creates. */
 export interface KnownVariant {
@@ -7,6 +7,7 @@ export interface KnownVariant {
   readonly key: string;
   readonly name: string;
   readonly frontalAreaM2: number;
+  readonly bodyShape: string;
 }
 
 /** What rows are checked against. Everything comes in, so that the same rows always get the same verdicts. */
@@ -16,8 +17,8 @@ export interface CheckContext {
   readonly facilityOf: (text: string) => Facility | undefined;
   /** A result of this name that counts is in the programme already. */
   readonly isNameTaken: (name: string) => boolean;
-  /** The programme's reference; without one the method's cautions are not given. */
-  readonly reduction: ReductionContext | undefined;
+  /** The programme's reference and the limits in force; without a usable reference no check is made. */
+  readonly checks: CheckSurroundings | undefined;
 }
 
 /** How names are compared: capital letters and the number of spaces make no difference. */

@@ -6,8 +6,8 @@ import type { CheckContext } from './check-context';
 import type { CompiledMapping } from './compiled-mapping';
 import { draftResult } from './draft-result';
 import { fieldOfIssue } from './field-of-issue';
-import { methodCautions } from './method-cautions';
-import { caution, readRow, refusal, type CheckedRow, type RowValues } from './read-row';
+import { fieldOfCheck, methodChecks } from './method-checks';
+import { caution, cautionOf, readRow, refusal, type CheckedRow, type RowValues } from './read-row';
 import { resultLevelOf } from './result-level';
 
 export interface RowVerdict {
@@ -100,15 +100,14 @@ export function checkGroup(
     const row = (point === undefined ? firstWith(rows, field) : rows[point]) ?? first;
     reasons.refuse(row.row.rowNumber, field, issue.reason ?? 'unusable-input', issue.detail);
   }
-  if (!reasons.anyRefusal && context.reduction !== undefined)
-    for (const { code, field, detail } of methodCautions(
-      draft,
-      variant,
-      facility,
-      valueField,
-      context.reduction,
-    ))
-      reasons.add((firstWith(rows, field) ?? first).row.rowNumber, caution(mapping, field, code, detail));
+  if (!reasons.anyRefusal && context.checks !== undefined)
+    for (const check of methodChecks(draft, variant, facility, context.checks)) {
+      const field =
+        check.refusal === null
+          ? fieldOfCheck(check, valueField)
+          : fieldOfIssue(check.refusal.where, valueField, mapping).field;
+      reasons.add((firstWith(rows, field) ?? first).row.rowNumber, cautionOf(mapping, field, check));
+    }
   return { rows: reasons.verdicts(rows), draft: reasons.anyRefusal ? undefined : draft };
 }
 

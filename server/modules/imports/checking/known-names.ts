@@ -8,6 +8,7 @@ function known(variant: Variant): KnownVariant {
   return {
     key: variant.id,
     name: variant.name,
+    bodyShape: variant.bodyShape,
     frontalAreaM2: variant.frontalAreas[0]?.areaM2 ?? Number.NaN,
   };
 }
@@ -30,6 +31,7 @@ export function variantLookup(
       byName.set(nameKey(choice.text), {
         key: newVariantKey(choice.text),
         name: choice.name,
+        bodyShape: choice.bodyShape,
         frontalAreaM2: choice.frontalAreaM2,
       });
     else {

@@ -1,5 +1,6 @@
 import type { ImportField } from '#shared/contracts/import-fields';
 import type { RowReason } from '#shared/contracts/imports';
+import type { Check } from '#shared/core/checks/check';
 import type { CompiledMapping } from './compiled-mapping';
 import { readCell, type CellValue } from './read-cell';
 
@@ -23,7 +24,7 @@ export function refusal(
   code: string,
   detail: string,
 ): RowReason {
-  return reason(mapping, 'refused', field, code, detail);
+  return { ...located(mapping, field), verdict: 'refused', code, detail };
 }
 
 /** A reason to look twice. */
@@ -33,24 +34,26 @@ export function caution(
   code: string,
   detail: string,
 ): RowReason {
-  return reason(mapping, 'cautioned', field, code, detail);
+  return { ...located(mapping, field), verdict: 'cautioned', code, detail };
 }
 
-function reason(
-  mapping: CompiledMapping,
-  verdict: RowReason['verdict'],
-  field: ImportField | undefined,
-  code: string,
-  detail: string,
-): RowReason {
-  const column = field === undefined ? undefined : mapping.sources.get(field)?.column;
+/** A check that somebody should look at, as a reason; whoever shows it finds the words. */
+export function cautionOf(mapping: CompiledMapping, field: ImportField | undefined, check: Check): RowReason {
+  const code = check.refusal?.code ?? check.check;
   return {
-    verdict,
-    code,
-    ...(column === undefined ? {} : { column }),
-    ...(field === undefined ? {} : { field }),
-    detail,
+    ...located(mapping, field),
+    verdict: 'cautioned',
+    code: check.verdict === 'excluded' ? `stays-out:${code}` : code,
+    check,
   };
+}
+
+function located(
+  mapping: CompiledMapping,
+  field: ImportField | undefined,
+): Pick<RowReason, 'column' | 'field'> {
+  const column = field === undefined ? undefined : mapping.sources.get(field)?.column;
+  return { ...(column === undefined ? {} : { column }), ...(field === undefined ? {} : { field }) };
 }
 
 /** Reads every mapped cell of a row. An empty cell is a gap, never 0; a constant fills it only where there is no column. */

@@ -107,7 +107,9 @@ describe('The corpus of good and bad files', () => {
         result instanceof UnreadableFile
           ? [result.detail]
           : result.groups.flatMap(({ rows }) =>
-              rows.flatMap(({ reasons }) => reasons.map(({ detail }) => detail)),
+              rows.flatMap(({ reasons }) =>
+                reasons.flatMap((reason) => ('detail' in reason ? reason.detail : [])),
+              ),
             );
       for (const detail of words) expect(detail).toMatch(/^.{25,}[.?]$/s);
     },

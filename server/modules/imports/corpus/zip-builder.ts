@@ -16,7 +16,7 @@ export function zipOf(parts: readonly ZipPart[]): Buffer {
   for (const part of parts) {
     const name = Buffer.from(part.name);
     const content = Buffer.from(part.content);
-    const packed = deflateRawSync(content, { level: 9 });
+    const packed = deflateRawSync(content, { level: 6 });
     const fields = Buffer.alloc(26);
     fields.writeUInt16LE(20, 0);
     fields.writeUInt16LE(part.locked === true ? 0x0801 : 0x0800, 2);

@@ -1,6 +1,8 @@
 import type { CellClassParams, ColDef, ITooltipParams, ValueGetterParams } from 'ag-grid-community';
 import { InfiniteRowModelModule, ModuleRegistry } from 'ag-grid-community';
 import type { ImportDetail, ImportRow } from '#shared/contracts/imports';
+import type { CheckLanguage } from '../../ui/checks/check-figures';
+import { rowWords } from './reason-words';
 import { VERDICT_SHAPES, VERDICT_WORDS } from './import-words';
 
 /** Rows come page by page; only this grid needs it. */
@@ -23,6 +25,7 @@ const isOf = (row: ImportRow | undefined, index: number, verdict: 'refused' | 'c
 /** Row number, verdict and reasons first, then the file's own columns as they stand in it. */
 export function rowColumns(
   detail: ImportDetail,
+  language: () => CheckLanguage,
   mend: (row: ImportRow, column: number, text: string) => void,
 ): ColDef<ImportRow>[] {
   const editable = detail.state === 'ready';
@@ -51,9 +54,8 @@ export function rowColumns(
       headerName: $localize`Why`,
       colId: 'reasons',
       width: 420,
-      valueGetter: ({ data }) => data?.reasons.map(({ detail: words }) => words).join(' ') ?? '',
-      tooltipValueGetter: ({ data }: ITooltipParams<ImportRow>) =>
-        data?.reasons.map(({ detail: words }) => words).join(' ') ?? '',
+      valueGetter: ({ data }) => rowWords(data, language()),
+      tooltipValueGetter: ({ data }: ITooltipParams<ImportRow>) => rowWords(data, language()),
     },
     ...detail.columns.map(({ index, header }): ColDef<ImportRow> => ({
       headerName: header,
@@ -66,11 +68,7 @@ export function rowColumns(
         mend(data, index, String(newValue ?? ''));
         return false;
       },
-      tooltipValueGetter: ({ data }: ITooltipParams<ImportRow>) =>
-        data?.reasons
-          .filter((reason) => reason.column === index)
-          .map(({ detail: words }) => words)
-          .join(' ') ?? '',
+      tooltipValueGetter: ({ data }: ITooltipParams<ImportRow>) => rowWords(data, language(), index),
       cellClassRules: {
         'cell-refused': ({ data }: CellClassParams<ImportRow>) => isOf(data, index, 'refused'),
         'cell-cautioned': ({ data }: CellClassParams<ImportRow>) => isOf(data, index, 'cautioned'),

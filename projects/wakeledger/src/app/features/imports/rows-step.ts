@@ -25,9 +25,11 @@ import { Undo } from '../../core/editing/undo';
 import { Preferences } from '../../core/preferences/preferences';
 import { confirmInDialog } from '../../ui/confirm-dialog/confirm-dialog';
 import { gridDefaults } from '../../ui/data-grid/data-grid';
+import { QuantityFormat } from '../../ui/quantity/quantity-format';
 import { ImportInView } from './import-in-view';
 import { VERDICT_INKS, VERDICT_SHAPES, VERDICT_WORDS } from './import-words';
 import { MendMany } from './mend-many';
+import { reasonWords } from './reason-words';
 import { registerPaging, rowColumns } from './rows-grid';
 
 const PAGE = 100;
@@ -60,6 +62,14 @@ export class RowsStep {
     this.detail();
     return place === undefined ? undefined : this.grid()?.getDisplayedRowAtIndex(place)?.data;
   });
+  private readonly format = inject(QuantityFormat);
+  private readonly language = computed(() => ({
+    format: this.format,
+    locale: this.preferences.numberLocale(),
+  }));
+  protected readonly focusedReasons = computed(() =>
+    (this.focusedRow()?.reasons ?? []).map((reason) => reasonWords(reason, this.language())),
+  );
 
   /** From the address, so that a reload shows the same rows. */
   protected readonly filter = computed<RowFilter>(() => {
@@ -90,7 +100,7 @@ export class RowsStep {
 
   // Made once per file: new definitions would throw away widths that a person has set.
   protected readonly columns = computed(
-    () => rowColumns(this.detail(), (row, column, text) => void this.mend(row, column, text)),
+    () => rowColumns(this.detail(), this.language, (row, column, text) => void this.mend(row, column, text)),
     { equal: (one, other) => one.length === other.length },
   );
   protected readonly options: GridOptions<ImportRow> = {

@@ -51,17 +51,17 @@ function reynoldsSentence(check: Check, { format }: CheckLanguage): string {
   const caution = check.verdict !== 'passes';
   switch (check.finding) {
     case 'own-sweep':
-      return $localize`Its own sweep over several speeds brings it to the full-size Reynolds number: measured, not estimated.`;
+      return $localize`Its own sweep over several speeds brings it to the reference Reynolds number: measured, not estimated.`;
     case 'other-sweep':
-      return $localize`A measured sweep of the same shape brings it to the full-size Reynolds number.`;
+      return $localize`A measured sweep of the same shape brings it to the reference Reynolds number.`;
     case 'no-reynolds-correction':
       return caution
         ? $localize`The friction line is off in this programme: an estimated ${value}:VALUE: of Reynolds effect, more than ${to}:LIMIT:, stands in the uncertainty instead. A sweep over several speeds would settle it.`
         : $localize`The friction line is off in this programme; the Reynolds effect left out is small.`;
     default:
       return caution
-        ? $localize`The way to the full-size Reynolds number is estimated with the friction line, ${value}:VALUE:, more than ${to}:LIMIT:: a sweep over several speeds would settle it.`
-        : $localize`The way to the full-size Reynolds number is short: ${value}:VALUE: by the friction line.`;
+        ? $localize`The way to the reference Reynolds number is estimated with the friction line, ${value}:VALUE:, more than ${to}:LIMIT:: a sweep over several speeds would settle it.`
+        : $localize`The way to the reference Reynolds number is short: ${value}:VALUE: by the friction line.`;
   }
 }
 

@@ -1,5 +1,6 @@
 import { join } from 'node:path';
 import { currentUrls } from './start/database';
+import { evaluateAdoptions } from './start/evaluate-adoptions';
 import { seedDemoOnce, seedReference } from './start/seeding';
 import { openSecrets, STATE_FOLDER } from './start/state-folder';
 
@@ -10,6 +11,7 @@ await seedReference(urls.maintenance);
 // Accounts that everybody knows have no place in a database that was given to us.
 const seeded =
   !external && (await seedDemoOnce(urls.maintenance, openSecrets(join(process.cwd(), STATE_FOLDER)).demo));
+await evaluateAdoptions(urls);
 process.stdout.write(
   `The built-in cycles are in place.${seeded ? ' The demo scenario has been set up.' : ''}\n`,
 );

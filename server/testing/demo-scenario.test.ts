@@ -15,6 +15,8 @@ import { rankingInputOf } from '../../seeds/demo/scenario/ranking-input';
 import { facilityIssues } from '../modules/facilities';
 import { resultIssues } from '../modules/results';
 import { variantIssues } from '../modules/variants';
+import { replayEvaluations } from '../scripts/replay/replay-evaluations';
+import { evaluateAdoptions } from '../scripts/start/evaluate-adoptions';
 import { startApi, type ApiHarness } from './api-harness';
 import { ApiMember } from './as-member';
 import type { TestOrganisation } from './test-members';
@@ -40,6 +42,11 @@ describe('the demo scenario in a database', () => {
     await seedDemo(client, { passwordHash: 'not a hash: nobody signs in with it here' });
     await client.query('commit');
     await client.end();
+    await evaluateAdoptions({
+      maintenance: api.database.url('maintenance'),
+      tenant: api.database.url('tenant'),
+      platform: api.database.url('platform'),
+    });
     aldermere = await ApiMember.signIn(api.caller, organisationOf(ALDERMERE), 'aerodynamicist');
   });
   afterAll(() => api.close());
@@ -152,6 +159,24 @@ describe('the demo scenario in a database', () => {
       },
     });
     expect(entered.entrySequence).toBe(results.length + 1);
+  });
+
+  it('keeps an evaluation of every adoption that stands, and each comes to the same again', async () => {
+    const client = new pg.Client({ connectionString: api.database.url('maintenance') });
+    await client.connect();
+    const { rows } = await client.query<{ standing: string }>(
+      `select count(*) as standing from (select distinct on (organisation_id, variant_id) organisation_id, id from adoptions
+        order by organisation_id, variant_id, adopted_at desc, id desc) a
+       where exists (select from adoption_results ar
+         where ar.organisation_id = a.organisation_id and ar.adoption_id = a.id)`,
+    );
+    const standing = Number(rows[0]?.standing);
+    const moved: unknown[] = [];
+    const summary = await replayEvaluations(client, (outcome) => moved.push(outcome));
+    await client.end();
+    expect(standing).toBeGreaterThan(0);
+    expect(moved).toEqual([]);
+    expect(summary).toEqual({ evaluations: standing, same: standing, moved: 0 });
   });
 
   it('gives the other maker its own programme, and neither sees the other’s', async () => {

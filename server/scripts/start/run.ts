@@ -17,6 +17,7 @@ import { startDevelopmentClient } from './development-client';
 import { requireDatabase } from './external-database';
 import { ensurePostgres } from './install-postgres';
 import { readyLine } from './ready-line';
+import { evaluateAdoptions } from './evaluate-adoptions';
 import { seedDemoOnce, seedReference } from './seeding';
 import { SERVER_BUNDLE } from './server-bundle';
 import { requirePort, startServer } from './server-process';
@@ -109,6 +110,8 @@ async function bringUp(
   if (external === undefined && (await seedDemoOnce(urls.maintenance, secrets.demo))) {
     say('The demo scenario has been set up.');
   }
+  const { refusals } = await evaluateAdoptions(urls);
+  for (const refusal of refusals) say(`The adoptions of a programme could not be evaluated: ${refusal}`);
 
   await built;
   const server = await startServer(

@@ -17,6 +17,7 @@ export interface WrittenCell {
   readonly style: number;
   readonly formula: boolean;
   readonly value: string | undefined;
+  /** The text that stands in the cell itself; empty where there is none. */
   readonly inline: string;
 }
 
@@ -45,7 +46,7 @@ export function cellValue(cell: WrittenCell, surroundings: CellSurroundings): Sh
     return cell.formula && cell.type !== 'str' && cell.inline === '' && (cell.value ?? '').trim() === ''
       ? { column: cell.place.column, text: NEVER_CALCULATED, kind: 'error', formula: true }
       : undefined;
-  return { column: cell.place.column, formula: cell.formula, ...read };
+  return { column: cell.place.column, formula: cell.formula, text: read.text, kind: read.kind };
 }
 
 type Read = Pick<SheetCell, 'text' | 'kind'>;

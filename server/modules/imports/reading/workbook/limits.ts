@@ -16,7 +16,7 @@ export const WORKBOOK_LIMITS: WorkbookLimits = {
   inflatedBytes: 128 * 1024 * 1024,
   sharedCharacters: 32 * 1024 * 1024,
   mergedAreas: 20_000,
-  milliseconds: 30_000,
+  milliseconds: 60_000,
 };
 
 /** Ends work that takes too long; asked after every piece of it. */

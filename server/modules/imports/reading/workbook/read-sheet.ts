@@ -44,6 +44,7 @@ interface CellUnderWay {
   readonly style: number;
   formula: boolean;
   value: string | undefined;
+  inline: string;
 }
 
 /**
@@ -90,14 +91,14 @@ class SheetReader {
       if (element === 'f') this.#cell.formula = true;
       if (element === 'v') this.#cell.value ??= '';
       this.#inside = element;
-      this.#inline.open(element);
+      if (this.#cell.type === 'inlineStr') this.#inline.open(element);
     }
   }
 
   text(text: string): void {
     if (this.#cell === undefined) return;
     if (this.#inside === 'v') this.#cell.value = (this.#cell.value ?? '') + text;
-    else this.#inline.add(text);
+    else if (this.#cell.type === 'inlineStr') this.#inline.add(text);
   }
 
   close(element: string): void {
@@ -105,7 +106,7 @@ class SheetReader {
     else if (element === 'c') this.#closeCell();
     else if (this.#cell !== undefined) {
       this.#inside = undefined;
-      this.#inline.close(element);
+      if (this.#cell.type === 'inlineStr') this.#inline.close(element);
     }
   }
 
@@ -144,6 +145,7 @@ class SheetReader {
       style: Number(attributes['s'] ?? 0),
       formula: false,
       value: undefined,
+      inline: '',
     };
   }
 
@@ -152,7 +154,8 @@ class SheetReader {
     const row = this.#row;
     this.#cell = undefined;
     if (cell === undefined || row === undefined) return;
-    const read = cellValue({ ...cell, inline: this.#inline.take() }, this.surroundings);
+    if (cell.type === 'inlineStr') cell.inline = this.#inline.take();
+    const read = cellValue(cell, this.surroundings);
     if (read === undefined) return;
     if (read.column < IMPORT_LIMIT_COLUMNS) row.cells.push(read);
     else if (row.beyond.length < MOST_BEYOND) row.beyond.push(cell.place);

@@ -12,6 +12,7 @@ import {
   selectDrag,
   selectEnergy,
   selectEvidence,
+  selectRankingRefusal,
   selectRankingView,
   selectReduced,
 } from './rankings.selectors';
@@ -104,5 +105,28 @@ describe('the ranking that the browser works out', () => {
     const { read } = openedStore({ inputs: doubled, context });
     expect(read(selectRankingView)).toBeNull();
     expect(read(selectReduced)).toMatchObject({ code: 'duplicate-id' });
+  });
+
+  it('is replaced by the words of a refusal where a weighted mean has nothing to weigh with', () => {
+    const { inputs, context } = fiveVariants();
+    const [result] = inputs.results;
+    if (!result) throw new Error('the scenario has results');
+    const exact = { ...result, points: [{ value: 0.25, s: 0, n: 2 }], installationId: 'one' };
+    const twice = [exact, { ...exact, id: 'again' }];
+    const adopted = {
+      id: 'adopted',
+      variantId: result.variantId,
+      at: '2031-03-01T09:00:00+00:00',
+      by: 'Ines Quill',
+      rule: 'weighted-mean' as const,
+      resultIds: twice.map(({ id }) => id),
+    };
+    const { read, move } = openedStore({
+      inputs: { ...inputs, results: [...twice, ...inputs.results.filter(({ id }) => id !== result.id)] },
+      context: { ...context, adoptions: [adopted] },
+    });
+    move({ evidence: 'adopted' });
+    expect(read(selectRankingView)).toBeNull();
+    expect(read(selectRankingRefusal)).toMatchObject({ code: 'uncertainty-zero' });
   });
 });

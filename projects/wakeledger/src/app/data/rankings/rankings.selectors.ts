@@ -74,7 +74,8 @@ export const selectReduced = createSelector(
     ),
 );
 
-export const selectEvidence = createSelector(
+/** A weighted mean can refuse, where a result has no uncertainty of its own to be weighed by. */
+const selectPicked = createSelector(
   selectInputs,
   selectContext,
   selectReduced,
@@ -82,8 +83,12 @@ export const selectEvidence = createSelector(
   selectBasis,
   (inputs, context, reduced, evidence, basis) =>
     inputs && context && reduced && !(reduced instanceof Refused)
-      ? evidenceStage(inputs.variants, reduced, context, evidence, basis)
+      ? refusable(() => evidenceStage(inputs.variants, reduced, context, evidence, basis))
       : null,
+);
+
+export const selectEvidence = createSelector(selectPicked, (picked) =>
+  picked instanceof Refused ? null : picked,
 );
 
 export const selectDrag = createSelector(selectEvidence, (evidence) => evidence && dragStage(evidence));
@@ -175,8 +180,10 @@ export const selectRankingView = createSelector(
 );
 
 /** Why the method refuses to rank at all, for those who compute. */
-export const selectRankingRefusal = createSelector(selectReduced, (reduced) =>
-  reduced instanceof Refused ? reduced : null,
+export const selectRankingRefusal = createSelector(
+  selectReduced,
+  selectPicked,
+  (reduced, picked) => [reduced, picked].find((stage) => stage instanceof Refused) ?? null,
 );
 
 /** What the derivation of a figure is made from, by those who hold the inputs; null for the others. */

@@ -65,11 +65,7 @@ function inputOf(fields: ResultFields, surroundings: PreviewSurroundings): Ranki
       confidence: programme.confidence,
       referenceCondition: programme.referenceCondition,
       windSpeedMs: programme.windSpeedMs,
-      policies: {
-        ...policiesInputOf(policies.values, policies.number, 'off'),
-        frictionShare: 0,
-        frictionShareU: 0,
-      },
+      policies: policiesInputOf(policies.values, policies.number, programme.frictionLine ?? 'on'),
     },
     facilities: [facility],
     models: fields.model === undefined ? [] : [{ id: fields.model, name: fields.model }],

@@ -2,18 +2,17 @@ import { DatePipe } from '@angular/common';
 import {
   ChangeDetectionStrategy,
   Component,
-  Injector,
   computed,
   effect,
   inject,
   input,
-  runInInjectionContext,
   signal,
   untracked,
 } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import { Store } from '@ngrx/store';
 import { traceOfReduction } from '#shared/core/derivation/trace-of-figure';
+import type { JudgementFields } from '#shared/contracts/judgements';
 import type { ApiProblem } from '../../../core/api/api-problem';
 import { Undo } from '../../../core/editing/undo';
 import { Preferences } from '../../../core/preferences/preferences';
@@ -26,7 +25,6 @@ import { resultsFeature } from '../../../data/results/results.feature';
 import { variantsFeature } from '../../../data/variants/variants.feature';
 import { Busy } from '../../../ui/busy/busy';
 import { compareConditions } from '../../../ui/condition/compare-conditions';
-import { askInDialog } from '../../../ui/confirm-dialog/confirm-dialog';
 import { DerivationOpener } from '../../../ui/derivation-sheet/derivation-sheet';
 import { derivationFromTrace } from '../../../ui/derivation-sheet/from-trace';
 import { ProblemBanner } from '../../../ui/problem-banner/problem-banner';
@@ -35,10 +33,17 @@ import { machWords, reynoldsWords } from '../../../ui/checks/check-figures';
 import { QuantityFormat } from '../../../ui/quantity/quantity-format';
 import { FACILITY_KIND_WORDS } from '../../../ui/words/evidence-words';
 import { CHECK_INKS, CHECK_SHAPES, CHECK_WORDS, checkOf } from '../result-check';
+import type { OfferedResult } from '../adoption/adoption-dialog';
+import { offeredResults } from '../adoption/offered-results';
 import { doneWords } from '../done-words';
+import { heldOf, judgementOrder } from '../judgement/judgement-order';
+import { ReynoldsSection } from '../sweep/reynolds-section';
 import { AttachmentLine } from './attachment-line';
 import { pointRows, pointColumns } from './point-rows';
 import { rawLines } from './raw-lines';
+import { ResultDeeds } from './result-deeds';
+import { ResultStory } from './result-story';
+import { STATE_SHAPES, STATE_WORDS } from './state-words';
 import { YawChart } from './yaw-chart';
 
 const VERDICT_WORDS = {
@@ -51,7 +56,18 @@ const VERDICT_WORDS = {
 /** What does this result say? Raw values, derivation, checks, attachment, adoption and withdrawal. */
 @Component({
   selector: 'wl-result-page',
-  imports: [AttachmentLine, Busy, Checks, DatePipe, ProblemBanner, RouterLink, YawChart],
+  imports: [
+    AttachmentLine,
+    Busy,
+    Checks,
+    DatePipe,
+    ProblemBanner,
+    ResultDeeds,
+    ResultStory,
+    ReynoldsSection,
+    RouterLink,
+    YawChart,
+  ],
   templateUrl: './result-page.html',
   styleUrl: './result-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -62,20 +78,19 @@ export class ResultPage {
 
   private readonly store = inject(Store);
   private readonly undo = inject(Undo);
-  private readonly injector = inject(Injector);
   private readonly format = inject(QuantityFormat);
   private readonly preferences = inject(Preferences);
   private readonly derivations = inject(DerivationOpener);
   private readonly session = inject(Session);
 
-  protected readonly mayAdopt = computed(() => this.session.may('results.adopt'));
-  protected readonly mayWithdraw = computed(() => this.session.may('results.withdraw'));
+  protected readonly mayJudge = computed(() => this.session.may('results.judge'));
   protected readonly loading = this.store.selectSignal(resultsFeature.selectLoading);
   private readonly results = this.store.selectSignal(resultsFeature.selectResults);
   private readonly adoptions = this.store.selectSignal(resultsFeature.selectAdoptions);
-  private readonly standing = this.store.selectSignal(resultsFeature.selectStanding);
+  protected readonly standing = this.store.selectSignal(resultsFeature.selectStanding);
   private readonly programme = this.store.selectSignal(resultsFeature.selectProgramme);
   private readonly reduced = this.store.selectSignal(resultsFeature.selectReduced);
+  private readonly inputs = this.store.selectSignal(resultsFeature.selectInputs);
   private readonly deed = this.store.selectSignal(resultsFeature.selectDeed);
   private readonly variants = this.store.selectSignal(variantsFeature.selectById);
   private readonly facilities = this.store.selectSignal(facilitiesFeature.selectById);
@@ -116,7 +131,7 @@ export class ResultPage {
           : this.format.text(output.windAveragedDragAreaM2, 'drag-area'),
     };
   });
-  protected readonly check = computed(() => {
+  protected readonly verdict = computed(() => {
     const result = this.result();
     if (!result) return undefined;
     const { context, refused, refusal } = this.reduced();
@@ -148,6 +163,42 @@ export class ResultPage {
     return result
       ? { columns: pointColumns(result), rows: pointRows(result, this.reduction(), this.format) }
       : { columns: [], rows: [] };
+  });
+  /** The result as the method reads it. */
+  protected readonly input = computed(() => this.inputs()?.results.find(({ id }) => id === this.resultId()));
+  protected readonly held = computed(() => {
+    const result = this.result();
+    return result && heldOf(result, this.input());
+  });
+  /** What the way to the reference Reynolds number is looked for with; not for a result that counts for nothing. */
+  protected readonly reynolds = computed(() => {
+    const inputs = this.inputs();
+    const { context } = this.reduced();
+    const held = this.held();
+    if (inputs === null || context === null || held === undefined || this.result()?.withdrawn)
+      return undefined;
+    return { inputs, context, held: held.reynolds };
+  });
+  protected readonly notComparable = computed(
+    () => this.reduction()?.output.excludedBy.includes('not-comparable') ?? false,
+  );
+  protected readonly standingOf = computed(() => {
+    const result = this.result();
+    return result && { words: STATE_WORDS[result.state], shape: STATE_SHAPES[result.state] };
+  });
+  protected readonly nameOf = computed(() => {
+    const names = new Map(this.results().map(({ id, name }) => [id, name]));
+    return (resultId: string) => names.get(resultId) ?? '';
+  });
+  /** The variant’s results that stand, newest first, for a choice among them. */
+  protected readonly offered = computed<readonly OfferedResult[]>(() => {
+    const variantId = this.result()?.variantId;
+    return offeredResults(
+      this.results().filter((each) => each.variantId === variantId),
+      this.reduced().reductions,
+      (facilityId) => this.facilities().get(facilityId)?.name ?? '',
+      this.format,
+    );
   });
   protected readonly isSweep = computed(
     () => new Set(this.result()?.points.map(({ yawDeg }) => yawDeg)).size > 1,
@@ -215,64 +266,12 @@ export class ResultPage {
     this.derivations.open(derivationFromTrace(trace, summary, this.format));
   }
 
-  protected async adopt(): Promise<void> {
+  protected judge(changes: Partial<JudgementFields>): void {
     const result = this.result();
-    if (!result) return;
-    const replaced = this.replaced();
-    const variant = this.variant()?.name ?? '';
-    const comment = await this.ask({
-      title: $localize`Adopt ${result.name}:RESULT: for ${variant}:VARIANT:?`,
-      detail: replaced
-        ? $localize`It replaces ${replaced.name}:OTHER:, tested ${replaced.testDate}:DATE:, for everybody. The earlier choice stays in the history.`
-        : $localize`From now on ${variant}:VARIANT: rests on it for everybody, whatever newer result comes in.`,
-      confirm: $localize`Adopt`,
-      cancel: $localize`Cancel`,
-      reasonLabel: $localize`Why this result (at least three characters)`,
-    });
-    if (comment !== undefined) this.order(result.variantId, comment, result.id);
+    if (result) this.decide({ kind: 'judge', judgements: [judgementOrder(result, this.input(), changes)] });
   }
 
-  protected async release(): Promise<void> {
-    const result = this.result();
-    if (!result) return;
-    const comment = await this.ask({
-      title: $localize`Release the adoption of ${result.name}:RESULT:?`,
-      detail: $localize`Until another result is adopted, the newest usable one counts for ${this.variant()?.name ?? ''}:VARIANT:.`,
-      confirm: $localize`Release`,
-      cancel: $localize`Cancel`,
-      reasonLabel: $localize`Why it is released (at least three characters)`,
-    });
-    if (comment !== undefined) this.order(result.variantId, comment);
-  }
-
-  protected async withdraw(): Promise<void> {
-    const result = this.result();
-    if (!result) return;
-    const reason = await this.ask({
-      title: $localize`Withdraw ${result.name}:RESULT:?`,
-      detail: result.adopted
-        ? $localize`It is the adopted result of ${this.variant()?.name ?? ''}:VARIANT:: withdrawing it releases the adoption too. It stays readable and counts for nothing. This cannot be undone; a withdrawn result is entered anew.`
-        : $localize`It stays readable and counts for nothing. This cannot be undone; a withdrawn result is entered anew.`,
-      confirm: $localize`Withdraw`,
-      cancel: $localize`Keep it`,
-      severe: true,
-      reasonLabel: $localize`Why it is withdrawn (at least three characters)`,
-    });
-    if (reason === undefined) return;
-    this.decide({ kind: 'withdraw', resultIds: [result.id], reason });
-  }
-
-  private order(variantId: string, comment: string, resultId?: string): void {
-    const resultIds = resultId === undefined ? [] : [resultId];
-    const expectedAdoptionId = this.standing().get(variantId)?.id;
-    this.decide({
-      kind: 'adopt',
-      adoptions: [{ variantId, resultIds, rule: 'newest', expectedAdoptionId }],
-      comment,
-    });
-  }
-
-  private decide(decision: EvidenceDecision): void {
+  protected decide(decision: EvidenceDecision): void {
     this.refusal.set(undefined);
     this.store.dispatch(ResultPageActions.decisionConfirmed({ programmeId: this.programmeId(), decision }));
   }
@@ -283,9 +282,5 @@ export class ResultPage {
     if (problem.code === 'conflict' || problem.code === 'wrong-state') {
       this.store.dispatch(ResultPageActions.opened({ programmeId: this.programmeId() }));
     }
-  }
-
-  private ask(question: Parameters<typeof askInDialog>[0]): Promise<string | undefined> {
-    return runInInjectionContext(this.injector, () => askInDialog(question));
   }
 }

@@ -2,14 +2,38 @@ import { TestBed } from '@angular/core/testing';
 import { provideEffects } from '@ngrx/effects';
 import { Store, provideStore } from '@ngrx/store';
 import { NEVER } from 'rxjs';
-import { fiveVariants } from '#shared/testing/ranking-scenario';
+import { fiveVariants, type RankingScenario } from '#shared/testing/ranking-scenario';
 import { provideRankings } from '../../../data/rankings/provide-rankings';
 import { RankingPageActions, RankingsApiActions } from '../../../data/rankings/rankings.actions';
 import { RankingsApi } from '../../../data/rankings/rankings-api';
 import { selectRankingView } from '../../../data/rankings/rankings.selectors';
 import { FigureDerivations } from './figure-derivations';
 
-function derive(kind: Parameters<FigureDerivations['of']>[0], basis = 'zero-yaw') {
+/** The five variants, of which one rests on the weighted mean of two results. */
+function withWeightedMean(variantId: string): RankingScenario {
+  const { inputs, context } = fiveVariants();
+  const first = inputs.results.find((result) => result.variantId === variantId);
+  if (!first) throw new Error('The variant has no result.');
+  const second = { ...first, id: 'second', name: 'Second entry', sessionId: 'winter' };
+  const adoption = {
+    id: 'adoption',
+    variantId,
+    resultIds: [first.id, second.id],
+    rule: 'weighted-mean' as const,
+    at: '2026-03-01T09:00:00+00:00',
+    by: 'Ines Quill',
+  };
+  return {
+    inputs: { ...inputs, results: [...inputs.results, second] },
+    context: { ...context, adoptions: [adoption] },
+  };
+}
+
+function derive(
+  kind: Parameters<FigureDerivations['of']>[0],
+  basis = 'zero-yaw',
+  sources: RankingScenario = fiveVariants(),
+) {
   TestBed.configureTestingModule({
     providers: [
       provideStore(),
@@ -21,7 +45,7 @@ function derive(kind: Parameters<FigureDerivations['of']>[0], basis = 'zero-yaw'
   const store = TestBed.inject(Store);
   const address = { cycle: 'short', basis };
   store.dispatch(RankingPageActions.opened({ programmeId: 'p', mode: 'computes', address }));
-  store.dispatch(RankingsApiActions.sourcesLoaded({ programmeId: 'p', sources: fiveVariants() }));
+  store.dispatch(RankingsApiActions.sourcesLoaded({ programmeId: 'p', sources }));
   const view = store.selectSignal(selectRankingView)();
   const row = view?.rows.find(({ variantId }) => variantId === 'sport');
   if (!view || !row) throw new Error('There is no ranking.');
@@ -53,5 +77,14 @@ describe('the derivation of a figure, for those who hold the inputs', () => {
     expect(derive('common-area').derivation.steps.at(-1)?.method).toBe('common-area-coefficient@1');
     TestBed.resetTestingModule();
     expect(derive('own-area').derivation.steps.at(-1)?.method).toBe('own-area-coefficient@1');
+  });
+
+  it('of a weighted mean goes down to the readings of every result, and says how they agree', () => {
+    const { row, derivation } = derive('drag-area', 'zero-yaw', withWeightedMean('sport'));
+    const steps = derivation.steps.map(({ method }) => method);
+    expect(steps.filter((method) => method === 'full-scale-drag-area@1')).toHaveLength(2);
+    expect(steps).toContain('birge-ratio@1');
+    const mean = derivation.steps.find(({ method }) => method === 'weighted-mean@1');
+    expect(Number.parseFloat(mean?.result.plain ?? '')).toBeCloseTo(row.figure.dragAreaM2, 6);
   });
 });

@@ -1,3 +1,4 @@
+import { loadChecks, loadFacilities } from './load-facilities';
 import { loadResults } from './load-results';
 import type { Scenario } from './scenario/scenario-types';
 import { SeedWriter, type Queryable } from './seed-writer';
@@ -26,6 +27,7 @@ export async function loadScenario(
   await loadProgramme(writer, scenario, by, beginning);
   await loadVariants(writer, scenario, by, beginning);
   await loadResults(writer, scenario, by);
+  await loadChecks(writer, scenario, by);
   for (const userId of people.memberIds) {
     await writer.insert('recent_programmes', {
       id: writer.id('recent', userId),
@@ -39,33 +41,6 @@ export async function loadScenario(
 function firstDay({ variants }: Scenario): string {
   const days = Object.values(variants).flatMap(({ frontalAreas }) => frontalAreas.map(({ date }) => date));
   return days.sort()[0] ?? '2024-01-01';
-}
-
-async function loadFacilities(writer: SeedWriter, scenario: Scenario, by: string, at: string): Promise<void> {
-  for (const [key, fields] of Object.entries(scenario.facilities)) {
-    const id = writer.id('facility', key);
-    await writer.insert('facilities', {
-      id,
-      name: fields.name,
-      kind: fields.kind,
-      area_m2: fields.areaM2,
-      blockage: fields.blockage,
-      usual_condition: fields.usualCondition,
-      bias_u_relative: fields.biasURelative,
-      bias_u_m2: fields.biasUM2,
-      session_u_relative: fields.sessionURelative,
-      session_u_m2: fields.sessionUM2,
-      session_degrees_of_freedom: fields.sessionDegreesOfFreedom,
-      installation_u_relative: fields.installationURelative,
-      installation_u_m2: fields.installationUM2,
-      installation_degrees_of_freedom: fields.installationDegreesOfFreedom,
-      repeatability_u_relative: fields.repeatabilityURelative,
-      repeatability_degrees_of_freedom: fields.repeatabilityDegreesOfFreedom,
-      remark: fields.remark,
-      created_at: at,
-    });
-    await writer.audit(at, by, 'facility.added', { kind: 'facility', id }, { name: fields.name });
-  }
 }
 
 async function loadProgramme(writer: SeedWriter, scenario: Scenario, by: string, at: string): Promise<void> {

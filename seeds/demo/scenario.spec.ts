@@ -1,3 +1,4 @@
+import { controlChart, type ChartSession } from '#shared/core/uncertainty/control-chart';
 import { facilityFields } from '#shared/contracts/facilities';
 import { resultFields } from '#shared/contracts/results';
 import { variantFields } from '#shared/contracts/variants';
@@ -167,6 +168,28 @@ describe('the demo’s data', () => {
   it('stands in the order in which it was entered: no result is older than the one before', () => {
     const days = ALDERMERE_SCENARIO.results.map(({ testDate }) => testDate);
     expect(days).toEqual([...days].sort());
+  });
+
+  it('has a steady check body at one facility, and one that drifted in the newest session of another', () => {
+    const chartOf = (facility: string) => {
+      const sessions = new Map<string, ChartSession>();
+      for (const check of ALDERMERE_SCENARIO.checks) {
+        if (check.facility !== facility || check.struck !== undefined) continue;
+        sessions.set(check.session, {
+          id: check.session,
+          date: check.date,
+          measurements: [{ dragAreaM2: check.dragAreaM2, s: check.s, n: 5 }],
+        });
+      }
+      return controlChart([...sessions.values()], new Set([...sessions.keys()].slice(0, -1)));
+    };
+    const signs = (facility: string) =>
+      chartOf(facility).points.flatMap(({ limits, sessionId }) =>
+        (limits?.signs ?? []).map((sign) => [sessionId, sign]),
+      );
+    expect(signs('halmere')).toEqual([]);
+    expect(chartOf('halmere').points).toHaveLength(8);
+    expect(signs('stennick')).toEqual([['August 2026', 'beyond-action-limit']]);
   });
 
   it('gives the second maker a ranking of its own', () => {

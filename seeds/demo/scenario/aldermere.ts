@@ -1,3 +1,4 @@
+import { ALDERMERE_CHECKS, ALDERMERE_FORMER_VERSIONS } from './check-bodies';
 import { DUNLIN } from './dunlin-programme';
 import { DUNLIN_2026_RESULTS } from './dunlin-results-2026';
 import { DUNLIN_EARLY_RESULTS } from './dunlin-results-early';
@@ -8,6 +9,8 @@ import type { Scenario } from './scenario-types';
 /** Aldermere Motors with its programme Dunlin, as it stands late in 2026. Tourer and Crossback still go by their newest. */
 export const ALDERMERE_SCENARIO: Scenario = {
   facilities: ALDERMERE_FACILITIES,
+  formerVersions: ALDERMERE_FORMER_VERSIONS,
+  checks: ALDERMERE_CHECKS,
   programme: DUNLIN,
   variants: DUNLIN_VARIANTS,
   results: [...DUNLIN_EARLY_RESULTS, ...DUNLIN_2026_RESULTS],

@@ -16,6 +16,7 @@ export const ALDERMERE_FACILITIES: Readonly<Record<string, FacilityFields>> = {
     installationDegreesOfFreedom: 6,
     repeatabilityURelative: 0.0012,
     repeatabilityDegreesOfFreedom: 24,
+    checkBody: { name: 'Grey box', remark: 'Aluminium, full size, on its own frame; since 2024.' },
     remark: 'Full size, open jet, five belts. Facility of the sign-off.',
   },
   stennick: {
@@ -31,6 +32,7 @@ export const ALDERMERE_FACILITIES: Readonly<Record<string, FacilityFields>> = {
     installationDegreesOfFreedom: 5,
     repeatabilityURelative: 0.0015,
     repeatabilityDegreesOfFreedom: 15,
+    checkBody: { name: 'Small grey box', remark: 'Aluminium, made for models of 40 %; since 2025.' },
     remark: 'Models of 40 %, slotted walls, five belts, model wheels driven.',
   },
   corrie: {

@@ -53,7 +53,7 @@ export function rankingInputOf(
       policies: POLICIES,
     },
     facilities: Object.entries(scenario.facilities).map(([id, fields]) => {
-      const { usualCondition: _usual, remark: _remark, ...facility } = fields;
+      const { usualCondition: _usual, remark: _remark, checkBody: _body, ...facility } = fields;
       return { ...facility, id };
     }),
     models: [...new Set(results.flatMap(({ modelId }) => modelId ?? []))].map((id) => ({ id })),

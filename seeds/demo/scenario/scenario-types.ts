@@ -2,6 +2,7 @@ import type { FacilityFields } from '#shared/contracts/facilities';
 import type { ProgrammeFields } from '#shared/contracts/programmes';
 import type { ResultFields } from '#shared/contracts/results';
 import type { VariantFields } from '#shared/contracts/variants';
+import type { ScenarioCheck, ScenarioFormerVersion } from './check-bodies';
 
 /**
  * The demo scenario as plain data: everything in it is invented. Entities point to each other by keys of this scenario;
@@ -15,6 +16,9 @@ export interface Scenario {
   readonly results: readonly ScenarioResult[];
   readonly withdrawals: readonly ScenarioWithdrawal[];
   readonly adoptions: readonly ScenarioAdoption[];
+  readonly formerVersions: readonly ScenarioFormerVersion[];
+  /** By date. */
+  readonly checks: readonly ScenarioCheck[];
 }
 
 export interface ScenarioProgramme extends Omit<ProgrammeFields, 'commonArea' | 'referenceFacilityId'> {

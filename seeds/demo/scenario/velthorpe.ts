@@ -4,6 +4,8 @@ import { electric } from './powertrains';
 
 /** A second maker with a small programme, present to show that one maker never learns of the other. */
 export const VELTHORPE_SCENARIO: Scenario = {
+  formerVersions: [],
+  checks: [],
   facilities: {
     ashgill: {
       name: 'Ashgill',

@@ -5,6 +5,12 @@ import type { NumberLocale } from '../../core/numbers/number-locale';
 import { CONDITION_ITEMS, conditionItemWord, conditionValueWords } from '../../ui/condition/condition-words';
 import { AIR_STATE_WORDS } from '../../ui/words/evidence-words';
 
+/** What becomes of a result that no sweep brings to the reference Reynolds number. */
+export const FRICTION_LINE_WORDS = {
+  on: $localize`moved along the friction line`,
+  off: $localize`left where it was measured`,
+} as const;
+
 export interface NamesKnown {
   readonly locale: NumberLocale;
   variant(id: string): string;
@@ -40,6 +46,10 @@ export function programmeComparison({
     },
     { label: $localize`Confidence`, read: (each) => number(each.confidence * 100, '%') },
     { label: $localize`Wind speed`, read: (each) => number(each.windSpeedMs, 'm/s') },
+    {
+      label: $localize`Reynolds number without a sweep`,
+      read: ({ frictionLine }) => FRICTION_LINE_WORDS[frictionLine ?? 'on'],
+    },
     {
       label: $localize`Sign-off facility`,
       read: ({ referenceFacilityId: id }) => (id ? facility(id) : ''),

@@ -15,7 +15,7 @@ import {
 } from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
-import { Router } from '@angular/router';
+import { Router, RouterLink } from '@angular/router';
 import { Store } from '@ngrx/store';
 import { map, startWith } from 'rxjs';
 import { AIR_STATES } from '#shared/contracts/condition';
@@ -43,7 +43,7 @@ import { Field, WlInput } from '../../ui/field/field';
 import { NumberField } from '../../ui/field/number-field';
 import { ProblemBanner } from '../../ui/problem-banner/problem-banner';
 import { AIR_STATE_WORDS } from '../../ui/words/evidence-words';
-import { programmeComparison } from './programme-comparison';
+import { FRICTION_LINE_WORDS, programmeComparison } from './programme-comparison';
 import {
   fillProgrammeForm,
   milestoneForm,
@@ -55,7 +55,16 @@ import {
 /** What does this programme compare on? Its reference condition, area, confidence and milestones. */
 @Component({
   selector: 'wl-programme-form-page',
-  imports: [Busy, ConditionFields, Field, NumberField, ProblemBanner, ReactiveFormsModule, WlInput],
+  imports: [
+    Busy,
+    ConditionFields,
+    Field,
+    NumberField,
+    ProblemBanner,
+    ReactiveFormsModule,
+    RouterLink,
+    WlInput,
+  ],
   templateUrl: './programme-form-page.html',
   styleUrl: './programme-form-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -78,6 +87,8 @@ export class ProgrammeFormPage implements HoldsChanges {
   protected readonly variants = this.store.selectSignal(variantsFeature.selectActive);
   protected readonly facilities = this.store.selectSignal(facilitiesFeature.selectActive);
   protected readonly mayEdit = computed(() => this.session.may('programmes.edit'));
+  protected readonly mayReadPolicies = computed(() => this.session.may('policies.read'));
+  protected readonly frictionWords = FRICTION_LINE_WORDS;
   protected readonly saving = computed(() => this.page().saving.kind === 'saving');
   protected readonly loadingProblem = computed(() => {
     const { opening } = this.page();

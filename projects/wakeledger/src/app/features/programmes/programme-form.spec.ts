@@ -20,6 +20,7 @@ const DUNLIN: ProgrammeFields = {
   commonArea: { kind: 'fixed', areaM2: 2.19 },
   confidence: 0.95,
   windSpeedMs: 3,
+  frictionLine: 'off',
   referenceFacilityId: '7a1b1c3e-58f6-4a37-8f7a-1f6f6f0a0050',
   milestones: [{ id: '7a1b1c3e-58f6-4a37-8f7a-1f6f6f0a0051', name: 'Clay freeze', date: '2027-03-14' }],
   remark: 'From the book of March.',

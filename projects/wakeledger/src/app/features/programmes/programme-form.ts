@@ -32,6 +32,7 @@ export type ProgrammeForm = FormGroup<{
   areaVariantId: FormControl<string>;
   confidencePercent: Nullable;
   windSpeedMs: Nullable;
+  frictionLine: FormControl<string>;
   referenceFacilityId: FormControl<string>;
   milestones: FormArray<MilestoneForm>;
   remark: FormControl<string>;
@@ -62,6 +63,7 @@ export function programmeForm(builder: NonNullableFormBuilder): ProgrammeForm {
     areaVariantId: '',
     confidencePercent: number(),
     windSpeedMs: number(),
+    frictionLine: builder.control<string>('on'),
     referenceFacilityId: '',
     milestones: builder.array<MilestoneForm>([]),
     remark: ['', Validators.maxLength(4000)],
@@ -79,6 +81,7 @@ export function newProgrammeValues(): ProgrammeFields {
     characteristicLengthName: $localize`wheelbase`,
     confidence: 0.95,
     windSpeedMs: 3,
+    frictionLine: 'on',
     milestones: [],
   };
 }
@@ -108,6 +111,7 @@ export function fillProgrammeForm(
     areaVariantId: commonArea?.kind === 'variant' ? commonArea.variantId : '',
     confidencePercent: tidy(fields.confidence * 100),
     windSpeedMs: fields.windSpeedMs,
+    frictionLine: fields.frictionLine ?? 'on',
     referenceFacilityId: fields.referenceFacilityId ?? '',
     milestones: fields.milestones.map(({ id, name, date }) => ({ id: id ?? '', name, date })),
     remark: fields.remark ?? '',
@@ -127,6 +131,7 @@ export function readProgrammeForm(form: ProgrammeForm): ProgrammeFields {
     commonArea: readArea(value),
     confidence: tidy((value.confidencePercent ?? 0) / 100),
     windSpeedMs: value.windSpeedMs ?? 0,
+    frictionLine: value.frictionLine === 'off' ? 'off' : 'on',
     referenceFacilityId: value.referenceFacilityId || undefined,
     milestones: value.milestones.map(({ id, name, date }) => ({
       id: id || undefined,

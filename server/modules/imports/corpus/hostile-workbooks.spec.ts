@@ -107,9 +107,7 @@ describe('A workbook that means harm or is broken', () => {
   });
 
   it('that unpacks to more than it declares is stopped there, and memory stays small', async () => {
-    const bomb = Buffer.from(
-      `<worksheet><sheetData>${' '.repeat(40 * 1024 * 1024)}</sheetData></worksheet>`,
-    );
+    const bomb = Buffer.from(`<worksheet><sheetData>${' '.repeat(40 * 1024 * 1024)}</sheetData></worksheet>`);
     const content = workbookOf({
       parts: [{ name: 'xl/worksheets/sheet0.xml', content: bomb, declaredBytes: 5000 }],
     });

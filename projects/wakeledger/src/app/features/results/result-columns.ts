@@ -1,5 +1,6 @@
 import type { ColDef, ICellRendererParams, IHeaderComp } from 'ag-grid-community';
 import type { QuantityFormat } from '../../ui/quantity/quantity-format';
+import { STATE_SHAPES, STATE_WORDS } from './page/state-words';
 import { CHECK_INKS, CHECK_SHAPES, CHECK_WORDS } from './result-check';
 import type { ResultRow } from './result-rows';
 
@@ -83,12 +84,12 @@ export function resultColumns(
     },
     { field: 'angles', headerName: $localize`Yaw angles`, ...number, width: 110 },
     {
-      field: 'adopted',
-      headerName: $localize`Adopted`,
-      width: 110,
+      field: 'state',
+      headerName: $localize`State`,
+      width: 130,
       filter: 'agTextColumnFilter',
-      valueGetter: ({ data }) => (data?.adopted ? $localize`adopted` : ''),
-      cellRenderer: adoptedCell,
+      valueGetter: ({ data }) => (data ? STATE_WORDS[data.state] : ''),
+      cellRenderer: stateCell,
     },
     { field: 'session', headerName: $localize`Session`, filter: 'agTextColumnFilter', width: 130 },
     {
@@ -151,12 +152,11 @@ function figureCell({ data }: ICellRendererParams<ResultRow>, format: QuantityFo
   return cell;
 }
 
-function adoptedCell({ data }: ICellRendererParams<ResultRow>): HTMLElement {
-  const cell = element('span', '', data?.adopted ? 'wl-moss' : '');
-  if (data?.adopted) {
-    const shape = element('span', '✓ ');
-    shape.setAttribute('aria-hidden', 'true');
-    cell.append(shape, $localize`adopted`);
-  }
+function stateCell({ data }: ICellRendererParams<ResultRow>): HTMLElement {
+  const state = data?.state ?? 'entered';
+  const cell = element('span', '', state === 'adopted' ? 'wl-moss' : '');
+  const shape = element('span', `${STATE_SHAPES[state]} `);
+  shape.setAttribute('aria-hidden', 'true');
+  cell.append(shape, STATE_WORDS[state]);
   return cell;
 }

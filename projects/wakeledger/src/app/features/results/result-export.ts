@@ -1,5 +1,6 @@
 import { csvText, type CsvCell } from '../../core/export/csv';
 import { CHECK_WORDS } from './result-check';
+import { STATE_WORDS } from './page/state-words';
 import type { ResultRow } from './result-rows';
 
 export function resultsCsv(rows: readonly ResultRow[]): string {
@@ -24,7 +25,7 @@ export function resultsTable(rows: readonly ResultRow[]): readonly (readonly Csv
       $localize`U in m²`,
       $localize`Check`,
       $localize`Why`,
-      $localize`Adopted`,
+      $localize`State`,
       $localize`Session`,
     ],
     ...rows.map((row) => [
@@ -42,7 +43,7 @@ export function resultsTable(rows: readonly ResultRow[]): readonly (readonly Csv
       row.expandedUM2,
       CHECK_WORDS[row.check.state],
       row.check.reasons.join(' '),
-      row.adopted ? $localize`adopted` : '',
+      STATE_WORDS[row.state],
       row.session,
     ]),
   ];

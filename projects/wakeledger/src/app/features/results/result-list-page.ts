@@ -5,6 +5,7 @@ import {
   effect,
   inject,
   input,
+  signal,
   untracked,
 } from '@angular/core';
 import { Router, RouterLink } from '@angular/router';
@@ -17,14 +18,18 @@ import type {
   GridApi,
   GridOptions,
   GridReadyEvent,
+  SelectionChangedEvent,
   StateUpdatedEvent,
 } from 'ag-grid-community';
+import type { ApiProblem } from '../../core/api/api-problem';
+import { Undo } from '../../core/editing/undo';
 import { problemWords } from '../../core/errors/problem-words';
 import { saveText } from '../../core/export/save-file';
 import { saveWorkbook } from '../../core/export/workbook';
 import { Preferences } from '../../core/preferences/preferences';
 import { Session } from '../../core/session/session';
 import { facilitiesFeature } from '../../data/facilities/facilities.feature';
+import type { EvidenceDecision } from '../../data/results/evidence-decision';
 import { ResultListPageActions } from '../../data/results/results.actions';
 import { policiesFeature } from '../../data/policies/policies.feature';
 import { resultsFeature } from '../../data/results/results.feature';
@@ -34,7 +39,10 @@ import { gridDefaults } from '../../ui/data-grid/data-grid';
 import { EmptyState } from '../../ui/empty-state/empty-state';
 import { ProblemBanner } from '../../ui/problem-banner/problem-banner';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
+import { adoptionTargets } from './adoption/adoption-targets';
+import { doneWords } from './done-words';
 import { GridMemory } from './grid-memory';
+import { BulkDeeds } from './list/bulk-deeds';
 import { CHECK_INKS, CHECK_SHAPES, CHECK_STATES, CHECK_WORDS, type CheckState } from './result-check';
 import { resultColumns } from './result-columns';
 import { resultsCsv, resultsTable } from './result-export';
@@ -45,7 +53,7 @@ const GRID = 'results';
 /** What evidence do we have, and can it be compared? */
 @Component({
   selector: 'wl-result-list-page',
-  imports: [AgGridAngular, Busy, EmptyState, ProblemBanner, RouterLink],
+  imports: [AgGridAngular, BulkDeeds, Busy, EmptyState, ProblemBanner, RouterLink],
   templateUrl: './result-list-page.html',
   styleUrl: './result-list-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -59,6 +67,7 @@ export class ResultListPage {
   private readonly store = inject(Store);
   private readonly router = inject(Router);
   private readonly session = inject(Session);
+  private readonly undo = inject(Undo);
   private readonly memory = inject(GridMemory);
   private readonly format = inject(QuantityFormat);
   private readonly preferences = inject(Preferences);
@@ -127,14 +136,65 @@ export class ResultListPage {
     getRowId: ({ data }) => data.id,
     rowHeight: this.preferences.density() === 'compact' ? 32 : 40,
     tooltipShowDelay: 400,
+    rowSelection: { mode: 'multiRow', selectAll: 'filtered', enableClickSelection: false },
     rowClassRules: { withdrawn: ({ data }) => data?.check.state === 'withdrawn' },
   };
+
+  private readonly selectedIds = signal<ReadonlySet<string>>(new Set());
+  protected readonly selected = computed(() => this.results().filter(({ id }) => this.selectedIds().has(id)));
+  private readonly deed = this.store.selectSignal(resultsFeature.selectDeed);
+  private readonly inputs = this.store.selectSignal(resultsFeature.selectInputs);
+  private readonly standing = this.store.selectSignal(resultsFeature.selectStanding);
+  protected readonly busy = computed(() => this.deed().kind === 'under-way');
+  protected readonly refusal = signal<ApiProblem | undefined>(undefined);
+  protected readonly inputOf = computed(() => {
+    const inputs = new Map(this.inputs()?.results.map((each) => [each.id, each]));
+    return (resultId: string) => inputs.get(resultId);
+  });
+  protected readonly targets = computed(() =>
+    adoptionTargets(
+      this.selected(),
+      this.results(),
+      this.standing(),
+      {
+        reductions: this.reduced().reductions,
+        variantName: (id) => this.variants().get(id)?.name ?? '…',
+        facilityName: (id) => this.facilities().get(id)?.name ?? '…',
+      },
+      this.format,
+    ),
+  );
 
   constructor() {
     effect(() => {
       const programmeId = this.programmeId();
       untracked(() => this.store.dispatch(ResultListPageActions.opened({ programmeId })));
     });
+    effect(() => {
+      const deed = this.deed();
+      untracked(() => {
+        if (deed.kind !== 'decided' && deed.kind !== 'refused') return;
+        this.store.dispatch(ResultListPageActions.outcomeSeen());
+        if (deed.kind === 'refused') return this.refusal.set(deed.problem);
+        this.undo.say(doneWords(deed.done, this.selected()[0]?.name ?? ''));
+        this.selectNone();
+      });
+    });
+  }
+
+  protected select({ api }: SelectionChangedEvent<ResultRow>): void {
+    this.selectedIds.set(new Set(api.getSelectedRows().map(({ id }) => id)));
+  }
+
+  protected selectNone(): void {
+    this.api?.deselectAll();
+  }
+
+  protected decide(decision: EvidenceDecision): void {
+    this.refusal.set(undefined);
+    this.store.dispatch(
+      ResultListPageActions.decisionConfirmed({ programmeId: this.programmeId(), decision }),
+    );
   }
 
   protected retry(): void {

@@ -19,11 +19,12 @@ const result = (id: string, change: Partial<Result> = {}): Result =>
     enteredAt: '2026-09-15T08:00:00Z',
     enteredBy: 'Ingrid Falk',
     adopted: false,
+    state: 'entered',
     ...change,
   }) as Result;
 
 const RESULTS: readonly Result[] = [
-  result('good', { testDate: '2026-09-14', adopted: true }),
+  result('good', { testDate: '2026-09-14', adopted: true, state: 'adopted' }),
   result('fast', { testDate: '2026-09-15', speedKmh: 260 }),
   result('floor', { testDate: '2026-09-16', condition: { ground: 'fixed-floor', wheels: 'rotating' } }),
   result('broken', { testDate: '2026-09-17', points: [{ yawDeg: 3, value: 0.28 }] }),

@@ -1,4 +1,4 @@
-import type { Result } from '#shared/contracts/results';
+import type { Result, ResultState } from '#shared/contracts/results';
 import type { CheckLimits } from '#shared/core/checks/limits';
 import type { ReducedEvidence } from '../../data/results/reduced-evidence';
 import type { CheckLanguage } from '../../ui/checks/check-figures';
@@ -22,7 +22,7 @@ export interface ResultRow {
   readonly dragAreaM2: number | null;
   readonly expandedUM2: number | null;
   readonly check: ResultCheck;
-  readonly adopted: boolean;
+  readonly state: ResultState;
   readonly session: string;
 }
 
@@ -71,7 +71,7 @@ export function resultRows(
           },
           words,
         ),
-        adopted: result.adopted,
+        state: result.state,
         session: result.session ?? '',
       };
     })

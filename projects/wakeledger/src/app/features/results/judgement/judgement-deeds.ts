@@ -56,3 +56,21 @@ export const withdrawQuestion = (name: string, adopted: boolean, variant: string
   severe: true,
   reasonLabel: $localize`Why it is withdrawn (at least three characters)`,
 });
+
+const results = (count: number): string =>
+  count === 1 ? $localize`one result` : $localize`${String(count)}:COUNT: results`;
+
+export const checkManyQuestion = (count: number): Question => ({
+  ...checkQuestion(results(count)),
+  title: $localize`Have you checked ${results(count)}:RESULTS:?`,
+});
+
+export const setManyAsideQuestion = (count: number): Question => ({
+  ...setAsideQuestion(results(count)),
+  detail: $localize`They stay readable and count for nothing until somebody brings them back. The reason is listed where the ranking says what stayed out.`,
+});
+
+export const withdrawManyQuestion = (names: readonly string[]): Question => ({
+  ...withdrawQuestion(results(names.length), false, ''),
+  detail: $localize`${names.join(', ')}:NAMES:. They stay readable and count for nothing; where a variant rests on one, it is taken out of the adoption. This cannot be undone.`,
+});

@@ -7,6 +7,7 @@ import { provideEffects } from '@ngrx/effects';
 import { provideStore } from '@ngrx/store';
 import type { Role } from '#shared/access/roles';
 import type { Facility } from '#shared/contracts/facilities';
+import type { CorrelationSummary } from '#shared/contracts/correlations';
 import type { CheckMeasurement, TestSession } from '#shared/contracts/test-sessions';
 import { facilityFields } from '#shared/testing/domain-fields';
 import { signedInAs } from '../../../testing/members';
@@ -22,6 +23,7 @@ const BASE = `/api/v1/facilities/${ID}`;
 interface Known {
   readonly facility?: Partial<Facility>;
   readonly means?: readonly number[];
+  readonly correlations?: readonly CorrelationSummary[];
 }
 
 const sessionsOf = (count: number): TestSession[] =>
@@ -56,7 +58,11 @@ describe('the facility page', () => {
   };
   const init = () => ({ ...chart, isDisposed: () => false, getWidth: () => 400, getHeight: () => 300 });
 
-  const open = async (role: Role, { facility = {}, means = [] }: Known, address = `/facilities/${ID}`) => {
+  const open = async (
+    role: Role,
+    { facility = {}, means = [], correlations = [] }: Known,
+    address = `/facilities/${ID}`,
+  ) => {
     TestBed.configureTestingModule({
       providers: [
         provideHttpClient(),
@@ -85,6 +91,10 @@ describe('the facility page', () => {
     });
     http.expectOne(`${BASE}/sessions`).flush({ sessions: sessionsOf(means.length).toReversed() });
     http.expectOne(`${BASE}/check-measurements`).flush({ measurements: means.map(measurementOf) });
+    // Asked for once the facility itself is there.
+    harness.detectChanges();
+    TestBed.tick();
+    http.expectOne('/api/v1/correlations').flush({ correlations });
     await harness.fixture.whenStable();
     harness.detectChanges();
     return harness.fixture.nativeElement as HTMLElement;
@@ -119,6 +129,24 @@ describe('the facility page', () => {
     for (const deed of ['Change the facility', 'Add a session', 'Strike out', 'Take over']) {
       expect(text(host)).not.toContain(deed);
     }
+  });
+
+  it('names the correlations that bring it elsewhere or others here, with the version in use', async () => {
+    const correlation = {
+      name: 'Model to full size',
+      facilityId: ID,
+      referenceFacilityId: idOf(90),
+      latestNumber: 3,
+    };
+    const host = await open('viewer', {
+      correlations: [
+        { ...correlation, id: idOf(91), inUse: { versionNumber: 2, since: '2026-05-04' } },
+        { ...correlation, id: idOf(92), name: 'Elsewhere', facilityId: idOf(93) },
+      ],
+    });
+    expect(text(host)).toContain('Model to full size brings it to …; version 2 in use since 4 May 2026');
+    expect(text(host)).not.toContain('Elsewhere');
+    expect(host.querySelector('a[href^="/correlations/"]')).toBeNull();
   });
 
   const DRIFTING = [0.6, 0.602, 0.598, 0.601, 0.599, 0.62];

@@ -28,6 +28,7 @@ import { QuantityFormat } from '../../ui/quantity/quantity-format';
 import { FACILITY_KIND_WORDS } from '../../ui/words/evidence-words';
 import { ControlChartPanel } from './control-chart-panel';
 import { blockageWords } from './facility-comparison';
+import { FacilityCorrelations } from './facility-correlations';
 import { uncertaintyLines, usualConditionWords } from './facility-words';
 import { MeasurementEntry } from './measurement-entry';
 import { MeasurementTable, type Striking } from './measurement-table';
@@ -42,6 +43,7 @@ import { VersionHistory } from './version-history';
     ControlChartPanel,
     DatePipe,
     EmptyState,
+    FacilityCorrelations,
     MeasurementEntry,
     MeasurementTable,
     ProblemBanner,
@@ -70,7 +72,7 @@ export class FacilityPage {
   protected readonly mayEdit = computed(() => this.member.may('facilities.edit'));
   protected readonly mayReadResults = computed(() => this.member.may('results.read'));
   private readonly loading = this.store.selectSignal(facilitiesFeature.selectLoading);
-  private readonly known = this.store.selectSignal(facilitiesFeature.selectById);
+  protected readonly known = this.store.selectSignal(facilitiesFeature.selectById);
   protected readonly facility = computed(() => this.known().get(this.facilityId()));
   protected readonly missing = computed(
     () => this.loading().kind === 'ready' && this.facility() === undefined,

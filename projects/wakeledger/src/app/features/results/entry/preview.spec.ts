@@ -15,11 +15,13 @@ const surroundings = {
 };
 
 describe('the preview of a typed result', () => {
-  it('is the drag area at the reference: 0.2712/1.01·2.19 m² in this tunnel', () => {
+  it('is a full-scale drag area of 0.2712/1.01·2.19 m² in this tunnel, brought along the friction line', () => {
     const preview = previewOf(resultFields(ids), surroundings);
     expect(preview.kind).toBe('reduced');
     const output = preview.kind === 'reduced' ? preview.reduction.output : undefined;
-    expect(output?.zeroYaw.dragAreaM2).toBeCloseTo((0.2712 / 1.01) * 2.19, 12);
+    const [atFullScale, atTheReference] = output?.steps ?? [];
+    expect(atFullScale?.dragAreaM2).toBeCloseTo((0.2712 / 1.01) * 2.19, 12);
+    expect(atTheReference).toMatchObject({ step: 'reynolds', dragAreaM2: output?.zeroYaw.dragAreaM2 });
     expect(output?.zeroYaw.expandedUncertaintyM2).toBeGreaterThan(0);
     expect(output?.excludedBy).toEqual([]);
   });

@@ -86,6 +86,19 @@ describe('A workbook that means harm or is broken', () => {
     }
   });
 
+  it('may hold parts that nobody reads, in loose markup or another encoding or none at all', async () => {
+    const parts = [
+      { name: 'xl/drawings/vmlDrawing1.vml', content: '<xml><br><font color=red></xml>' },
+      {
+        name: 'customXml/item1.xml',
+        content: Buffer.from('<?xml version="1.0" encoding="ISO-8859-1"?><x>\u00e4</x>', 'latin1'),
+      },
+      { name: 'xl/printerSettings/1.bin', content: Buffer.from([0x3c, 0xff, 0xfe, 0, 1, 2]) },
+      { name: 'xl/media/empty.emf', content: '' },
+    ];
+    expect((await taken(workbookOf({ parts }))).rows).toHaveLength(1);
+  });
+
   it('cannot multiply entities: without a declaration none exist', async () => {
     const sheet = resultsSheet(rowXml(3, ['&lol9;', 'b', 'c', 'd', 1]));
     expect(await refusal(taken(workbookOf({ sheets: [sheet] })))).toMatch(/unusable-input.*not well-formed/);

@@ -45,7 +45,7 @@ async function parse(
   const parser = new SaxesParser({ xmlns: false, position: false });
   parser.on('xmldecl', ({ encoding }) => {
     told();
-    if (encoding !== undefined && !/^utf-?(8|16)$/i.test(encoding))
+    if (!beginningOnly && encoding !== undefined && !/^utf-?(8|16)$/i.test(encoding))
       throw damaged(`its part ${part} is written in ${encoding}, and only UTF-8 and UTF-16 are allowed.`);
   });
   parser.on('doctype', () => {
@@ -69,7 +69,7 @@ async function parse(
     reader.text?.(text);
   });
   parser.on('error', (error) => {
-    throw rootSeen || !beginningOnly ? notWellFormed(part, error.message) : new NotXml();
+    throw beginningOnly ? new NotXml() : notWellFormed(part, error.message);
   });
   try {
     for await (const text of textOf(archive, part, beginningOnly)) {
@@ -86,7 +86,7 @@ async function parse(
   }
 }
 
-/** A part that does not begin like XML (a picture, a macro) is let be. */
+/** A part that nobody reads may be what it likes (a picture, a drawing in loose markup), but for a document type. */
 class NotXml extends Error {
   override readonly name = 'NotXml';
 }
@@ -100,7 +100,7 @@ async function* textOf(
   for await (const chunk of archive.bytesOf(part)) {
     if (decoder === undefined) {
       if (beginningOnly && !looksLikeXml(chunk)) throw new NotXml();
-      decoder = new TextDecoder(encodingOf(chunk), { fatal: true });
+      decoder = new TextDecoder(encodingOf(chunk), { fatal: !beginningOnly });
     }
     yield decodedPiece(decoder, chunk, part);
   }

@@ -63,6 +63,21 @@ export const routes: Routes = [
         loadChildren: () => import('./features/facilities/facilities.routes').then((file) => file.routes),
       },
       {
+        path: 'adjustments',
+        canActivate: [needs('facilities.read')],
+        loadChildren: () => import('./features/adjustments/adjustments.routes').then((file) => file.routes),
+      },
+      {
+        path: 'correlations',
+        canActivate: [needs('facilities.read')],
+        loadChildren: () => import('./features/correlations/correlations.routes').then((file) => file.routes),
+      },
+      {
+        path: 'policies',
+        canActivate: [needs('policies.read')],
+        loadChildren: () => import('./features/policies/policies.routes').then((file) => file.routes),
+      },
+      {
         path: 'cycles',
         canActivate: [needs('cycles.read')],
         loadChildren: () => import('./features/cycles/cycles.routes').then((file) => file.routes),

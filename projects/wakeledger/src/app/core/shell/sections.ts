@@ -25,6 +25,9 @@ export function organisationSections(): readonly Section[] {
   return [
     { words: $localize`Programmes`, link: ['/programmes'], needs: ['programmes.read'] },
     { words: $localize`Facilities`, link: ['/facilities'], needs: ['facilities.read'] },
+    { words: $localize`Adjustments`, link: ['/adjustments'], needs: ['facilities.read'] },
+    { words: $localize`Correlations`, link: ['/correlations'], needs: ['facilities.read'] },
+    { words: $localize`Policies`, link: ['/policies'], needs: ['policies.read'] },
     { words: $localize`Cycles`, link: ['/cycles'], needs: ['cycles.read'] },
   ];
 }

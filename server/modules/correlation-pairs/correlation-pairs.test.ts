@@ -129,7 +129,11 @@ describe('pairs, correlations and adjustments in a programme', () => {
     await adopt('2026-05-01');
     const document = await inputs();
     expect(document.correlations).toEqual([
-      expect.objectContaining({ id: versions[0]?.id, name: 'Small to large', replaces: ['blockage'] }),
+      expect.objectContaining({
+        id: versions[0]?.id,
+        name: 'Small to large, version 1, in use since 2026-05-01',
+        replaces: ['blockage'],
+      }),
     ]);
     expect(document.correlations?.[0]?.pairs).toHaveLength(3);
     const context = await aerodynamicist.ok(rankingContextRead, { params: { programmeId } });

@@ -6,7 +6,7 @@ import { wordOn } from './use-of-versions.policy';
 
 /** A correlation as the ranking takes it, and what a person is told of it. */
 export interface CorrelationInUse {
-  /** Its id is that of the version. */
+  /** Its id is that of the version; its name says which version it is and since when it is used, for every derivation. */
   readonly input: CorrelationInput;
   readonly correlationId: string;
   readonly name: string;
@@ -47,7 +47,7 @@ export async function correlationsInUse(
     return {
       input: {
         id: versionId,
-        name,
+        name: `${name}, version ${versionNumber}, in use since ${effectiveDate}`,
         facilityId,
         referenceFacilityId,
         replaces,

@@ -194,6 +194,9 @@ function stayedOut({ names, inputs, reduced, choices, context }: ViewParts): Ran
     referenceCondition: inputs.programme.referenceCondition,
     limits: exclusionLimits(inputs.programme.policies),
     reduced: new Map(reduced.reductions.map(({ output }) => [output.resultId, output])),
+    notComparable: new Map(
+      reduced.reductions.map(({ output, condition }) => [output.resultId, new Set(condition.notComparable)]),
+    ),
     refusals: new Map(reduced.refused.map(({ resultId, detail }) => [resultId, detail])),
     setAside: new Map(context.setAside.map(({ resultId, reason }) => [resultId, reason])),
   };

@@ -68,6 +68,8 @@ export interface ExclusionSources {
   readonly referenceCondition: ConditionInput | null | undefined;
   readonly limits: ExclusionLimits;
   readonly reduced: ReadonlyMap<string, ReducedResult>;
+  /** Items that no adjustment and no correlation answers for, by result. */
+  readonly notComparable: ReadonlyMap<string, ReadonlySet<string>>;
   /** The method's own words, by result, of those that it refused. */
   readonly refusals: ReadonlyMap<string, string>;
   /** Reasons of those that are set aside. */
@@ -98,9 +100,10 @@ function viewRule(
   if (rule === 'blockage') {
     return { ...plain, value: reduced?.blockageRatio ?? null, limit: blockageLimit(sources, result) };
   }
-  return rule === 'not-comparable'
-    ? { ...plain, items: differences(sources.referenceCondition, result?.condition) }
-    : plain;
+  if (rule !== 'not-comparable') return plain;
+  const open = sources.notComparable.get(result?.id ?? '');
+  const items = differences(sources.referenceCondition, result?.condition);
+  return { ...plain, items: items.filter(({ item }) => open === undefined || open.has(item)) };
 }
 
 /** What stayed out, with the rule and who may do what about it. */

@@ -10,6 +10,8 @@ export interface RankingNames {
   readonly results: ReadonlyMap<string, ResultInput>;
   readonly models: ReadonlyMap<string, string>;
   readonly sessions: ReadonlyMap<string, string>;
+  /** Adjustments and correlations; a correlation's name says which version it is, and since when it is used. */
+  readonly judgements: ReadonlyMap<string, string>;
   /** Which version of each facility's corrections and uncertainties counts. */
   readonly facilityVersions: ReadonlyMap<string, number>;
   /** Results that some variant rests on by adoption. */
@@ -26,6 +28,9 @@ export function namesIn(inputs: RankingInput, context: RankingContext): RankingN
     results: byId(inputs.results),
     models: new Map((inputs.models ?? []).map(({ id, name }) => [id, name ?? id])),
     sessions: new Map(context.sessions.map(({ id, name }) => [id, name])),
+    judgements: new Map(
+      [...(inputs.adjustments ?? []), ...(inputs.correlations ?? [])].map(({ id, name }) => [id, name ?? id]),
+    ),
     facilityVersions: new Map(context.facilityVersions.map(({ facilityId, number }) => [facilityId, number])),
     adopted: new Set(context.adoptions.flatMap(({ resultIds }) => resultIds)),
   };
@@ -52,6 +57,15 @@ function nameOfKey(names: RankingNames, kind: string, id: string): string {
       return variantName(names, id);
     case 'as-built-scale':
       return names.models.get(id) ?? id;
+    case 'adjustment':
+    case 'correlation-level':
+    case 'correlation-slope':
+      return names.judgements.get(id) ?? id;
+    case 'correlation-scatter': {
+      const at = id.lastIndexOf(':');
+      const correlation = id.slice(0, at);
+      return `${names.judgements.get(correlation) ?? correlation}, ${variantName(names, id.slice(at + 1))}`;
+    }
     case 'session':
       return names.sessions.get(id) ?? names.results.get(id)?.name ?? id;
     case 'installation':

@@ -47,9 +47,13 @@ describe('the shell', () => {
       'Variants',
       'Results',
       'Import',
+      'Test planning',
       'Reference',
       'Programmes',
       'Facilities',
+      'Adjustments',
+      'Correlations',
+      'Policies',
       'Cycles',
       'For scripts',
     ]);

@@ -4,6 +4,8 @@ import { Checks } from '../../../ui/checks/checks';
 import { QuantityFormat } from '../../../ui/quantity/quantity-format';
 import { machWords, reynoldsWords } from '../../../ui/checks/check-figures';
 import { CHECK_INKS, CHECK_SHAPES, CHECK_WORDS } from '../result-check';
+import { readSweep } from '../sweep/sweep-view';
+import { sweepVerdicts } from '../sweep/sweep-words';
 import type { Preview } from './preview';
 
 /** What is typed, at the programme's reference, while it is typed. Nothing of it is stored. */
@@ -30,6 +32,11 @@ import type { Preview } from './preview';
             ><span aria-hidden="true">{{ it.shape }}</span> {{ it.words }}</strong
           >
         </p>
+        @for (verdict of sweep(); track verdict.words) {
+          <p class="small" [class]="verdict.ink">
+            <span aria-hidden="true">{{ verdict.shape }} </span>{{ verdict.words }}
+          </p>
+        }
         <p class="small" i18n>From {{ before() }} as it came. Nothing is stored before you save.</p>
       } @else if (refused()) {
         <p class="wl-ochre">
@@ -99,6 +106,13 @@ export class PreviewPanel {
   protected readonly checks = computed(() => {
     const preview = this.preview();
     return preview === undefined || preview.kind === 'no-reference' ? undefined : preview.checks;
+  });
+  /** What the typed points say as a Reynolds sweep, where they are one. */
+  protected readonly sweep = computed(() => {
+    const preview = this.preview();
+    if (preview?.kind !== 'reduced' || preview.reduction.reynolds.kind !== 'own-sweep') return [];
+    const reading = readSweep(preview.reduction.reynolds.fit.points, preview.context);
+    return reading.kind === 'fitted' ? sweepVerdicts(reading.view, this.format) : [];
   });
   protected readonly shown = computed(() => {
     const preview = this.preview();

@@ -6,13 +6,19 @@ import type { FrontalArea, Variant } from '#shared/contracts/variants';
 import type { Check } from '#shared/core/checks/check';
 import { checksOf, checksOfRefused } from '#shared/core/checks/checks-of';
 import { policiesInputOf } from '#shared/core/checks/limits';
+import { judgedResult } from '#shared/core/ranking/judged-result';
 import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import { reduceResults } from '#shared/core/reduction/reduce';
-import type { Reduction } from '#shared/core/reduction/reduction';
+import type { Reduction, ReductionContext } from '#shared/core/reduction/reduction';
 import { Refused, type Refusal } from '#shared/core/refusal';
 
 export type Preview =
-  | { readonly kind: 'reduced'; readonly reduction: Reduction; readonly checks: readonly Check[] }
+  | {
+      readonly kind: 'reduced';
+      readonly reduction: Reduction;
+      readonly context: ReductionContext;
+      readonly checks: readonly Check[];
+    }
   | { readonly kind: 'refused'; readonly refusal: Refusal; readonly checks: readonly Check[] }
   /** Nothing to do with this result: the programme itself cannot be used. */
   | { readonly kind: 'no-reference'; readonly refusal: Refusal };
@@ -35,7 +41,12 @@ export function previewOf(fields: ResultFields, surroundings: PreviewSurrounding
     const { context, reductions, refused } = reduceResults(inputOf(fields, surroundings));
     const [reduction] = reductions;
     if (reduction) {
-      return { kind: 'reduced', reduction, checks: checksOf(reduction, { context, limits }, bodyShape) };
+      return {
+        kind: 'reduced',
+        reduction,
+        context,
+        checks: checksOf(reduction, { context, limits }, bodyShape),
+      };
     }
     const [refusal] = refused;
     if (refusal) return { kind: 'refused', refusal, checks: checksOfRefused(refusal, fields, limits) };
@@ -77,14 +88,18 @@ function inputOf(fields: ResultFields, surroundings: PreviewSurroundings): Ranki
         frontalAreaUM2: area?.uM2,
       },
     ],
+    // As it will be held until somebody judges it: points at several speeds are a sweep of their own.
     results: [
-      {
-        ...fields,
-        id: ID,
-        sessionId: fields.session,
-        installationId: fields.installation,
-        modelId: fields.model,
-      },
+      judgedResult(
+        {
+          ...fields,
+          id: ID,
+          sessionId: fields.session,
+          installationId: fields.installation,
+          modelId: fields.model,
+        },
+        undefined,
+      ),
     ],
   };
 }

@@ -86,10 +86,14 @@ describe('a planned test', () => {
       createdAt: '2026-03-01T00:00:00Z',
       createdBy: 'Ingrid',
     };
-    expect(reasonNotToExpect(plan)).toBeUndefined();
-    expect(reasonNotToExpect({ ...plan, inputs: { ...plan.inputs, speedKmh: undefined } })).toContain(
+    expect(reasonNotToExpect(plan, 0.3)).toBeUndefined();
+    expect(reasonNotToExpect({ ...plan, inputs: { ...plan.inputs, speedKmh: undefined } }, 0.3)).toContain(
       'No speed',
     );
-    expect(reasonNotToExpect({ ...plan, retiredAt: '2026-03-02T00:00:00Z' })).toContain('retired');
+    expect(reasonNotToExpect({ ...plan, retiredAt: '2026-03-02T00:00:00Z' }, 0.3)).toContain('retired');
+    // √(1.4·287.05287·293.15) = 343.23 m/s: 600 km/h are Mach 0.49.
+    expect(reasonNotToExpect({ ...plan, inputs: { ...plan.inputs, speedKmh: 600 } }, 0.3)).toBe(
+      '600 km/h is Mach 0.49. Up to Mach 0.30 is accepted.',
+    );
   });
 });

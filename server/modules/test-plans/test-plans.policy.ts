@@ -1,6 +1,8 @@
 import { pressureMistypedAs, temperatureMistypedAs } from '#shared/core/air/mistyped-air';
-import { AIR_LIMITS } from '#shared/core/constants';
+import { speedOfSound } from '#shared/core/air/gas-properties';
+import { AIR_LIMITS, CELSIUS_ZERO_K, KMH_PER_MS } from '#shared/core/constants';
 import { TUNNEL_KINDS } from '#shared/core/ranking/ranking-input';
+import { machNumber } from '#shared/core/similarity/flow';
 import type { Facility } from '#shared/contracts/facilities';
 import type { TestPlan, TestPlanFields, TestPlanInputs } from '#shared/contracts/test-plans';
 import { Issues, type Issue } from '../../rules/issue';
@@ -85,11 +87,19 @@ function airIssues({ tunnelTemperatureC, tunnelPressurePa }: TestPlanInputs): re
     ).list;
 }
 
-/** Why results cannot be expected from a plan as it stands; undefined where they can. */
-export function reasonNotToExpect(plan: TestPlan): string | undefined {
+/**
+ * Why results cannot be expected from a plan as it stands; undefined where they can.
+ *
+ * @param machLimit the highest Mach number that the organisation accepts
+ */
+export function reasonNotToExpect(plan: TestPlan, machLimit: number): string | undefined {
   if (plan.retiredAt !== undefined) return 'It is retired. Bring it back first.';
-  if (plan.inputs.speedKmh === undefined) {
+  const { speedKmh, tunnelTemperatureC } = plan.inputs;
+  if (speedKmh === undefined) {
     return 'No speed has been settled on. Set the speed of the test and save, then results can be expected.';
   }
-  return undefined;
+  const mach = machNumber(speedKmh / KMH_PER_MS, speedOfSound(tunnelTemperatureC + CELSIUS_ZERO_K));
+  return mach > machLimit
+    ? `${speedKmh} km/h is Mach ${mach.toFixed(2)}. Up to Mach ${machLimit.toFixed(2)} is accepted.`
+    : undefined;
 }

@@ -4,6 +4,7 @@ import { fail } from '../../http/problem-error';
 import { demandFound, demandFreeName, demandVersion, refuseUnusable } from '../../rules/refusals';
 import { differences, recordAudit } from '../audit';
 import { findFacility } from '../facilities';
+import { policiesInForce } from '../policies';
 import { programmeExists } from '../programmes';
 import { findVariant } from '../variants';
 import { planIssues, reasonNotToExpect, type PlanSurroundings } from './test-plans.policy';
@@ -48,7 +49,7 @@ export async function changePlan(
   demandVersion(before, expectedVersion);
   refuseUnusable(planIssues(fields, await surroundingsOf(work, place.programmeId, fields)));
   demandFreeName(await planOfName(work.tx, place.programmeId, fields.name), before.id, fields.name);
-  if (before.expectedSince !== undefined) demandExpectable({ ...before, ...fields });
+  if (before.expectedSince !== undefined) await demandExpectable(work, { ...before, ...fields });
   await updatePlan(work.tx, before.id, fields);
   const after = await onePlan(work, place);
   await record(work, 'test-plan.changed', before, after);
@@ -63,7 +64,7 @@ export async function expectPlan(
 ): Promise<TestPlan> {
   const before = demandFound(await lockPlan(work.tx, place));
   demandVersion(before, expectedVersion);
-  if (expected) demandExpectable(before);
+  if (expected) await demandExpectable(work, before);
   await updatePlan(work.tx, before.id, { expectedSince: expected ? work.now : null });
   const after = await onePlan(work, place);
   await record(work, expected ? 'test-plan.expected' : 'test-plan.expected-no-more', before, after);
@@ -84,8 +85,9 @@ export async function retirePlan(
   return after;
 }
 
-function demandExpectable(plan: TestPlan): void {
-  const detail = reasonNotToExpect(plan);
+async function demandExpectable(work: Work, plan: TestPlan): Promise<void> {
+  const { values } = await policiesInForce(work.tx);
+  const detail = reasonNotToExpect(plan, values.machExcluded);
   if (detail !== undefined) fail('wrong-state', { detail });
 }
 

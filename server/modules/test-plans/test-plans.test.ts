@@ -154,6 +154,16 @@ describe('test plans over HTTP', () => {
     });
     expect(early).toMatchObject({ code: 'wrong-state', detail: expect.stringContaining('speed') });
 
+    const tooFast = testPlanFields(ids, { speedKmh: 600 }, 'Too fast');
+    const refused = await aerodynamicist.ok(testPlanCreate, { params: { programmeId }, body: tooFast });
+    expect(
+      await manager.refused(testPlanExpect, {
+        params: place(refused.id),
+        ifMatch: 1,
+        body: { expected: true },
+      }),
+    ).toMatchObject({ code: 'wrong-state', detail: expect.stringContaining('Mach 0.49') });
+
     const settled = testPlanFields(ids, { speedKmh: 190 }, 'Expected');
     await manager.ok(testPlanUpdate, { params: place(id), ifMatch: 1, body: settled });
     const expected = await manager.ok(testPlanExpect, {

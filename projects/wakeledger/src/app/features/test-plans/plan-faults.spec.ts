@@ -17,6 +17,7 @@ describe('the figures of a plan as they are typed', () => {
 
   it('pass where they can be used, and are not judged while they are empty', () => {
     expect(faultsOf({})).toEqual({});
+    expect(faultsOf({ targetBasis: 'reference', targetMillions: 0 })).toEqual({});
     expect(faultsOf({ scale: null, tunnelTemperatureC: null, frontalAreaM2: null })).toEqual({});
   });
 
@@ -31,6 +32,7 @@ describe('the figures of a plan as they are typed', () => {
     [{ tunnelPressurePa: 5e6 }, 'tunnelPressurePa', 'looks mistyped'],
     [{ speedKmh: 0 }, 'speedKmh', 'above 0'],
     [{ speedKmh: 300, maximumSpeedKmh: 220 }, 'speedKmh', 'The facility reaches 220'],
+    [{ targetBasis: 'typed', targetMillions: 0 }, 'targetMillions', 'above 0'],
     [{ dragCoefficient: -0.3 }, 'dragCoefficient', 'above 0'],
     [{ targetBasis: 'sweep', targetResultId: '' }, 'targetResultId', 'Choose the result'],
   ] satisfies readonly (readonly [Partial<TypedPlan['inputs']>, keyof TypedPlan['inputs'], string])[])(

@@ -43,6 +43,8 @@ function withFault(field: PlanField, words: string | undefined): Faults {
 function notPositive(inputs: Inputs): Faults {
   const wrong = POSITIVE.filter((field) => {
     const value = inputs[field];
+    // What is not asked for any more is not judged: nobody could see why.
+    if (field === 'targetMillions' && inputs.targetBasis !== 'typed') return false;
     return typeof value === 'number' && !(value > 0);
   });
   return Object.fromEntries(wrong.map((field) => [field, $localize`A number above 0 is accepted.`]));

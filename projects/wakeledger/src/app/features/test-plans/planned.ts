@@ -96,9 +96,7 @@ export function planInputOf(inputs: TestPlanInputs, { programme, policies, tunne
 
 /** Plans a test; the numbers that a form cannot give (NaN) leave it waiting. */
 export function planned(inputs: TestPlanInputs, surroundings: PlanSetting): PlanState {
-  if (
-    Object.values(inputs).some((value) => typeof value === 'number' && !(value > 0) && Number.isNaN(value))
-  ) {
+  if (Object.values(inputs).some((value) => Number.isNaN(value))) {
     return { kind: 'waiting' };
   }
   const { target } = inputs;

@@ -91,6 +91,7 @@ export class RankingPage {
   });
   protected readonly mayEnter = computed(() => this.session.may('results.enter'));
   protected readonly mayEdit = computed(() => this.session.may('programmes.edit'));
+  protected readonly mayAdjust = computed(() => this.session.may('adjustments.edit'));
   protected readonly chartShown = signal(false);
   protected readonly ordersShown = signal(false);
   protected readonly areaRefused = signal(false);

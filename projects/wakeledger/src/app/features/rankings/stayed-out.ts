@@ -1,12 +1,15 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import { RouterLink } from '@angular/router';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
 import { Preferences } from '../../core/preferences/preferences';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
+import { missingAdjustments } from './missing-adjustments';
 import { stayedOutEntries } from './stayed-out-groups';
 
 /** What stayed out of the ranking, by which rule, and who may do what about it. */
 @Component({
   selector: 'wl-stayed-out',
+  imports: [RouterLink],
   template: `
     <h2 i18n>What stayed out</h2>
     @for (each of entries(); track each.id) {
@@ -45,6 +48,16 @@ import { stayedOutEntries } from './stayed-out-groups';
     } @empty {
       <p i18n>Nothing: every result can be used.</p>
     }
+    @if (missing().length) {
+      <p class="missing" i18n>What would bring results in:</p>
+      <ul>
+        @for (each of missing(); track each.words) {
+          <li>
+            <a routerLink="/adjustments/new" [queryParams]="each.query">{{ each.words }}</a>
+          </li>
+        }
+      </ul>
+    }
   `,
   styles: `
     :host {
@@ -72,6 +85,10 @@ import { stayedOutEntries } from './stayed-out-groups';
     li {
       padding: 2px 0;
     }
+    .missing {
+      margin: 8px 0 2px;
+      font-size: var(--wl-small);
+    }
     /* Paper cannot be opened: what is folded on the screen prints whole. */
     @media print {
       details::details-content {
@@ -83,10 +100,15 @@ import { stayedOutEntries } from './stayed-out-groups';
 })
 export class StayedOut {
   readonly exclusions = input.required<RankingView['stayedOut']>();
+  /** Whether the person may add the adjustment that is missing. */
+  readonly mayAdjust = input(false);
 
   private readonly format = inject(QuantityFormat);
   private readonly preferences = inject(Preferences);
 
+  protected readonly missing = computed(() =>
+    this.mayAdjust() ? missingAdjustments(this.exclusions(), this.preferences.numberLocale()) : [],
+  );
   protected readonly entries = computed(() =>
     stayedOutEntries(this.exclusions(), this.format, this.preferences.numberLocale()),
   );

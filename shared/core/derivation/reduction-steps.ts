@@ -14,6 +14,7 @@ import type { PointInput, ResultInput } from '../ranking/ranking-input';
 import { isZeroYaw } from '../reduction/yaw/yaw-points';
 import { stepOf, type DerivationStep } from './derivation';
 import { inValues, joined, plain } from './in-values';
+import { limitsUsed } from './policy-words';
 import { REDUCTION_METHODS as METHODS } from './reduction-methods';
 import { referenceSteps, type StepsToFigure } from './reference-steps';
 
@@ -202,7 +203,10 @@ function flowStep(reduction: Reduction, context: ReductionContext): DerivationSt
       ),
       value: reynolds,
       unit: '',
-      assumed: uncorrectedReynolds(reduction.reynolds),
+      assumed: [
+        ...uncorrectedReynolds(reduction.reynolds),
+        ...limitsUsed(context.programme.policies?.policyId),
+      ],
       cautions: [
         ...cautionIf(
           output.cautions.includes('mach'),

@@ -1,5 +1,9 @@
 import { policiesChange, policiesRead, type PolicyValues } from '#shared/contracts/policies';
+import { programmeCreate } from '#shared/contracts/programmes';
+import { rankingContextRead, rankingInputsRead } from '#shared/contracts/rankings';
+import { variantCreate } from '#shared/contracts/variants';
 import { DEFAULT_LIMITS } from '#shared/core/checks/limits';
+import { programmeFields, variantFields } from '#shared/testing/domain-fields';
 import { startApi, type ApiHarness } from '../../testing/api-harness';
 import type { ApiMember } from '../../testing/as-member';
 
@@ -87,6 +91,36 @@ describe('the limits of an organisation over HTTP', () => {
     ]);
     expect((await current()).number).toBe(number);
   });
+
+  it.each(['on', 'off'] as const)(
+    'enter the ranking with their version, the friction line %s as the programme has it',
+    async (frictionLine) => {
+      const { number, values } = await current();
+      const minimumReynolds = values.minimumReynolds + 1e5;
+      await aerodynamicist.ok(policiesChange, {
+        body: {
+          expectedNumber: number,
+          values: { ...values, minimumReynolds },
+          comment: 'For the ranking',
+        },
+      });
+      const { id: programmeId } = await aerodynamicist.ok(programmeCreate, {
+        body: programmeFields({ name: `Line ${frictionLine}`, frictionLine }),
+      });
+      const params = { programmeId };
+      await aerodynamicist.ok(variantCreate, { params, body: variantFields() });
+      const { programme } = await aerodynamicist.ok(rankingInputsRead, { params });
+      expect(programme.policies).toMatchObject({
+        policyId: `v${number + 1}`,
+        frictionLine,
+        minimumReynolds,
+        frictionShare: 0.12,
+        frictionShareU: 0.06,
+      });
+      const context = await aerodynamicist.ok(rankingContextRead, { params });
+      expect(context.policyNumber).toBe(number + 1);
+    },
+  );
 
   it('need a change and a comment', async () => {
     const { number, values } = await current();

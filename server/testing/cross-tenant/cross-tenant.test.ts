@@ -159,7 +159,6 @@ describe('sabotage turns the probe red', () => {
       `create unique index canary on variants (id);
        alter table results add constraint canary foreign key (variant_id) references variants (id);
        alter table results drop constraint results_variant_fkey;
-       alter table adoptions drop constraint adoptions_result_fkey;
        alter table adoption_results drop constraint adoption_results_result_fkey`,
       'alter table results drop constraint canary; drop index canary',
       /results: canary refers to another’s row/,

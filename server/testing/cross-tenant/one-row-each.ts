@@ -41,6 +41,36 @@ const POLICIES = {
   plausible: [],
 };
 
+/** The inputs of an evaluation: a programme without results, which comes to nothing. */
+const EVALUATED = {
+  programme: {
+    referenceSpeedKmh: 120,
+    referenceAir: { state: 'iso-2533-sea-level' },
+    characteristicLengthM: 4.5,
+    commonAreaM2: 2,
+  },
+  facilities: [],
+  variants: [],
+  results: [],
+};
+
+const OUTCOME = {
+  query: {},
+  comparison: {
+    moves: [],
+    probabilities: [],
+    bracketsGained: [],
+    bracketsLost: [],
+    entering: [],
+    leaving: [],
+    exclusionsGained: [],
+    exclusionsLost: [],
+    changed: false,
+  },
+  ground: [],
+  resultNames: [],
+};
+
 /** Values that no rule can guess: what a JSON column must hold so that the product can read the row. */
 const BY_HAND: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
   programmes: {
@@ -55,7 +85,14 @@ const BY_HAND: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
   adjustments: { item: 'ground', body_shapes: [], from_value: '"a"', to_value: '"b"' },
   correlation_versions: { replaces: [], pairs: '[]' },
   result_judgements: { reynolds: '{"kind":"friction-line"}' },
-  proposals: { changes: '[]' },
+  evaluations: {
+    inputs: JSON.stringify(EVALUATED),
+    parameters:
+      '{"policyId":null,"frictionLine":null,"facilityVersions":[],"correlationIds":[],"adjustmentIds":[]}',
+    output:
+      '{"zeroYaw":null,"windAveraged":null,"usedResultIds":[],"combination":null,"results":[],"excluded":[]}',
+  },
+  proposals: { changes: '[]', outcome: JSON.stringify(OUTCOME) },
   test_plans: {
     inputs:
       '{"scale":0.4,"target":{"basis":"reference"},"tunnelTemperatureC":20,"tunnelPressurePa":100000,"frontalAreaM2":2.2,"dragCoefficient":0.3,"condition":{}}',

@@ -244,8 +244,19 @@ export function assembleView(parts: ViewParts): RankingView {
 }
 
 /**
+ * All results at the reference that the choices ask for: most of the work of a ranking, and the same whatever is adopted or
+ * set aside.
+ *
+ * @throws {Refused} what refuses the whole ranking, as the operation `rank`
+ */
+export function reducedForChoices(inputs: RankingInput, choices: Pick<RankingChoices, 'air'>): ReducedSet {
+  const air = chosenAir(choices.air, inputs.programme.referenceAir) ?? inputs.programme.referenceAir;
+  return reduceStage(inputs, air);
+}
+
+/**
  * The ranking for the choices, from all results of a programme and what the screen needs beside them. Only the chosen
- * cycle must bring its rows.
+ * cycle must bring its rows. `reduced` is kept by who builds several rankings of the same inputs.
  *
  * @throws {Refused} what refuses the whole ranking, as the operation `rank`
  */
@@ -253,10 +264,9 @@ export function buildRankingView(
   inputs: RankingInput,
   context: RankingContext,
   choices: RankingChoices,
+  reduced: ReducedSet = reducedForChoices(inputs, choices),
 ): RankingView {
-  const air = chosenAir(choices.air, inputs.programme.referenceAir) ?? inputs.programme.referenceAir;
   const configured = configuredVariants(inputs.variants, context.variants, choices.configuration);
-  const reduced = reduceStage(inputs, air);
   const { evidence: evidenceBasis, basis } = choices;
   const evidence = evidenceStage(inputs.variants, reduced, context, evidenceBasis, basis);
   const drag = dragStage(evidence);

@@ -125,7 +125,7 @@ test('a yaw sweep typed by hand is previewed, entered, adopted, seen in the rank
 
   await page.goto(`${programme.address}/results?search=J-04`);
   await page.getByRole('link', { name: 'J-04' }).click();
-  await adopt(page, 'A sweep, and the newer one.', 'It replaces J-03');
+  await adopt(page, 'A sweep, and the newer one.', 'Rests now on J-03, by adoption.');
   await page.getByRole('link', { name: 'Ranking' }).click();
   await expect(leader).toHaveText('Sport');
   await expect(page.getByRole('row').filter({ hasText: 'Sport' }).first()).toContainText(figure);
@@ -134,7 +134,7 @@ test('a yaw sweep typed by hand is previewed, entered, adopted, seen in the rank
   await page.getByRole('link', { name: 'J-04' }).click();
   await page.getByRole('button', { name: 'Withdraw' }).click();
   const dialog = page.getByRole('alertdialog');
-  await expect(dialog).toContainText('releases the adoption');
+  await expect(dialog).toContainText('takes it out of the adoption');
   await dialog.getByRole('textbox').fill('Entered for practice.');
   await dialog.getByRole('button', { name: 'Withdraw' }).click();
   await expect(page.getByText('Entered for practice.').first()).toBeVisible();
@@ -144,11 +144,11 @@ test('a yaw sweep typed by hand is previewed, entered, adopted, seen in the rank
 
 async function adopt(page: Page, comment: string, expected = ''): Promise<void> {
   await page.getByRole('button', { name: 'Adopt', exact: true }).click();
-  const dialog = page.getByRole('alertdialog');
+  const dialog = page.getByRole('dialog');
   await expect(dialog).toContainText(expected);
   await dialog.getByRole('textbox').fill(comment);
   await dialog.getByRole('button', { name: 'Adopt' }).click();
-  await expect(page.getByText('✓ adopted')).toBeVisible();
+  await expect(page.getByText('● adopted')).toBeVisible();
 }
 
 test('an adoption that a colleague changed meanwhile is not overwritten unseen', async ({
@@ -159,7 +159,7 @@ test('an adoption that a colleague changed meanwhile is not overwritten unseen',
   await enterSweep(page, programme, 'J-04');
   await page.getByRole('button', { name: 'Enter the result' }).click();
   await page.getByRole('button', { name: 'Adopt', exact: true }).click();
-  const dialog = page.getByRole('alertdialog');
+  const dialog = page.getByRole('dialog');
   await dialog.getByRole('textbox').fill('Mine.');
 
   const colleague = await browser.newContext({ baseURL: new URL(page.url()).origin });

@@ -106,6 +106,10 @@ export class AdoptionDialog {
         ...target,
         ...choice,
         chosen: new Set(choice.resultIds),
+        now: target.offered
+          .filter(({ id }) => target.standing?.resultIds.includes(id))
+          .map(({ name }) => name)
+          .join(', '),
         several: choice.resultIds.length > 1,
         combination: combination === undefined ? [] : combinationLines(combination, this.format),
       };

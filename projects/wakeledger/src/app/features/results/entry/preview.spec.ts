@@ -12,6 +12,7 @@ const surroundings = {
   variant: { ...variantFields(), id: 'variant', programmeId: 'programme', version: 1 } as Variant,
   facility: { ...facilityFields(), id: 'facility', version: 1 } as Facility,
   policies: { number: 0, values: DEFAULT_LIMITS } as unknown as PolicyVersion,
+  document: null,
 };
 
 describe('the preview of a typed result', () => {
@@ -29,6 +30,24 @@ describe('the preview of a typed result', () => {
   it('says at once that another ground is not comparable', () => {
     const preview = previewOf(resultFields(ids, { condition: { ground: 'fixed-floor' } }), surroundings);
     expect(preview.kind === 'reduced' && preview.reduction.output.excludedBy).toEqual(['not-comparable']);
+  });
+
+  it('brings another ground to the reference where the organisation knows what it is worth', () => {
+    const adjustments = [
+      {
+        id: 'belts',
+        item: 'ground',
+        fromValue: 'fixed-floor',
+        toValue: 'several-belts',
+        deltaDragAreaM2: -0.011,
+        uM2: 0.003,
+      },
+    ];
+    const fields = resultFields(ids, { condition: { ground: 'fixed-floor', wheels: 'rotating' } });
+    const preview = previewOf(fields, { ...surroundings, document: { facilities: [], adjustments } });
+    expect(preview).toMatchObject({ kind: 'reduced', reduction: { output: { excludedBy: [] } } });
+    const condition = 'checks' in preview && preview.checks.find(({ check }) => check === 'condition');
+    expect(condition).toMatchObject({ verdict: 'passes', finding: 'adjusted' });
   });
 
   it('says in the method’s words what is missing', () => {

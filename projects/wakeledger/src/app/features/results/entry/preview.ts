@@ -29,6 +29,8 @@ export interface PreviewSurroundings {
   readonly facility: Facility;
   /** The limits in force. */
   readonly policies: PolicyVersion;
+  /** What the organisation knows beside it: adjustments and correlations; null where the programme has none to hand on yet. */
+  readonly document: Pick<RankingInput, 'facilities' | 'adjustments' | 'correlations'> | null;
 }
 
 const ID = 'typed';
@@ -65,7 +67,7 @@ function newest(areas: readonly FrontalArea[]): FrontalArea | undefined {
 }
 
 function inputOf(fields: ResultFields, surroundings: PreviewSurroundings): RankingInput {
-  const { programme, variant, facility, policies } = surroundings;
+  const { programme, variant, facility, policies, document } = surroundings;
   const area = newest(variant.frontalAreas);
   return {
     programme: {
@@ -76,9 +78,12 @@ function inputOf(fields: ResultFields, surroundings: PreviewSurroundings): Ranki
       confidence: programme.confidence,
       referenceCondition: programme.referenceCondition,
       windSpeedMs: programme.windSpeedMs,
+      referenceFacilityId: programme.referenceFacilityId,
       policies: policiesInputOf(policies.values, policies.number, programme.frictionLine ?? 'on'),
     },
-    facilities: [facility],
+    facilities: [facility, ...(document?.facilities ?? []).filter(({ id }) => id !== facility.id)],
+    adjustments: document?.adjustments,
+    correlations: document?.correlations,
     models: fields.model === undefined ? [] : [{ id: fields.model, name: fields.model }],
     variants: [
       {

@@ -82,6 +82,8 @@ export class ResultEntryPage implements HoldsChanges {
   private readonly programme = this.store.selectSignal(resultsFeature.selectProgramme);
   private readonly results = this.store.selectSignal(resultsFeature.selectResults);
   private readonly loading = this.store.selectSignal(resultsFeature.selectLoading);
+  /** For what the organisation’s adjustments and correlations make of it. */
+  private readonly inputs = this.store.selectSignal(resultsFeature.selectInputs);
   private readonly policies = this.store.selectSignal(policiesFeature.selectInForce);
   protected readonly variants = this.store.selectSignal(variantsFeature.selectActive);
   protected readonly facilities = this.store.selectSignal(facilitiesFeature.selectActive);
@@ -139,7 +141,7 @@ export class ResultEntryPage implements HoldsChanges {
       ({ value, yawDeg }) => !Number.isNaN(value) && !Number.isNaN(yawDeg),
     );
     const fields = { ...complete, points: typed };
-    return previewOf(fields, { programme, variant, facility, policies });
+    return previewOf(fields, { programme, variant, facility, policies, document: this.inputs() });
   });
   protected readonly before = computed(() => {
     const value = this.value().points.find((point) => point.yawDeg === 0)?.value ?? null;

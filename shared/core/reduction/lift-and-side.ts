@@ -19,6 +19,9 @@ function areaPerValue(parts: ResultParts, flow: PointFlow): number | null {
   }
 }
 
+const statesNone = ({ frontLift, rearLift, sideForce }: PointInput): boolean =>
+  frontLift == null && rearLift == null && sideForce == null;
+
 /**
  * Lift and side force of the points that state any, by the steps coefficient and scale only: no tare, no blockage, no later
  * step (method section 3).
@@ -28,10 +31,11 @@ export function liftAndSideOf(
   points: readonly ReducedPoint[],
   parts: ResultParts,
 ): LiftAndSide[] {
+  if (given.every(statesNone)) return [];
   return given.flatMap((point, i) => {
     const { frontLift, rearLift, sideForce } = point;
     const reduced = points[i];
-    if (reduced === undefined || (frontLift == null && rearLift == null && sideForce == null)) return [];
+    if (reduced === undefined || statesNone(point)) return [];
     const perValue = areaPerValue(parts, reduced.flow);
     if (perValue === null) return [];
     const areaOf = (value: number | null | undefined): number | null =>

@@ -3,7 +3,7 @@ import type { PointInput, ResultInput } from '../ranking/ranking-input';
 import { refuse } from '../refusal';
 import { figureOf, standardUncertainty } from '../uncertainty/budget';
 import { liftAndSideOf } from './lift-and-side';
-import { reducePoint } from './reduce-point';
+import { reducePoints } from './reduce-point';
 import type { ReducedPoint, Reduction, ReductionContext, ResultParts, WindAverage } from './reduction';
 import { needed, resultPartsOf } from './result-parts';
 import { sameSpeed, windAverageOf } from './result-wind-average';
@@ -60,7 +60,12 @@ function outputOf(
   const { result, tunnel } = parts;
   const mach = highestMach(points);
   const { reynolds: reynoldsStep, condition } = reference;
+  const wind = windAverage.figure;
   const reynolds = reynoldsStep.kind === 'own-sweep' ? reynoldsStep.fit.lowestReynolds : first.reynolds;
+  const { cautions, excludedBy } = verdictsOf(
+    { parts, mach, reynolds, reynoldsStep, condition, windAverage },
+    context,
+  );
   return {
     resultId: result.id,
     variantId: result.variantId,
@@ -73,12 +78,12 @@ function outputOf(
     steps: stepsOf(reference),
     yawRatio: windAverage.yaw?.yawRatio ?? null,
     zeroYaw: figureOf(reference.figure),
-    windAveragedDragAreaM2: windAverage.figure?.dragAreaM2 ?? null,
-    windAveragedStandardUncertaintyM2:
-      windAverage.figure === null ? null : standardUncertainty(windAverage.figure.budget),
+    windAveragedDragAreaM2: wind?.dragAreaM2 ?? null,
+    windAveragedStandardUncertaintyM2: wind === null ? null : standardUncertainty(wind.budget),
     windAveragedRefusal: windAverage.refusal,
     liftAndSide,
-    ...verdictsOf({ parts, mach, reynolds, reynoldsStep, condition, windAverage }, context),
+    cautions,
+    excludedBy,
   };
 }
 
@@ -90,7 +95,7 @@ function outputOf(
 export function reduceResult(result: ResultInput, context: ReductionContext): Reduction {
   const parts = resultPartsOf(result, context);
   const given = pointsOf(result);
-  const points = given.map((point) => reducePoint(point, parts, context));
+  const points = reducePoints(given, parts, context);
   const zeroYawPoints = zeroYawPointsOf(points, parts);
   const reference = referenceFigureOf(parts, zeroYawPoints, context);
   const windAverage = windAverageOf(parts, points, reference.figure, context);

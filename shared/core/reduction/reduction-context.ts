@@ -13,6 +13,7 @@ import { positive } from '../requirement';
 import { reynoldsNumber } from '../similarity/flow';
 import { fitSweep, judgeSweep } from '../similarity/reynolds-sweep';
 import { once } from './once';
+import { windOf } from './yaw/yaw-ratio';
 import type { Policies, PreparedCorrelation, PreparedSweep, ReductionContext } from './reduction';
 
 /**
@@ -149,6 +150,7 @@ export function reductionContextOf(input: RankingInput): ReductionContext {
     referenceAir,
     referenceReynolds,
     referenceCondition: programme.referenceCondition ?? {},
+    wind: windOf(programme),
     facilities: byId(input.facilities, 'facilities'),
     models: byId(input.models, 'models'),
     variants: byId(input.variants, 'variants'),

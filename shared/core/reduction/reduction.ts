@@ -13,9 +13,9 @@ import type {
 } from '../ranking/ranking-input';
 import type { FrictionLineMove } from '../similarity/friction-line';
 import type { SweepFit, SweepMove, SweepPrediction, SweepVerdict } from '../similarity/reynolds-sweep';
-import type { Amount, KeyedFigure } from '../uncertainty/budget';
+import type { KeyedFigure } from '../uncertainty/budget';
 import type { BlockageCorrection } from './blockage';
-import type { YawOutput } from './yaw/yaw-ratio';
+import type { Wind, YawOutput } from './yaw/yaw-ratio';
 
 /** The policies of a programme, defaults filled in. */
 export interface Policies {
@@ -66,6 +66,7 @@ export interface ReductionContext {
   readonly referenceAir: Air;
   readonly referenceReynolds: number;
   readonly referenceCondition: ConditionInput;
+  readonly wind: Wind;
   readonly facilities: ReadonlyMap<string, FacilityInput>;
   readonly models: ReadonlyMap<string, ModelInput>;
   readonly variants: ReadonlyMap<string, VariantInput>;
@@ -104,6 +105,13 @@ export interface PointFlow {
   readonly dynamicPressureMeasured: boolean;
 }
 
+/** What a point was measured in: the same for all points that state nothing of their own. */
+export interface PointConditions {
+  readonly flow: PointFlow;
+  readonly mach: number | null;
+  readonly reynolds: number | null;
+}
+
 /** One point brought to a drag area at full scale; areas in m². */
 export interface ReducedPoint {
   readonly yawDeg: number;
@@ -119,8 +127,6 @@ export interface ReducedPoint {
   readonly dragAreaM2: number;
   /** d(full-scale drag area)/d(value), corrections included. */
   readonly perValue: number;
-  /** All but repeatability, whose amounts the zero-yaw points do not share. */
-  readonly amounts: readonly Amount[];
   /** Null: a gap, allowed only beside a stated uncertainty. */
   readonly repeatability: { readonly amountM2: number; readonly degreesOfFreedom: number } | null;
 }

@@ -1,7 +1,6 @@
 import { airOf, type Air } from '../air/air';
 import {
   QUANTITIES,
-  TUNNEL_KINDS,
   type FacilityInput,
   type ModelInput,
   type Quantity,
@@ -27,14 +26,18 @@ export function neededPositive(value: number | null | undefined, where: string):
 }
 
 export function isTunnel(kind: FacilityInput['kind']): kind is TunnelKind {
-  return TUNNEL_KINDS.some((tunnel) => tunnel === kind);
+  return kind !== 'road' && kind !== 'simulation';
 }
+
+const KNOWN_QUANTITIES: ReadonlySet<string> = new Set(QUANTITIES);
+
+const isQuantity = (quantity: string): quantity is Quantity => KNOWN_QUANTITIES.has(quantity);
 
 /** @throws {Refused} missing-input, unknown-quantity */
 export function quantityOf(result: ResultInput): Quantity {
   const quantity = needed(result.quantity, 'quantity');
-  const known = QUANTITIES.find((one) => one === quantity);
-  return known ?? refuse('unknown-quantity', 'quantity', `There is no quantity “${quantity}”.`);
+  if (isQuantity(quantity)) return quantity;
+  return refuse('unknown-quantity', 'quantity', `There is no quantity “${quantity}”.`);
 }
 
 function modelOf(result: ResultInput, context: ReductionContext): ModelInput | null {

@@ -7,7 +7,9 @@ import { isZeroYaw, type YawPoint } from './yaw/yaw-points';
 
 /** Two speeds are one when they differ by no more than rounding. */
 export function sameSpeed(a: ReducedPoint, b: ReducedPoint): boolean {
-  const [speedA, speedB] = [a.flow.speedMs, b.flow.speedMs];
+  if (a.flow === b.flow) return true;
+  const speedA = a.flow.speedMs;
+  const speedB = b.flow.speedMs;
   if (speedA === null || speedB === null) return speedA === speedB;
   return Math.abs(speedA - speedB) <= SPEED_TOLERANCE * speedB;
 }
@@ -52,15 +54,16 @@ export function windAverageOf(
   parts: ResultParts,
   points: readonly ReducedPoint[],
   zeroYaw: KeyedFigure,
-  { programme }: ReductionContext,
+  { programme, wind }: ReductionContext,
 ): WindAverage {
+  // Most results have no yawed point: to say so needs no exception.
+  if (points.every((point) => isZeroYaw(point.yawDeg))) {
+    return { yaw: null, figure: null, refusal: 'yaw-too-few-angles' };
+  }
   try {
     const sweep = sweepPoints(points);
-    const yaw = evaluateYaw({
-      points: sweep,
-      referenceSpeedKmh: programme.referenceSpeedKmh,
-      windSpeedMs: programme.windSpeedMs,
-    });
+    const { referenceSpeedKmh, windSpeedMs } = programme;
+    const yaw = evaluateYaw({ points: sweep, referenceSpeedKmh, windSpeedMs }, wind);
     if (sweep.some((point) => Number.isNaN(point.uM2))) {
       refuse('missing-input', 'points.s', 'A point of the sweep has no uncertainty of its reading.');
     }

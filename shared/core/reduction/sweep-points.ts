@@ -1,6 +1,6 @@
 import type { ResultInput } from '../ranking/ranking-input';
 import type { SweepPoint } from '../similarity/reynolds-sweep';
-import { reducePoint } from './reduce-point';
+import { reducePoints } from './reduce-point';
 import type { ReductionContext } from './reduction';
 import { asSweep } from './reynolds-step';
 import { needed, resultPartsOf } from './result-parts';
@@ -15,5 +15,5 @@ import { isZeroYaw } from './yaw/yaw-points';
 export function sweepPointsOf(result: ResultInput, context: ReductionContext): readonly SweepPoint[] {
   const parts = resultPartsOf(result, context);
   const zeroYaw = needed(result.points, 'points').filter(({ yawDeg }) => isZeroYaw(yawDeg ?? 0));
-  return asSweep(zeroYaw.map((point) => reducePoint(point, parts, context)));
+  return asSweep(reducePoints(zeroYaw, parts, context));
 }

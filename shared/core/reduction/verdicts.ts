@@ -40,21 +40,20 @@ export function verdictsOf(judged: Judged, context: ReductionContext): Verdicts 
   const { parts, mach, condition, windAverage } = judged;
   const { facility, tunnel, air } = parts;
   const { policies } = context;
-  const cautions = new Set<ReductionCaution>(air?.notes);
-  for (const caution of windAverage.yaw?.cautions ?? []) cautions.add(caution);
+  const cautions: ReductionCaution[] = [...(air?.notes ?? []), ...(windAverage.yaw?.cautions ?? [])];
   const excludedBy: ExclusionRule[] = [];
   const byMach = mach === null ? 'passes' : machVerdict(mach, policies);
-  if (byMach === 'caution') cautions.add('mach');
+  if (byMach === 'caution') cautions.push('mach');
   if (byMach === 'excluded') excludedBy.push('mach');
   if (tunnel !== null && isTunnel(facility.kind)) {
     const byBlockage = blockageVerdict(facility.kind, tunnel.blockageRatio, policies);
-    if (byBlockage === 'caution') cautions.add('blockage');
+    if (byBlockage === 'caution') cautions.push('blockage');
     if (byBlockage === 'excluded') excludedBy.push('blockage');
   }
-  if (transitionInDoubt(judged, context)) cautions.add('transition');
+  if (transitionInDoubt(judged, context)) cautions.push('transition');
   if (condition.notComparable.length > 0) {
     if (condition.includedReason === null) excludedBy.push('not-comparable');
-    else cautions.add('included-with-reason');
+    else cautions.push('included-with-reason');
   }
-  return { cautions: [...cautions].sort(), excludedBy };
+  return { cautions: cautions.sort(), excludedBy };
 }

@@ -1,8 +1,8 @@
-import { budgetOf, type Amount, type KeyedFigure } from '../uncertainty/budget';
+import { budgetOf, timesOf, type Amount, type KeyedFigure } from '../uncertainty/budget';
+import { correctionAmounts } from './correction-amounts';
 import { conditionAmounts, conditionStepOf } from './condition-step';
 import { correlatedAmounts, correlationStepOf } from './correlation-step';
 import { facilityAmounts } from './facility-amounts';
-import { weighedAmounts } from './reduce-point';
 import type {
   ConditionStep,
   CorrelationStep,
@@ -32,8 +32,9 @@ function meanDragArea(points: readonly ReducedPoint[]): number {
   return sum / points.length;
 }
 
-function scaledBy(amounts: readonly Amount[], factor: number): readonly Amount[] {
-  return factor === 1 ? amounts : amounts.map((entry) => ({ ...entry, amountM2: entry.amountM2 * factor }));
+/** Adds amounts times a factor to a list. */
+function pushScaled(into: Amount[], amounts: readonly Amount[], factor: number): void {
+  for (const entry of amounts) into.push(factor === 1 ? entry : timesOf(entry, factor));
 }
 
 /**
@@ -58,12 +59,12 @@ export function referenceFigureOf(
   for (const { deltaM2 } of condition.applied) dragAreaM2 += deltaM2;
   const afterConditionM2 = condition.applied.length === 0 ? null : dragAreaM2;
   const correlation = correlationStepOf(parts, dragAreaM2);
-  const arisen = [...weighedAmounts(points, weights), ...facilityAmounts(parts, points, startM2, weights)];
-  const beforeCorrelation = [
-    ...scaledBy(arisen, reynoldsDerivative(reynolds)),
-    ...reynoldsAmounts(reynolds, parts, context),
-    ...conditionAmounts(condition),
-  ];
+  const derivative = reynoldsDerivative(reynolds);
+  const beforeCorrelation: Amount[] = [];
+  pushScaled(beforeCorrelation, correctionAmounts(parts, points, weights), derivative);
+  pushScaled(beforeCorrelation, facilityAmounts(parts, points, startM2, weights), derivative);
+  pushScaled(beforeCorrelation, reynoldsAmounts(reynolds, parts, context), 1);
+  pushScaled(beforeCorrelation, conditionAmounts(condition), 1);
   return {
     fullScaleM2: ownSweep === null ? meanM2 : null,
     reynolds,

@@ -11,7 +11,10 @@ export function differingItems(
   reference: ConditionInput | null | undefined,
   condition: ConditionInput | null | undefined,
 ): string[] {
-  return Object.entries(reference ?? {})
-    .filter(([item, value]) => value != null && condition?.[item] !== value)
-    .map(([item]) => item);
+  const differing: string[] = [];
+  for (const item in reference) {
+    const value = reference[item];
+    if (value != null && condition?.[item] !== value) differing.push(item);
+  }
+  return differing;
 }

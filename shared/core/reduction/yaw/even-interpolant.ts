@@ -14,31 +14,54 @@ function endSlope(hEnd: number, hNext: number, end: number, next: number): numbe
   return slope;
 }
 
+const width = (x: readonly number[], i: number): number => (x[i + 1] as number) - (x[i] as number);
+
+const secant = (x: readonly number[], y: readonly number[], i: number): number =>
+  ((y[i + 1] as number) - (y[i] as number)) / width(x, i);
+
+/** Slopes of the interpolant at its nodes, put into `slopes`: a sweep is interpolated again for each of its points. */
+export function evenSlopesInto(slopes: number[], x: readonly number[], y: readonly number[]): void {
+  const last = x.length - 1;
+  slopes[0] = 0;
+  for (let i = 1; i < last; i++) {
+    slopes[i] = innerSlope(width(x, i - 1), width(x, i), secant(x, y, i - 1), secant(x, y, i));
+  }
+  slopes[last] = endSlope(
+    width(x, last - 1),
+    width(x, last - 2),
+    secant(x, y, last - 1),
+    secant(x, y, last - 2),
+  );
+}
+
+/** The interpolant at a position, from nodes and slopes. */
+export function evenValueAt(
+  at: number,
+  x: readonly number[],
+  y: readonly number[],
+  slopes: readonly number[],
+): number {
+  const position = Math.abs(at);
+  const last = x.length - 1;
+  let i = 0;
+  while (i < last - 1 && position > (x[i + 1] as number)) i++;
+  const h = width(x, i);
+  const t = (position - (x[i] as number)) / h;
+  const d0 = slopes[i] as number;
+  const d1 = slopes[i + 1] as number;
+  const m = secant(x, y, i);
+  const c2 = 3 * m - 2 * d0 - d1;
+  const c3 = d0 + d1 - 2 * m;
+  return (y[i] as number) + h * t * (d0 + t * (c2 + t * c3));
+}
+
 /**
  * Shape-preserving cubic Hermite interpolation of an even function given at 0 = x_0 < x_1 < … < x_n, n ≥ 2: the values are
  * mirrored to −x, so the slope at 0 is 0. Slopes after Fritsch and Butland (SIAM J. Sci. Stat. Comput. 5 (1984) 300); the same
  * numbers as SciPy's PchipInterpolator on the mirrored nodes. No extrapolation: beyond x_n the answer is not defined.
  */
 export function evenInterpolant(x: readonly number[], y: readonly number[]): (at: number) => number {
-  const last = x.length - 1;
-  const width = (i: number): number => (x[i + 1] as number) - (x[i] as number);
-  const secant = (i: number): number => ((y[i + 1] as number) - (y[i] as number)) / width(i);
-  const slopes = x.map((_, i) => {
-    if (i === 0) return 0;
-    if (i === last) return endSlope(width(i - 1), width(i - 2), secant(i - 1), secant(i - 2));
-    return innerSlope(width(i - 1), width(i), secant(i - 1), secant(i));
-  });
-  return (at) => {
-    const position = Math.abs(at);
-    let i = 0;
-    while (i < last - 1 && position > (x[i + 1] as number)) i++;
-    const h = width(i);
-    const t = (position - (x[i] as number)) / h;
-    const d0 = slopes[i] as number;
-    const d1 = slopes[i + 1] as number;
-    const m = secant(i);
-    const c2 = 3 * m - 2 * d0 - d1;
-    const c3 = d0 + d1 - 2 * m;
-    return (y[i] as number) + h * t * (d0 + t * (c2 + t * c3));
-  };
+  const slopes: number[] = [];
+  evenSlopesInto(slopes, x, y);
+  return (at) => evenValueAt(at, x, y, slopes);
 }

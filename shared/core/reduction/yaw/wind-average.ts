@@ -1,3 +1,5 @@
+import { evenSlopesInto, evenValueAt } from './even-interpolant';
+
 /** One direction of the wind: its weight M_j (square of the resultant over the vehicle's speed) and yaw angle ψ_j [°]. */
 export interface WindNode {
   readonly weight: number;
@@ -21,4 +23,17 @@ export function windNodes(windRatio: number): WindNode[] {
 /** C̄ = (1/6)·Σ M_j·C(ψ_j). ΣM_j = 6·(1 + r²), so a body indifferent to yaw scores C·(1 + r²). */
 export function windAverage(nodes: readonly WindNode[], at: (yawDeg: number) => number): number {
   return nodes.reduce((sum, node) => sum + node.weight * at(node.yawDeg), 0) / nodes.length;
+}
+
+/** The same of an even sweep given at angles x with values y; `slopes` is room for its slopes. */
+export function windAverageOfSweep(
+  nodes: readonly WindNode[],
+  x: readonly number[],
+  y: readonly number[],
+  slopes: number[],
+): number {
+  evenSlopesInto(slopes, x, y);
+  let sum = 0;
+  for (const { weight, yawDeg } of nodes) sum += weight * evenValueAt(yawDeg, x, y, slopes);
+  return sum / nodes.length;
 }

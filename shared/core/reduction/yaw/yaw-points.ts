@@ -42,33 +42,42 @@ export function combinedDegreesOfFreedom(
 /** Mean of readings taken as independent. */
 function meanOf(points: readonly FoldedPoint[], yawDeg: number): FoldedPoint {
   const n = points.length;
-  const parts = points.map((point) => ({
-    amount: point.uM2 / n,
-    degreesOfFreedom: point.degreesOfFreedom,
-  }));
+  const only = points[0] as FoldedPoint;
+  if (n === 1) return only.yawDeg === yawDeg ? only : { ...only, yawDeg };
+  let sum = 0;
+  let squares = 0;
+  let denominator = 0;
+  for (const { dragAreaM2, uM2, degreesOfFreedom } of points) {
+    const square = (uM2 / n) ** 2;
+    sum += dragAreaM2;
+    squares += square;
+    denominator += (square * square) / degreesOfFreedom;
+  }
   return {
     yawDeg,
-    dragAreaM2: points.reduce((sum, point) => sum + point.dragAreaM2, 0) / n,
-    uM2: Math.hypot(...parts.map((part) => part.amount)),
-    degreesOfFreedom: n === 1 ? (points[0] as FoldedPoint).degreesOfFreedom : combinedDegreesOfFreedom(parts),
+    dragAreaM2: sum / n,
+    uM2: Math.sqrt(squares),
+    degreesOfFreedom: denominator > 0 ? (squares * squares) / denominator : Infinity,
   };
 }
 
-/** Neighbours in a sorted list that are one angle within 1e-9° come together. */
+const sides = (a: FoldedPoint, b: FoldedPoint): number => a.yawDeg - b.yawDeg;
+const angles = (a: FoldedPoint, b: FoldedPoint): number => Math.abs(a.yawDeg) - Math.abs(b.yawDeg);
+
+/** Neighbours in a list in order that are one angle within 1e-9° come together. */
 function groupsByAngle(
   points: readonly FoldedPoint[],
-  angleOf: (point: FoldedPoint) => number,
+  order: (a: FoldedPoint, b: FoldedPoint) => number,
 ): FoldedPoint[][] {
-  const sorted = [...points].sort((a, b) => angleOf(a) - angleOf(b));
   const groups: FoldedPoint[][] = [];
-  let groupAngle = -Infinity;
-  for (const point of sorted) {
-    const angle = angleOf(point);
-    if (angle - groupAngle <= ANGLE_TOLERANCE_DEG) groups.at(-1)?.push(point);
-    else {
-      groups.push([point]);
-      groupAngle = angle;
+  let group: FoldedPoint[] = [];
+  for (const point of points.toSorted(order)) {
+    const [first] = group;
+    if (first === undefined || order(point, first) > ANGLE_TOLERANCE_DEG) {
+      group = [];
+      groups.push(group);
     }
+    group.push(point);
   }
   return groups;
 }
@@ -81,18 +90,18 @@ export function foldSweep(points: readonly YawPoint[]): FoldedSweep {
     uM2: point.uM2,
     degreesOfFreedom: point.degreesOfFreedom ?? Infinity,
   }));
-  const signed = groupsByAngle(readings, (point) => point.yawDeg).map((group) =>
+  const signed = groupsByAngle(readings, sides).map((group) =>
     meanOf(group, (group[0] as FoldedPoint).yawDeg),
   );
   let unpaired = false;
   let unsymmetrical = false;
-  const folded = groupsByAngle(signed, (point) => Math.abs(point.yawDeg)).map((sides) => {
-    const [first, second] = sides;
+  const folded = groupsByAngle(signed, angles).map((group) => {
+    const [first, second] = group;
     if (first !== undefined && second !== undefined) {
       const explained = 2 * Math.hypot(first.uM2, second.uM2);
       if (Math.abs(first.dragAreaM2 - second.dragAreaM2) > explained) unsymmetrical = true;
     } else if (first !== undefined && first.yawDeg !== 0) unpaired = true;
-    return meanOf(sides, Math.abs((first as FoldedPoint).yawDeg));
+    return meanOf(group, Math.abs((first as FoldedPoint).yawDeg));
   });
   return { points: folded, unpairedInUnsymmetricalSweep: unpaired && unsymmetrical };
 }

@@ -1,8 +1,7 @@
 import { AMOUNT_FLOOR_M2, ANGLE_TOLERANCE_DEG, DEFAULT_WIND_SPEED_MS, KMH_PER_MS } from '../../constants';
 import { refuse } from '../../refusal';
-import { evenInterpolant } from './even-interpolant';
-import { windAverage, windNodes, type WindNode } from './wind-average';
-import { combinedDegreesOfFreedom, foldSweep, type FoldedPoint, type YawPoint } from './yaw-points';
+import { windAverageOfSweep, windNodes, type WindNode } from './wind-average';
+import { foldSweep, type FoldedPoint, type YawPoint } from './yaw-points';
 
 /** Input of the operation `yaw`. */
 export interface YawInput {
@@ -33,21 +32,35 @@ const orNull = (degreesOfFreedom: number): number | null =>
 /** Rounding error is no amount: without wind every ratio is 1, whatever a reading is changed by. */
 const withoutRounding = (amount: number): number => (Math.abs(amount) < AMOUNT_FLOOR_M2 ? 0 : amount);
 
-function checkSweep(points: readonly FoldedPoint[], windRatio: number, nodes: readonly WindNode[]): void {
+/** The wind of a programme: it is the same for all of its sweeps. */
+export interface Wind {
+  /** Wind over vehicle speed. */
+  readonly ratio: number;
+  readonly nodes: readonly WindNode[];
+  /** The largest yaw angle [°] that the nodes ask for. */
+  readonly reachDeg: number;
+}
+
+export function windOf({ windSpeedMs, referenceSpeedKmh }: Omit<YawInput, 'points'>): Wind {
+  const ratio = ((windSpeedMs ?? DEFAULT_WIND_SPEED_MS) * KMH_PER_MS) / referenceSpeedKmh;
+  const nodes = windNodes(ratio);
+  return { ratio, nodes, reachDeg: Math.max(...nodes.map((node) => Math.abs(node.yawDeg))) };
+}
+
+function checkSweep(points: readonly FoldedPoint[], { ratio, reachDeg }: Wind): void {
   if (points.length < 3) {
     refuse('yaw-too-few-angles', 'points', 'A wind average needs at least three angles |ψ|, 0 among them.');
   }
   if (points[0]?.yawDeg !== 0) refuse('yaw-no-zero', 'points', 'There is no point at zero yaw.');
-  if (!(windRatio < 1)) {
+  if (!(ratio < 1)) {
     refuse('wind-ratio', 'windSpeedMs', 'The wind must be slower than the vehicle at its reference speed.');
   }
   const reach = points.at(-1)?.yawDeg ?? 0;
-  const needed = Math.max(...nodes.map((node) => Math.abs(node.yawDeg)));
-  if (needed > reach + ANGLE_TOLERANCE_DEG) {
+  if (reachDeg > reach + ANGLE_TOLERANCE_DEG) {
     refuse(
       'yaw-extrapolation',
       'points',
-      `The wind average needs ${needed.toFixed(3)}°, the sweep ends at ${reach}°; nothing is extrapolated.`,
+      `The wind average needs ${reachDeg.toFixed(3)}°, the sweep ends at ${reach}°; nothing is extrapolated.`,
     );
   }
 }
@@ -58,34 +71,45 @@ function checkSweep(points: readonly FoldedPoint[], windRatio: number, nodes: re
  *
  * @throws {Refused} yaw-too-few-angles, yaw-no-zero, wind-ratio (r ≥ 1), yaw-extrapolation; tested in this order
  */
-export function evaluateYaw(input: YawInput): YawOutput {
+export function evaluateYaw(input: YawInput, wind: Wind = windOf(input)): YawOutput {
   const { points: folded, unpairedInUnsymmetricalSweep } = foldSweep(input.points);
-  const windRatio = ((input.windSpeedMs ?? DEFAULT_WIND_SPEED_MS) * KMH_PER_MS) / input.referenceSpeedKmh;
-  const nodes = windNodes(windRatio);
-  checkSweep(folded, windRatio, nodes);
+  const { nodes } = wind;
+  checkSweep(folded, wind);
 
   const angles = folded.map((point) => point.yawDeg);
   const values = folded.map((point) => point.dragAreaM2);
-  const averageOf = (y: readonly number[]): number => windAverage(nodes, evenInterpolant(angles, y));
-  const ratioOf = (y: readonly number[]): number => averageOf(y) / (y[0] as number);
-  const ratioWith = (index: number, change: number): number =>
-    ratioOf(values.map((value, i) => (i === index ? value + change : value)));
-
-  const parts = folded.map((point, i) => ({
-    amount: withoutRounding((ratioWith(i, point.uM2) - ratioWith(i, -point.uM2)) / 2),
-    degreesOfFreedom: point.degreesOfFreedom,
-  }));
-  const [zero, ...others] = parts;
-  const zeroPointAmount = zero?.amount ?? 0;
+  const slopes: number[] = [];
+  const windAveragedDragAreaM2 = windAverageOfSweep(nodes, angles, values, slopes);
+  const changed = [...values];
+  let zeroPointAmount = 0;
+  let squares = 0;
+  let denominator = 0;
+  for (let i = 0; i < folded.length; i++) {
+    const { uM2, degreesOfFreedom } = folded[i] as FoldedPoint;
+    const value = values[i] as number;
+    changed[i] = value + uM2;
+    const above = windAverageOfSweep(nodes, angles, changed, slopes) / (changed[0] as number);
+    changed[i] = value - uM2;
+    const below = windAverageOfSweep(nodes, angles, changed, slopes) / (changed[0] as number);
+    changed[i] = value;
+    const amount = withoutRounding((above - below) / 2);
+    if (i === 0) zeroPointAmount = amount;
+    else {
+      const square = amount * amount;
+      squares += square;
+      denominator += (square * square) / degreesOfFreedom;
+    }
+  }
   return {
     foldedYawDeg: angles,
     foldedDragAreaM2: values,
-    windAveragedDragAreaM2: averageOf(values),
-    yawRatio: ratioOf(values),
+    windAveragedDragAreaM2,
+    yawRatio: windAveragedDragAreaM2 / (values[0] as number),
     zeroPointAmount,
-    zeroPointDegreesOfFreedom: zeroPointAmount === 0 ? null : orNull(zero?.degreesOfFreedom ?? Infinity),
-    otherPointsAmount: Math.hypot(...others.map((part) => part.amount)),
-    otherPointsDegreesOfFreedom: orNull(combinedDegreesOfFreedom(others)),
+    zeroPointDegreesOfFreedom:
+      zeroPointAmount === 0 ? null : orNull((folded[0] as FoldedPoint).degreesOfFreedom),
+    otherPointsAmount: Math.sqrt(squares),
+    otherPointsDegreesOfFreedom: orNull(denominator > 0 ? (squares * squares) / denominator : Infinity),
     cautions: unpairedInUnsymmetricalSweep ? ['unpaired-yaw-in-unsymmetrical-sweep'] : [],
     nodes,
   };

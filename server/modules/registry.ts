@@ -11,6 +11,7 @@ import { importsModule } from './imports';
 import { organisationsModule } from './organisations';
 import { policiesModule } from './policies';
 import { programmesModule } from './programmes';
+import { proposalsModule } from './proposals';
 import { rankingsModule } from './rankings';
 import { resultsModule } from './results';
 import { sessionModule } from './session';
@@ -38,4 +39,5 @@ export const MODULES: readonly ServerModule[] = [
   attachmentsModule,
   importsModule,
   rankingsModule,
+  proposalsModule,
 ];

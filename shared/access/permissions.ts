@@ -29,6 +29,9 @@ export const PERMISSIONS = [
   'results.withdraw',
   'plans.read',
   'plans.edit',
+  'proposals.read',
+  'proposals.make',
+  'proposals.decide',
   'imports.run',
   'ranking-inputs.read',
   'ranking-view.read',
@@ -53,6 +56,8 @@ const MANAGER: readonly Permission[] = [
   'cycles.edit',
   'results.read',
   'plans.edit',
+  'proposals.read',
+  'proposals.make',
   'ranking-inputs.read',
 ];
 
@@ -71,6 +76,7 @@ const BY_ROLE: Readonly<Record<Role, readonly Permission[]>> = {
     'results.judge',
     'results.adopt',
     'results.withdraw',
+    'proposals.decide',
     'imports.run',
   ],
   stylist: READER,

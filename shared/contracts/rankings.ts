@@ -106,9 +106,9 @@ export const rankingContext: z.ZodType<RankingContext, RankingContext> = z.stric
   ),
 });
 
-const viewFigure = figureSchema.omit({ contributions: true });
+export const viewFigure = figureSchema.omit({ contributions: true });
 const viewCoefficient = z.strictObject({ areaM2: number, value: number, expandedUncertainty: number });
-const viewEvidence = z.strictObject({
+export const viewEvidence = z.strictObject({
   resultId: text,
   name: text,
   testDate: text,
@@ -213,7 +213,7 @@ const viewNotice = z.strictObject({
   more: z.int(),
 });
 
-const viewExclusion = z.strictObject({
+export const viewExclusion = z.strictObject({
   resultId: text,
   name: text,
   variantId: text,
@@ -235,6 +235,15 @@ const viewExclusion = z.strictObject({
   ),
 });
 
+export const viewGroup = z.strictObject({
+  variantIds: z.array(text),
+  names: z.array(text),
+  fromRank: z.int(),
+  toRank: z.int(),
+  difference: number,
+  probability: number,
+});
+
 export const rankingView: z.ZodType<RankingView, RankingView> = z.strictObject({
   programmeName: text,
   order: z.enum(ORDERS),
@@ -251,16 +260,7 @@ export const rankingView: z.ZodType<RankingView, RankingView> = z.strictObject({
   ignored: z.array(z.enum(['area', 'air', 'cycle', 'configuration', 'order'])),
   resultCount: z.int(),
   rows: z.array(viewRow),
-  groups: z.array(
-    z.strictObject({
-      variantIds: z.array(text),
-      names: z.array(text),
-      fromRank: z.int(),
-      toRank: z.int(),
-      difference: number,
-      probability: number,
-    }),
-  ),
+  groups: z.array(viewGroup),
   notices: z.array(viewNotice),
   stayedOut: z.array(viewExclusion),
   withoutEvidence: z.array(z.strictObject(named)),

@@ -15,7 +15,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import { CORRELATION_REPLACES, type CorrelationPair } from '#shared/contracts/correlations';
 import type { PolicyValues } from '#shared/contracts/policies';
-import type { JudgementChange } from '#shared/contracts/proposals';
+import type { JudgementChange, ProposalOutcome } from '#shared/contracts/proposals';
 import { BODY_SHAPES } from '#shared/contracts/variants';
 import type { EvaluationOutput, EvaluationParameters } from '#shared/core/ranking/evaluation-output';
 import { attachments } from './attachments';
@@ -185,8 +185,8 @@ export const proposals = pgTable(
     title: text('title').notNull(),
     comment: text('comment').notNull(),
     changes: jsonb('changes').$type<readonly JudgementChange[]>().notNull(),
-    /** The ranking before and after, as the proposer saw it. */
-    outcome: jsonb('outcome').$type<Readonly<Record<string, unknown>>>().notNull(),
+    /** What it came to when it was made, and what it stood on. */
+    outcome: jsonb('outcome').$type<ProposalOutcome>().notNull(),
     createdBy: uuid('created_by').notNull(),
     createdAt: instant('created_at').notNull().defaultNow(),
   },

@@ -1,7 +1,8 @@
 import type { ServerModule } from '../../http/module';
 import { resultsRoutes } from './results.routes';
 
-export { adoptEvidence } from './adoptions.service';
+export { standingAdoptions } from './adoptions.repository';
+export { adoptEvidence, lockVariants } from './adoptions.service';
 export { judgeResults } from './judgements.service';
 export { resultIssues } from './results.policy';
 export { findResults, takeEntrySequence } from './results.repository';

@@ -46,6 +46,7 @@ test('a workbook is brought in by one of its sheets, and what is shown is taken 
   await expect(page.getByRole('button', { name: /refused 1/ })).toBeVisible();
   await expect(page.getByText('2 results with 4 points.')).toBeVisible();
   await page.getByRole('button', { name: 'Store the results' }).click();
+  await page.getByRole('button', { name: 'Store 2 results' }).click();
   await expect(page.getByText('2 results are in the programme.')).toBeVisible();
 
   // Results, ranking and derivation go along as workbooks: numbers as numbers, nothing as a formula.

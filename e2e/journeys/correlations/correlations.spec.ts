@@ -27,7 +27,7 @@ async function chooseFacilities(page: Page, { facilities }: BareProgramme): Prom
   await page.goto('/correlations/new');
   await page.getByLabel('Name', { exact: true }).fill(`${facilities.model} to ${facilities.full}`);
   await page.getByLabel('Facility or simulation set-up').selectOption({ label: facilities.model });
-  await page.getByLabel('Reference facility').selectOption({ label: facilities.full });
+  await page.getByLabel('Reference facility', { exact: true }).selectOption({ label: facilities.full });
 }
 
 async function typePair(page: Page, geometry: string, figures: readonly [string, string, string, string]) {
@@ -68,7 +68,7 @@ test('pairs are proposed, a line is fitted, adopted, and shown in a derivation',
   await expect(page.getByText('Van: Another roof rail was fitted')).toBeVisible();
   await expectAccessible(page);
 
-  await page.getByLabel('Date').fill('2026-06-15');
+  await page.getByLabel('From this date on').fill('2026-06-15');
   await page.getByLabel('Comment on its use').fill('Agreed in the tunnel meeting');
   await page.getByRole('button', { name: 'Adopt version 1' }).click();
   await expect(page.getByText('Version 1 is in use since 2026-06-15').first()).toBeVisible();

@@ -124,7 +124,7 @@ export function correlationOptions(
 
 /** Residuals over the first facility's figure, each with Cook's distance where it stands out. */
 export function residualOptions(
-  { fit, used }: Fitted,
+  { used }: Fitted,
   names: AxisNames,
   format: QuantityFormat,
   inks: Inks,
@@ -132,7 +132,7 @@ export function residualOptions(
 ): EChartsCoreOption {
   const axisLabel = { formatter: (value: number) => format.value(value, 'drag-area', { digits: 4 }) };
   return {
-    grid: { left: 84, right: 40, top: 24, bottom: 56 },
+    grid: { left: 84, right: 56, top: 36, bottom: 56 },
     tooltip: { trigger: 'item' },
     xAxis: {
       type: 'value',
@@ -140,8 +140,6 @@ export function residualOptions(
       name: names.x,
       nameLocation: 'middle',
       nameGap: 34,
-      min: plain(fit.validFromM2),
-      max: plain(fit.validToM2),
       axisLabel: { formatter: (value: number) => format.value(value, 'drag-area', { digits: 3 }) },
     },
     yAxis: {

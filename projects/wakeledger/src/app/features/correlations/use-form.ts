@@ -23,11 +23,11 @@ import { ProblemBanner } from '../../ui/problem-banner/problem-banner';
   template: `
     <form class="wl-form" [formGroup]="form" (ngSubmit)="adopt()" novalidate>
       <fieldset class="wl-group">
-        <legend i18n>From when on</legend>
+        <legend i18n>Its use</legend>
         <wl-field
-          label="Date"
+          label="From this date on"
           i18n-label
-          hint="From this day on every ranking uses it; adopted figures keep what they were made with"
+          hint="Every ranking uses it from then on; adopted figures keep what they were made with"
           i18n-hint
           [error]="error(form.controls.effectiveDate)"
         >

@@ -1,12 +1,21 @@
 import type { LiftAndSide, ReducedResult, ReductionStep } from '../ranking/ranking-output';
 import type { PointInput, ResultInput } from '../ranking/ranking-input';
 import { refuse } from '../refusal';
-import { figureOf, standardUncertainty } from '../uncertainty/budget';
+import { figureOf, type KeyedFigure } from '../uncertainty/budget';
 import { liftAndSideOf } from './lift-and-side';
 import { reducePoints } from './reduce-point';
-import type { ReducedPoint, Reduction, ReductionContext, ResultParts, WindAverage } from './reduction';
+import type {
+  ConditionStep,
+  CorrelationStep,
+  ReducedPoint,
+  Reduction,
+  ReductionContext,
+  ResultParts,
+  ReynoldsStep,
+  WindAverage,
+} from './reduction';
 import { needed, resultPartsOf } from './result-parts';
-import { sameSpeed, windAverageOf } from './result-wind-average';
+import { sameSpeed, windAveragedUncertainty, windAverageOf } from './result-wind-average';
 import { restsOnOwnSweep } from './reynolds-step';
 import { verdictsOf } from './verdicts';
 import { isZeroYaw } from './yaw/yaw-points';
@@ -79,12 +88,68 @@ function outputOf(
     yawRatio: windAverage.yaw?.yawRatio ?? null,
     zeroYaw: figureOf(reference.figure),
     windAveragedDragAreaM2: wind?.dragAreaM2 ?? null,
-    windAveragedStandardUncertaintyM2: wind === null ? null : standardUncertainty(wind.budget),
+    windAveragedStandardUncertaintyM2:
+      windAverage.yaw === null ? null : windAveragedUncertainty(result.id, reference.figure, windAverage.yaw),
     windAveragedRefusal: windAverage.refusal,
     liftAndSide,
     cautions,
     excludedBy,
   };
+}
+
+/** What a reduction goes through on its way. */
+interface Passed {
+  readonly points: readonly ReducedPoint[];
+  readonly zeroYawPoints: ZeroYawPoints;
+  readonly reference: ReferenceFigure;
+}
+
+function passThrough(parts: ResultParts, context: ReductionContext): Passed {
+  const points = reducePoints(pointsOf(parts.result), parts, context);
+  const zeroYawPoints = zeroYawPointsOf(points, parts);
+  return { points, zeroYawPoints, reference: referenceFigureOf(parts, zeroYawPoints, context) };
+}
+
+/**
+ * A reduction as it is kept: figures and verdicts. Of thousands of results few are opened, so the points and the Reynolds step
+ * are not held but gone through again, by the same functions, when somebody looks at them.
+ */
+class KeptReduction implements Reduction {
+  readonly fullScaleM2: number | null;
+  readonly condition: ConditionStep;
+  readonly correlation: CorrelationStep | null;
+  readonly zeroYaw: KeyedFigure;
+  private again: Passed | null = null;
+
+  constructor(
+    readonly parts: ResultParts,
+    private readonly context: ReductionContext,
+    reference: ReferenceFigure,
+    readonly windAverage: WindAverage,
+    readonly output: ReducedResult,
+  ) {
+    this.fullScaleM2 = reference.fullScaleM2;
+    this.condition = reference.condition;
+    this.correlation = reference.correlation;
+    this.zeroYaw = reference.figure;
+  }
+
+  private get passed(): Passed {
+    this.again ??= passThrough(this.parts, this.context);
+    return this.again;
+  }
+
+  get points(): readonly ReducedPoint[] {
+    return this.passed.points;
+  }
+
+  get zeroYawPoints(): readonly ReducedPoint[] {
+    return this.passed.zeroYawPoints;
+  }
+
+  get reynolds(): ReynoldsStep {
+    return this.passed.reference.reynolds;
+  }
 }
 
 /**
@@ -94,22 +159,9 @@ function outputOf(
  */
 export function reduceResult(result: ResultInput, context: ReductionContext): Reduction {
   const parts = resultPartsOf(result, context);
-  const given = pointsOf(result);
-  const points = reducePoints(given, parts, context);
-  const zeroYawPoints = zeroYawPointsOf(points, parts);
-  const reference = referenceFigureOf(parts, zeroYawPoints, context);
+  const { points, zeroYawPoints, reference } = passThrough(parts, context);
   const windAverage = windAverageOf(parts, points, reference.figure, context);
-  const liftAndSide = liftAndSideOf(given, points, parts);
-  return {
-    parts,
-    points,
-    zeroYawPoints,
-    fullScaleM2: reference.fullScaleM2,
-    reynolds: reference.reynolds,
-    condition: reference.condition,
-    correlation: reference.correlation,
-    zeroYaw: reference.figure,
-    windAverage,
-    output: outputOf(parts, points, zeroYawPoints[0], reference, windAverage, liftAndSide, context),
-  };
+  const liftAndSide = liftAndSideOf(pointsOf(result), points, parts);
+  const output = outputOf(parts, points, zeroYawPoints[0], reference, windAverage, liftAndSide, context);
+  return new KeptReduction(parts, context, reference, windAverage, output);
 }

@@ -1,6 +1,6 @@
-import { SPEED_TOLERANCE } from '../constants';
+import { AMOUNT_FLOOR_M2, SPEED_TOLERANCE } from '../constants';
 import { Refused, refuse } from '../refusal';
-import { amount, budgetOf, scaled, type KeyedFigure } from '../uncertainty/budget';
+import { amount, budgetOf, scaled, type Budget, type KeyedFigure } from '../uncertainty/budget';
 import type { ReducedPoint, ReductionContext, ResultParts, WindAverage } from './reduction';
 import { evaluateYaw, type YawOutput } from './yaw/yaw-ratio';
 import { isZeroYaw, type YawPoint } from './yaw/yaw-points';
@@ -35,18 +35,60 @@ function sweepPoints(points: readonly ReducedPoint[]): YawPoint[] {
 
 /**
  * The wind-averaged figure: everything times k_ψ; the zero point's amount joins, with its sign, the repeatability of the
- * zero-yaw figure, because the same reading fixed both; the others form `yaw-ratio:<result>` (method section 7).
+ * zero-yaw figure, because the same reading fixed both; the others form `yaw-ratio:<result>` (method section 7). Of thousands
+ * of results few are looked at by key, so the budget is made when it is asked for.
  */
-function windAveragedFigure(resultId: string, zeroYaw: KeyedFigure, yaw: YawOutput): KeyedFigure {
-  const { dragAreaM2, budget } = zeroYaw;
-  return {
-    dragAreaM2: dragAreaM2 * yaw.yawRatio,
-    budget: budgetOf([
-      ...scaled(budget, yaw.yawRatio),
-      amount(`repeatability:${resultId}`, dragAreaM2 * yaw.zeroPointAmount, yaw.zeroPointDegreesOfFreedom),
-      amount(`yaw-ratio:${resultId}`, dragAreaM2 * yaw.otherPointsAmount, yaw.otherPointsDegreesOfFreedom),
-    ]),
-  };
+class WindAveragedFigure implements KeyedFigure {
+  readonly dragAreaM2: number;
+  private made: Budget | null = null;
+
+  constructor(
+    private readonly resultId: string,
+    private readonly zeroYaw: KeyedFigure,
+    private readonly yaw: YawOutput,
+  ) {
+    this.dragAreaM2 = zeroYaw.dragAreaM2 * yaw.yawRatio;
+  }
+
+  get budget(): Budget {
+    this.made ??= windAveragedBudget(this.resultId, this.zeroYaw, this.yaw);
+    return this.made;
+  }
+}
+
+function windAveragedBudget(resultId: string, { dragAreaM2, budget }: KeyedFigure, yaw: YawOutput): Budget {
+  const amounts = scaled(budget, yaw.yawRatio);
+  const { zeroPointDegreesOfFreedom, otherPointsDegreesOfFreedom } = yaw;
+  amounts.push(
+    amount(`repeatability:${resultId}`, dragAreaM2 * yaw.zeroPointAmount, zeroPointDegreesOfFreedom),
+    amount(`yaw-ratio:${resultId}`, dragAreaM2 * yaw.otherPointsAmount, otherPointsDegreesOfFreedom),
+  );
+  return budgetOf(amounts);
+}
+
+/** u of the wind-averaged figure [m²] without its budget: the same squares, summed in the same order of keys. */
+export function windAveragedUncertainty(
+  resultId: string,
+  { dragAreaM2, budget }: KeyedFigure,
+  yaw: YawOutput,
+): number {
+  const repeatabilityKey = `repeatability:${resultId}`;
+  const zeroPointM2 = dragAreaM2 * yaw.zeroPointAmount;
+  const othersM2 = dragAreaM2 * yaw.otherPointsAmount;
+  let variance = 0;
+  let joined = false;
+  for (const { key, amountM2 } of budget) {
+    let c = amountM2 * yaw.yawRatio;
+    if (!joined && key >= repeatabilityKey) {
+      joined = true;
+      if (key === repeatabilityKey) c += zeroPointM2;
+      else variance += zeroPointM2 * zeroPointM2;
+    }
+    variance += c * c;
+  }
+  if (!joined) variance += zeroPointM2 * zeroPointM2;
+  const u = Math.sqrt(variance + othersM2 * othersM2);
+  return u < AMOUNT_FLOOR_M2 ? 0 : u;
 }
 
 /** The yaw of a result's own sweep applied last to its zero-yaw figure, or the code why there is none. */
@@ -67,7 +109,7 @@ export function windAverageOf(
     if (sweep.some((point) => Number.isNaN(point.uM2))) {
       refuse('missing-input', 'points.s', 'A point of the sweep has no uncertainty of its reading.');
     }
-    return { yaw, figure: windAveragedFigure(parts.result.id, zeroYaw, yaw), refusal: null };
+    return { yaw, figure: new WindAveragedFigure(parts.result.id, zeroYaw, yaw), refusal: null };
   } catch (error) {
     if (error instanceof Refused) return { yaw: null, figure: null, refusal: error.code };
     throw error;

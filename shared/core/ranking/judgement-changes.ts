@@ -210,10 +210,10 @@ export function subjectOf(change: ChangeOfJudgement): string {
  * A list of changes with one more. It takes the place of the one about the same subject; changes of one facility or of
  * the limits are put together.
  */
-export function withChange(
-  changes: readonly ChangeOfJudgement[],
-  change: ChangeOfJudgement,
-): readonly ChangeOfJudgement[] {
+export function withChange<Change extends ChangeOfJudgement>(
+  changes: readonly Change[],
+  change: Change,
+): readonly Change[] {
   const subject = subjectOf(change);
   const before = changes.find((each) => subjectOf(each) === subject);
   if (before === undefined) return [...changes, change];
@@ -221,10 +221,10 @@ export function withChange(
   return changes.map((each) => (each === before ? together : each));
 }
 
-function putTogether(before: ChangeOfJudgement, change: ChangeOfJudgement): ChangeOfJudgement {
+function putTogether<Change extends ChangeOfJudgement>(before: Change, change: Change): Change {
   if (before.kind === 'facility' && change.kind === 'facility') return { ...before, ...change };
   if (before.kind === 'policies' && change.kind === 'policies') {
-    return { kind: 'policies', values: { ...before.values, ...change.values } };
+    return { ...change, values: { ...before.values, ...change.values } };
   }
   return change;
 }

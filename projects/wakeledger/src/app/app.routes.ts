@@ -48,6 +48,11 @@ export const routes: Routes = [
         loadChildren: () => import('./features/results/results.routes').then((file) => file.routes),
       },
       {
+        path: 'programmes/:programmeId/proposals',
+        canActivate: [needs('proposals.read')],
+        loadChildren: () => import('./features/proposals/proposals.routes').then((file) => file.routes),
+      },
+      {
         path: 'programmes/:programmeId/test-plans',
         canActivate: [needs('plans.read')],
         loadChildren: () => import('./features/test-plans/test-plans.routes').then((file) => file.routes),

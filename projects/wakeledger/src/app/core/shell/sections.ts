@@ -14,6 +14,7 @@ export function programmeSections(programmeId: string): readonly Section[] {
     { words: $localize`Ranking`, link: at('ranking'), needs: ['ranking-inputs.read', 'ranking-view.read'] },
     { words: $localize`Variants`, link: at('variants'), needs: ['variants.read'] },
     { words: $localize`Results`, link: at('results'), needs: ['results.read'] },
+    { words: $localize`Proposals`, link: at('proposals'), needs: ['proposals.read'] },
     { words: $localize`Import`, link: at('import'), needs: ['imports.run'] },
     { words: $localize`Test planning`, link: at('test-plans'), needs: ['plans.read'] },
     { words: $localize`Reference`, link: at('settings'), needs: ['programmes.read'] },

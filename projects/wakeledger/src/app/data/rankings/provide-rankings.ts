@@ -8,6 +8,11 @@ import { rankingsFeature } from './rankings.feature';
 export function provideRankings(): EnvironmentProviders {
   return makeEnvironmentProviders([
     provideState(rankingsFeature),
-    provideEffects({ loadSources: effects.loadSources, loadView: effects.loadView }),
+    provideEffects({
+      loadSources: effects.loadSources,
+      loadView: effects.loadView,
+      recallTried: effects.recallTried,
+      keepTried: effects.keepTried,
+    }),
   ]);
 }

@@ -1,4 +1,5 @@
 import { createActionGroup, emptyProps, props } from '@ngrx/store';
+import type { JudgementChange } from '#shared/contracts/proposals';
 import type { ChoiceQuery } from '#shared/core/ranking/ranking-choices';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
 import type { ApiProblem } from '../../core/api/api-problem';
@@ -13,6 +14,14 @@ export const RankingPageActions = createActionGroup({
     Opened: props<{ programmeId: string; mode: RankingMode; address: ChoiceQuery }>(),
     'Address Changed': props<{ address: ChoiceQuery }>(),
     'Retry Pressed': emptyProps(),
+  },
+});
+
+/** Changes of judgement that are tried in this browser; nothing of them is stored on the server. */
+export const TryingActions = createActionGroup({
+  source: 'Trying',
+  events: {
+    Changed: props<{ programmeId: string; changes: readonly JudgementChange[] }>(),
   },
 });
 

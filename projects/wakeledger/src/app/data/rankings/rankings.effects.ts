@@ -2,11 +2,12 @@ import { inject } from '@angular/core';
 import { Actions, createEffect, ofType } from '@ngrx/effects';
 import { concatLatestFrom, mapResponse } from '@ngrx/operators';
 import { Store } from '@ngrx/store';
-import { debounceTime, filter, map, switchMap } from 'rxjs';
+import { debounceTime, filter, map, switchMap, tap } from 'rxjs';
 import { asApiProblem } from '../../core/api/api-problem';
 import { RankingsApi } from './rankings-api';
-import { RankingPageActions, RankingsApiActions } from './rankings.actions';
+import { RankingPageActions, RankingsApiActions, TryingActions } from './rankings.actions';
 import { rankingsFeature } from './rankings.feature';
+import { TriedChanges } from './tried-changes';
 
 /** A control that is moved again within this time asks once [ms]. */
 export const VIEW_DEBOUNCE_MS = 150;
@@ -52,4 +53,24 @@ export const loadView = createEffect(
       ),
     ),
   { functional: true },
+);
+
+/** What was tried in this tab before it was loaded anew is tried again. */
+export const recallTried = createEffect(
+  (actions = inject(Actions), memory = inject(TriedChanges)) =>
+    actions.pipe(
+      ofType(RankingPageActions.opened),
+      filter(({ mode }) => mode === 'computes'),
+      map(({ programmeId }) => TryingActions.changed({ programmeId, changes: memory.of(programmeId) })),
+    ),
+  { functional: true },
+);
+
+export const keepTried = createEffect(
+  (actions = inject(Actions), memory = inject(TriedChanges)) =>
+    actions.pipe(
+      ofType(TryingActions.changed),
+      tap(({ programmeId, changes }) => memory.keep(programmeId, changes)),
+    ),
+  { functional: true, dispatch: false },
 );

@@ -1,9 +1,10 @@
 import { createFeature, createReducer, on } from '@ngrx/store';
+import type { JudgementChange } from '#shared/contracts/proposals';
 import type { ChoiceQuery } from '#shared/core/ranking/ranking-choices';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
 import { type Loading, NOT_ASKED } from '../loading';
 import type { RankingSources } from './rankings-api';
-import { type RankingMode, RankingPageActions, RankingsApiActions } from './rankings.actions';
+import { type RankingMode, RankingPageActions, RankingsApiActions, TryingActions } from './rankings.actions';
 
 export interface RankingsState {
   readonly programmeId: string;
@@ -15,6 +16,8 @@ export interface RankingsState {
   readonly sources: RankingSources | null;
   /** For the others: the server's view of the latest choices. */
   readonly given: RankingView | null;
+  /** Changes of judgement that are tried, in the order in which they came. */
+  readonly tried: readonly JudgementChange[];
 }
 
 const initialState: RankingsState = {
@@ -24,6 +27,7 @@ const initialState: RankingsState = {
   loading: NOT_ASKED,
   sources: null,
   given: null,
+  tried: [],
 };
 
 export const rankingsFeature = createFeature({
@@ -39,6 +43,7 @@ export const rankingsFeature = createFeature({
         loading: { kind: 'loading' },
         sources: same ? state.sources : null,
         given: same ? state.given : null,
+        tried: same ? state.tried : [],
       };
     }),
     on(RankingPageActions.addressChanged, (state, { address }): RankingsState => ({
@@ -51,6 +56,9 @@ export const rankingsFeature = createFeature({
       ...state,
       loading: { kind: 'loading' },
     })),
+    on(TryingActions.changed, (state, { programmeId, changes }): RankingsState =>
+      programmeId === state.programmeId ? { ...state, tried: changes } : state,
+    ),
     on(RankingsApiActions.sourcesLoaded, (state, { programmeId, sources }): RankingsState =>
       programmeId === state.programmeId ? { ...state, sources, loading: { kind: 'ready' } } : state,
     ),

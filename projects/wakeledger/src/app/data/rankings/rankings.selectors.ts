@@ -1,9 +1,11 @@
 import { createSelector } from '@ngrx/store';
+import { applyChanges } from '#shared/core/ranking/judgement-changes';
+import { compareRankings } from '#shared/core/ranking/ranking-comparison';
 import { choicesOfQuery, type ChoiceName, type RankingChoices } from '#shared/core/ranking/ranking-choices';
 import { confidenceOf } from '#shared/core/ranking/rank';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
 import { chosenCycle } from '#shared/core/ranking/chosen-cycle';
-import { assembleView, ordersByEnergy } from '#shared/core/ranking/ranking-view-build';
+import { assembleView, buildRankingView, ordersByEnergy } from '#shared/core/ranking/ranking-view-build';
 import {
   chosenAir,
   configuredVariants,
@@ -26,7 +28,36 @@ import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import type { ReducedSet } from '#shared/core/reduction/reduce';
 import { rankingsFeature } from './rankings.feature';
 
-const { selectAddress, selectSources, selectGiven, selectMode } = rankingsFeature;
+const { selectAddress, selectGiven, selectMode, selectTried } = rankingsFeature;
+
+/** A refusal of the whole ranking is an answer too: the page shows its words. */
+function refusable<T>(compute: () => T): T | Refused {
+  try {
+    return compute();
+  } catch (error) {
+    if (error instanceof Refused) return error;
+    throw error;
+  }
+}
+
+/** Who tries stands beside the reasons that are tried; of whom else could the browser speak? */
+const TRYING = { at: '', by: $localize`tried, not saved` };
+
+const selectChanged = createSelector(rankingsFeature.selectSources, selectTried, (sources, tried) =>
+  sources && tried.length > 0 ? refusable(() => applyChanges(sources, tried, TRYING)) : null,
+);
+
+/** What the ranking is worked out from: as it is stored, or with what is tried. */
+export const selectRankedSources = createSelector(
+  rankingsFeature.selectSources,
+  selectChanged,
+  (stored, changed) => (changed === null || changed instanceof Refused ? stored : changed),
+);
+
+/** Changes that are tried and do nothing, because what they are about has left the programme. */
+export const selectWithoutSubject = createSelector(selectChanged, (changed) =>
+  changed === null || changed instanceof Refused ? [] : changed.withoutSubject,
+);
 
 /** One choice, and no other: by the text in the address, so that it stays the same while others change. */
 function choice<Name extends ChoiceName>(name: Name) {
@@ -44,24 +75,14 @@ const selectBasis = choice('basis');
 const selectConfiguration = choice('configuration');
 const selectConfidence = choice('confidence');
 
-const selectInputs = createSelector(selectSources, (sources) => sources?.inputs ?? null);
-const selectContext = createSelector(selectSources, (sources) => sources?.context ?? null);
+const selectInputs = createSelector(selectRankedSources, (sources) => sources?.inputs ?? null);
+const selectContext = createSelector(selectRankedSources, (sources) => sources?.context ?? null);
 
 const selectNames = createSelector(
   selectInputs,
   selectContext,
   (inputs, context) => inputs && context && namesIn(inputs, context),
 );
-
-/** A refusal of the whole ranking is an answer too: the page shows its words. */
-function refusable<T>(compute: () => T): T | Refused {
-  try {
-    return compute();
-  } catch (error) {
-    if (error instanceof Refused) return error;
-    throw error;
-  }
-}
 
 /** Exported for the tests that hold it to its promise: only inputs and air bring it to work. */
 export const selectReduced = createSelector(
@@ -142,7 +163,7 @@ const selectChoices = createSelector(selectAddress, (address) => choicesOfQuery(
 
 /** The view that this browser works out; null until the inputs are there. */
 const selectComputed = createSelector(
-  selectSources,
+  selectRankedSources,
   selectChoices,
   selectNames,
   selectConfigured,
@@ -181,9 +202,34 @@ export const selectRankingView = createSelector(
 
 /** Why the method refuses to rank at all, for those who compute. */
 export const selectRankingRefusal = createSelector(
+  selectChanged,
   selectReduced,
   selectPicked,
-  (reduced, picked) => [reduced, picked].find((stage) => stage instanceof Refused) ?? null,
+  (changed, reduced, picked) => [changed, reduced, picked].find((stage) => stage instanceof Refused) ?? null,
+);
+
+/** The ranking as it is stored, for those who compute and try something. */
+const selectStoredView = createSelector(
+  createSelector(rankingsFeature.selectSources, selectTried, (sources, tried) =>
+    tried.length > 0 ? sources : null,
+  ),
+  selectChoices,
+  (stored, choices) => stored && refusable(() => buildRankingView(stored.inputs, stored.context, choices)),
+);
+
+/** The ranking before and after what is tried; null where nothing is, or where one of the two is refused. */
+export const selectTriedRankings = createSelector(
+  selectStoredView,
+  selectRankingView,
+  selectRankingRefusal,
+  (before, after, refusal) =>
+    before && !(before instanceof Refused) && after && !refusal ? { before, after } : null,
+);
+
+/** What the changes that are tried do to the ranking. */
+export const selectTriedComparison = createSelector(
+  selectTriedRankings,
+  (rankings) => rankings && compareRankings(rankings.before, rankings.after),
 );
 
 /** What the derivation of a figure is made from, by those who hold the inputs; null for the others. */
@@ -197,7 +243,7 @@ export interface DerivationSources {
 }
 
 export const selectDerivationSources = createSelector(
-  selectSources,
+  selectRankedSources,
   selectReduced,
   selectDrag,
   selectConfigured,

@@ -54,3 +54,8 @@ export function rankingRows(
   ]);
   return [head, ...rows];
 }
+
+/** The same rows, each saying that nobody has decided this: a saved table travels without its page. */
+export function markedAsTried(rows: readonly (readonly CsvCell[])[]): readonly (readonly CsvCell[])[] {
+  return rows.map((row, index) => [...row, index === 0 ? $localize`state` : $localize`tried, not saved`]);
+}

@@ -12,8 +12,9 @@ import { toSignal } from '@angular/core/rxjs-interop';
 import { ActivatedRoute, Router, RouterLink } from '@angular/router';
 import { Store } from '@ngrx/store';
 import { CHOICE_NAMES, type ChoiceName, type ChoiceQuery } from '#shared/core/ranking/ranking-choices';
+import type { RankingView } from '#shared/core/ranking/ranking-view';
 import { lowestInputOfView } from '#shared/core/ranking/ranking-view-lowest';
-import { csvText } from '../../core/export/csv';
+import { type CsvCell, csvText } from '../../core/export/csv';
 import { saveText } from '../../core/export/save-file';
 import { saveWorkbook } from '../../core/export/workbook';
 import { Session } from '../../core/session/session';
@@ -31,9 +32,10 @@ import { OrderComparison } from './order-comparison';
 import { RankingChart } from './ranking-chart';
 import { typedArea } from './typed-area';
 import { RankingControls } from './ranking-controls';
-import { rankingRows } from './ranking-export';
+import { markedAsTried, rankingRows } from './ranking-export';
 import { type FigureAsked, RankingTable } from './ranking-table';
 import { StayedOut } from './stayed-out';
+import { TryingPanel } from './trying/trying-panel';
 import { groupSentence, ignoredSentences, noticeSentence } from './ranking-words';
 
 /** Which variant drags most? The ranking, what it rests on, and what it cannot tell. */
@@ -49,6 +51,7 @@ import { groupSentence, ignoredSentences, noticeSentence } from './ranking-words
     RankingTable,
     RouterLink,
     StayedOut,
+    TryingPanel,
   ],
   templateUrl: './ranking-page.html',
   styleUrl: './ranking-page.scss',
@@ -92,6 +95,13 @@ export class RankingPage {
   protected readonly mayEnter = computed(() => this.session.may('results.enter'));
   protected readonly mayEdit = computed(() => this.session.may('programmes.edit'));
   protected readonly mayAdjust = computed(() => this.session.may('adjustments.edit'));
+  private readonly tried = this.store.selectSignal(rankingsFeature.selectTried);
+  protected readonly mayTry = computed(
+    () => this.session.may('proposals.make') && this.session.may('ranking-inputs.read'),
+  );
+  protected readonly tryingAsked = signal(false);
+  /** What is tried is never out of sight. */
+  protected readonly tryingShown = computed(() => this.tryingAsked() || this.tried().length > 0);
   protected readonly chartShown = signal(false);
   protected readonly ordersShown = signal(false);
   protected readonly areaRefused = signal(false);
@@ -164,14 +174,27 @@ export class RankingPage {
 
   protected saveCsv(): void {
     const view = this.view();
-    if (view) saveText(csvText(rankingRows(view, this.lowest())), `${view.programmeName} ranking.csv`);
+    if (view) saveText(csvText(this.savedRows(view)), `${this.savedName(view)}.csv`);
   }
 
   protected async saveAsWorkbook(): Promise<void> {
     const view = this.view();
     if (!view) return;
+    await saveWorkbook(
+      [{ name: $localize`Ranking`, rows: this.savedRows(view) }],
+      `${this.savedName(view)}.xlsx`,
+    );
+  }
+
+  private savedRows(view: RankingView): readonly (readonly CsvCell[])[] {
     const rows = rankingRows(view, this.lowest());
-    await saveWorkbook([{ name: $localize`Ranking`, rows }], `${view.programmeName} ranking.xlsx`);
+    return this.tried().length === 0 ? rows : markedAsTried(rows);
+  }
+
+  private savedName({ programmeName }: RankingView): string {
+    return this.tried().length === 0
+      ? `${programmeName} ranking`
+      : `${programmeName} ranking, tried, not saved`;
   }
 
   private worded(words: (view: NonNullable<ReturnType<RankingPage['view']>>) => string): string {

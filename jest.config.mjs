@@ -19,7 +19,6 @@ const testTimeout = 30_000;
 
 const shared = {
   displayName: 'shared',
-  testTimeout,
   rootDir: '.',
   testMatch: ['<rootDir>/shared/**/*.spec.ts', '<rootDir>/seeds/**/*.spec.ts'],
   testEnvironment: 'node',
@@ -31,7 +30,6 @@ const server = {
   rootDir: '.',
   testMatch: ['<rootDir>/server/**/*.{spec,test}.ts'],
   testEnvironment: 'node',
-  testTimeout,
   globalSetup: '<rootDir>/server/testing/global-setup.ts',
   globalTeardown: '<rootDir>/server/testing/global-teardown.ts',
   transform: swc,
@@ -40,7 +38,6 @@ const server = {
 const client = {
   ...createCjsPreset({ tsconfig: '<rootDir>/projects/wakeledger/tsconfig.spec.json' }),
   displayName: 'client',
-  testTimeout,
   rootDir: '.',
   testMatch: ['<rootDir>/projects/wakeledger/src/**/*.spec.ts'],
   setupFilesAfterEnv: ['<rootDir>/projects/wakeledger/src/testing/setup-jest.ts'],
@@ -49,4 +46,5 @@ const client = {
   ],
 };
 
-export default { projects: [shared, server, client] };
+// Read here only: a project's own timeout is passed over.
+export default { testTimeout, projects: [shared, server, client] };

@@ -114,39 +114,46 @@ async function loadDecisions(writer: SeedWriter, scenario: Scenario, by: string)
     await writer.audit(at, by, 'result.withdrawn', { kind: 'result', id }, { reason });
   }
   const variantOf = new Map(scenario.results.map(({ name, variant }) => [name, variant]));
-  for (const { result, date, comment } of scenario.adoptions) {
-    const variantId = writer.id('variant', variantOf.get(result) ?? '');
-    const resultId = writer.id('result', result);
-    const at = evening(date, 200 + (orderOf.get(result) ?? 0));
+  const checked = new Set<string>();
+  for (const { results, rule = 'newest', date, comment } of scenario.adoptions) {
+    const [first] = results;
+    const key = results.join(' and ');
+    const variantId = writer.id('variant', variantOf.get(first) ?? '');
+    const at = evening(date, 200 + (orderOf.get(first) ?? 0));
     await writer.insert('adoptions', {
-      id: writer.id('adoption', result),
+      id: writer.id('adoption', key),
       variant_id: variantId,
-      evidence: 'newest',
+      evidence: rule,
       comment,
       adopted_by: by,
       adopted_at: at,
     });
-    await writer.insert('adoption_results', {
-      id: writer.id('adoption result', result),
-      adoption_id: writer.id('adoption', result),
-      variant_id: variantId,
-      result_id: resultId,
-    });
-    // Whoever adopts a result has looked it through.
-    await writer.insert('result_states', {
-      id: writer.id('checked', result),
-      result_id: resultId,
-      state: 'checked',
-      comment,
-      set_by: by,
-      set_at: at,
-    });
+    for (const result of results) {
+      await writer.insert('adoption_results', {
+        id: writer.id('adoption result', key, result),
+        adoption_id: writer.id('adoption', key),
+        variant_id: variantId,
+        result_id: writer.id('result', result),
+      });
+      if (checked.has(result)) continue;
+      checked.add(result);
+      // Whoever adopts a result has looked it through.
+      await writer.insert('result_states', {
+        id: writer.id('checked', result),
+        result_id: writer.id('result', result),
+        state: 'checked',
+        comment,
+        set_by: by,
+        set_at: at,
+      });
+    }
+    const resultIds = results.map((result) => writer.id('result', result));
     await writer.audit(
       at,
       by,
       'result.adopted',
       { kind: 'variant', id: variantId },
-      { resultIds: [resultId], rule: 'newest', comment },
+      { resultIds, rule, comment },
     );
   }
 }

@@ -1,4 +1,5 @@
 import { loadChecks, loadFacilities } from './load-facilities';
+import { loadJudgement } from './load-judgement';
 import { loadResults } from './load-results';
 import type { Scenario } from './scenario/scenario-types';
 import { SeedWriter, type Queryable } from './seed-writer';
@@ -28,6 +29,7 @@ export async function loadScenario(
   await loadVariants(writer, scenario, by, beginning);
   await loadResults(writer, scenario, by);
   await loadChecks(writer, scenario, by);
+  await loadJudgement(writer, scenario, by);
   for (const userId of people.memberIds) {
     await writer.insert('recent_programmes', {
       id: writer.id('recent', userId),
@@ -57,6 +59,7 @@ async function loadProgramme(writer: SeedWriter, scenario: Scenario, by: string,
     common_area: { kind: 'variant', variantId: writer.id('variant', programme.commonAreaOf) },
     confidence: programme.confidence,
     wind_speed_ms: programme.windSpeedMs,
+    friction_line: programme.frictionLine ?? 'on',
     reference_facility_id: writer.id('facility', programme.referenceFacility),
     remark: programme.remark,
     created_at: at,

@@ -62,7 +62,7 @@ describe('the demo scenario in a database', () => {
       expect.objectContaining({
         name: 'Dunlin',
         variantCount: 5,
-        resultCount: 41,
+        resultCount: 46,
         variantsWithoutResult: 0,
         latestResultDate: '2026-11-19',
       }),
@@ -91,8 +91,8 @@ describe('the demo scenario in a database', () => {
       expect(results[index]).toMatchObject({ ...raw, entrySequence: index + 1, enteredBy: 'Ingrid Falk' });
     }
     const adopted = results.filter((result) => result.adopted).map(({ name }) => name);
-    expect(adopted).toEqual(['S-2608-04', 'H-2609-03', 'H-2609-06']);
-    expect((await aldermere.ok(adoptionList, { params })).adoptions).toHaveLength(4);
+    expect(adopted).toEqual(['S-2608-04', 'H-2609-03', 'H-2609-06', 'H-2609-12']);
+    expect((await aldermere.ok(adoptionList, { params })).adoptions).toHaveLength(5);
     expect(results.filter((result) => result.withdrawn !== undefined)).toHaveLength(1);
   });
 

@@ -1,5 +1,5 @@
 import { FIXED_FLOOR, REFERENCE_CONDITION, ROAD } from './conditions';
-import { campaign, straight, sweep, type ScenarioResult } from './scenario-types';
+import { campaign, speeds, straight, sweep, type ScenarioResult } from './scenario-types';
 
 const BELTED = { ...REFERENCE_CONDITION, beltSpeedRatio: 1 };
 
@@ -23,7 +23,7 @@ const FIXED_FLOOR_ENTRY = campaign(
       name: 'B-2603-02',
       testDate: '2026-03-02',
       quotedAreaM2: 2.196,
-      points: straight(0.2537),
+      points: straight(0.269),
     },
     {
       variant: 'crossback',
@@ -65,6 +65,17 @@ const FORTY_PER_CENT_SPRING = campaign(
       quotedAreaM2: 0.3338,
       quotedAreaUM2: 0.0012,
       points: straight(0.2961, 0.0006, 3),
+    },
+    {
+      variant: 'hatch',
+      name: 'S-2604-03',
+      testDate: '2026-04-15',
+      model: 'S2 Hatch',
+      speedKmh: undefined,
+      quotedAreaM2: 0.3469,
+      quotedAreaUM2: 0.0012,
+      points: speeds([100, 0.284], [140, 0.2835], [170, 0.2835], [200, 0.2833], [240, 0.2831]),
+      remark: 'Reynolds sweep: how low may a test of this shape go?',
     },
   ],
 );
@@ -114,6 +125,44 @@ const SECOND_CLAY = campaign(
   ],
 );
 
+/** The second clay as it was simulated: pairs for the correlation with Halmere. */
+const SECOND_CLAY_SIMULATION = campaign(
+  {
+    facility: 'merle',
+    quantity: 'coefficient',
+    scale: 1,
+    quotedAreaScale: 'full',
+    speedKmh: 120,
+    air: { state: 'un-gtr-15' },
+    condition: REFERENCE_CONDITION,
+    session: 'Second clay, June 2026',
+    source: 'Merle report M-26-011',
+  },
+  [
+    {
+      variant: 'liftback',
+      name: 'M-26-011',
+      testDate: '2026-06-24',
+      quotedAreaM2: 2.19,
+      points: straight(0.2568),
+    },
+    {
+      variant: 'hatch',
+      name: 'M-26-012',
+      testDate: '2026-06-25',
+      quotedAreaM2: 2.168,
+      points: straight(0.2817),
+    },
+    {
+      variant: 'tourer',
+      name: 'M-26-014',
+      testDate: '2026-06-26',
+      quotedAreaM2: 2.214,
+      points: straight(0.2941),
+    },
+  ],
+);
+
 const SUMMER = campaign(
   {
     facility: 'merle',
@@ -158,13 +207,13 @@ const FORTY_PER_CENT_SUMMER = campaign(
       testDate: '2026-08-25',
       model: 'S3 Sport',
       points: sweep(
-        [0, 297.8],
-        [2.5, 299.8],
-        [-2.5, 299.7],
-        [5, 303.1],
-        [-5, 303.3],
-        [10, 314],
-        [-10, 314.1],
+        [0, 299.1],
+        [2.5, 301.1],
+        [-2.5, 301],
+        [5, 304.5],
+        [-5, 304.7],
+        [10, 315.4],
+        [-10, 315.5],
       ),
     },
   ],
@@ -231,6 +280,15 @@ const PROTOTYPES = campaign(
         [-10, 0.3157],
       ),
     },
+    {
+      variant: 'liftback',
+      name: 'H-2609-12',
+      testDate: '2026-09-17',
+      installation: 'Second installation',
+      quotedAreaM2: 2.19,
+      points: straight(0.2514, 0.0004, 4),
+      remark: 'The prototype of H-2609-03, taken out and put back.',
+    },
   ],
 );
 
@@ -293,6 +351,7 @@ export const DUNLIN_2026_RESULTS: readonly ScenarioResult[] = [
   ...FIXED_FLOOR_ENTRY,
   ...FORTY_PER_CENT_SPRING,
   ...SECOND_CLAY,
+  ...SECOND_CLAY_SIMULATION,
   ...SUMMER,
   ...FORTY_PER_CENT_SUMMER,
   ...PROTOTYPES,

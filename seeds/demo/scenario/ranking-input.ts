@@ -1,11 +1,10 @@
 import type { RankingInput, ResultInput } from '#shared/core/ranking/ranking-input';
-import type { Scenario } from './scenario-types';
-
-const POLICIES = { frictionLine: 'off', frictionShare: 0, frictionShareU: 0 } as const;
+import { adjustmentsOf, judgedResults, policiesOf, withJudgement } from './judged-input';
+import type { Scenario, ScenarioAdoption } from './scenario-types';
 
 /**
  * The scenario as the method takes it, with the scenario's own keys as ids: what a ranking of the seeded programme must
- * come to, computed without a database. `adopted` gives variants with an adoption their adopted result alone.
+ * come to, computed without a database. `adopted` gives variants with an adoption their adopted results alone.
  */
 export function rankingInputOf(
   scenario: Scenario,
@@ -19,27 +18,27 @@ export function rankingInputOf(
   const standing = scenario.results
     .map((result, index) => ({ result, entrySequence: index + 1 }))
     .filter(({ result }) => !withdrawn.has(result.name));
-  const adopted = adoptedResults(scenario);
-  const results = standing
-    .filter(({ result }) => {
-      const own = adopted.get(result.variant);
-      return evidence === 'newest' || own === undefined || own === result.name;
-    })
-    .map(({ result, entrySequence }): ResultInput => {
-      const { variant, facility, session, installation, model, source: _source, ...raw } = result;
-      const { remark: _remark, attachmentId: _attachmentId, ...rest } = raw;
-      return {
-        ...rest,
-        id: result.name,
-        variantId: variant,
-        facilityId: facility,
-        sessionId: session === undefined ? undefined : `${facility}: ${session}`,
-        installationId: installation,
-        modelId: model,
-        entrySequence,
-      };
-    });
-  return {
+  const adopted = standingAdoptions(scenario);
+  const all = standing.map(({ result, entrySequence }): ResultInput => {
+    const { variant, facility, session, installation, model, source: _source, ...raw } = result;
+    const { remark: _remark, attachmentId: _attachmentId, ...rest } = raw;
+    return {
+      ...rest,
+      id: result.name,
+      variantId: variant,
+      facilityId: facility,
+      sessionId: session === undefined ? undefined : `${facility}: ${session}`,
+      installationId: installation,
+      modelId: model,
+      entrySequence,
+    };
+  });
+  const judged = judgedResults(all, scenario);
+  const results = judged.filter(({ id, variantId }) => {
+    const own = adopted.get(variantId);
+    return evidence === 'newest' || own === undefined || own.results.includes(id);
+  });
+  const input: RankingInput = {
     programme: {
       name: programme.name,
       referenceSpeedKmh: programme.referenceSpeedKmh,
@@ -50,13 +49,14 @@ export function rankingInputOf(
       confidence: programme.confidence,
       referenceFacilityId: referenceFacility,
       windSpeedMs: programme.windSpeedMs,
-      policies: POLICIES,
+      policies: policiesOf(scenario),
     },
     facilities: Object.entries(scenario.facilities).map(([id, fields]) => {
       const { usualCondition: _usual, remark: _remark, checkBody: _body, ...facility } = fields;
       return { ...facility, id };
     }),
-    models: [...new Set(results.flatMap(({ modelId }) => modelId ?? []))].map((id) => ({ id })),
+    adjustments: adjustmentsOf(scenario),
+    models: [...new Set(all.flatMap(({ modelId }) => modelId ?? []))].map((id) => ({ id })),
     variants: Object.entries(scenario.variants).map(([id, { frontalAreas, configurations }]) => ({
       id,
       frontalAreaM2: frontalAreas[0]?.areaM2 ?? 0,
@@ -64,14 +64,16 @@ export function rankingInputOf(
       massKg: configurations[0]?.massKg,
       rollingResistance: configurations[0]?.rollingResistance,
       roadLoadReference: configurations[0]?.roadLoadReference,
+      evidence: (evidence === 'adopted' ? adopted.get(id)?.rule : undefined) ?? 'newest',
     })),
     results,
     request,
   };
+  return withJudgement(input, { ...input, results: judged }, scenario);
 }
 
-/** The last adoption of each variant, by the result's name. */
-function adoptedResults({ adoptions, results }: Scenario): ReadonlyMap<string, string> {
+/** The last adoption of each variant. */
+function standingAdoptions({ adoptions, results }: Scenario): ReadonlyMap<string, ScenarioAdoption> {
   const variantOf = new Map(results.map((result) => [result.name, result.variant]));
-  return new Map(adoptions.map(({ result }) => [variantOf.get(result) ?? '', result]));
+  return new Map(adoptions.map((adoption) => [variantOf.get(adoption.results[0]) ?? '', adoption]));
 }

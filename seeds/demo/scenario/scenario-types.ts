@@ -1,3 +1,6 @@
+import type { AdjustmentFields } from '#shared/contracts/adjustments';
+import type { PolicyValues } from '#shared/contracts/policies';
+import type { TestPlanInputs } from '#shared/contracts/test-plans';
 import type { FacilityFields } from '#shared/contracts/facilities';
 import type { ProgrammeFields } from '#shared/contracts/programmes';
 import type { ResultFields } from '#shared/contracts/results';
@@ -19,6 +22,58 @@ export interface Scenario {
   readonly formerVersions: readonly ScenarioFormerVersion[];
   /** By date. */
   readonly checks: readonly ScenarioCheck[];
+  /** Newest last. */
+  readonly policies: readonly ScenarioPolicies[];
+  /** In the order in which they were added. */
+  readonly adjustments: Readonly<Record<string, ScenarioAdjustment>>;
+  readonly correlations: Readonly<Record<string, ScenarioCorrelation>>;
+  readonly judgements: readonly ScenarioJudgement[];
+  /** Names of results that were looked through. */
+  readonly checked: readonly string[];
+  readonly plans: Readonly<Record<string, ScenarioPlan>>;
+}
+
+export interface ScenarioPolicies {
+  readonly date: string;
+  /** What differs from the values that everybody begins with. */
+  readonly changes: Partial<PolicyValues>;
+  readonly comment: string;
+}
+
+export type ScenarioAdjustment = AdjustmentFields;
+
+export interface ScenarioCorrelation {
+  readonly name: string;
+  readonly facility: string;
+  readonly referenceFacility: string;
+  /** Each adopted when it was made; the newest counts. */
+  readonly versions: readonly {
+    readonly date: string;
+    readonly effectiveDate: string;
+    /** Names of results: of the facility, of the reference facility. */
+    readonly pairs: readonly (readonly [result: string, referenceResult: string])[];
+    readonly comment: string;
+  }[];
+}
+
+/** What is held of a result; without a Reynolds method the usual one. */
+export interface ScenarioJudgement {
+  readonly result: string;
+  readonly date: string;
+  readonly reynolds?: { readonly sweepOf: string };
+  readonly includedReason?: string;
+  readonly setAsideReason?: string;
+  readonly comment?: string;
+}
+
+export interface ScenarioPlan {
+  readonly name: string;
+  readonly variant: string;
+  readonly facility: string;
+  readonly date: string;
+  /** Whether results to come are held against it. */
+  readonly expected: boolean;
+  readonly inputs: TestPlanInputs;
 }
 
 export interface ScenarioProgramme extends Omit<ProgrammeFields, 'commonArea' | 'referenceFacilityId'> {
@@ -39,7 +94,9 @@ export interface ScenarioWithdrawal {
 }
 
 export interface ScenarioAdoption {
-  readonly result: string;
+  /** Names; all of one variant. */
+  readonly results: readonly [string, ...string[]];
+  readonly rule?: 'newest' | 'weighted-mean';
   readonly date: string;
   readonly comment: string;
 }
@@ -62,4 +119,11 @@ export function sweep(
   ...pairs: readonly (readonly [yawDeg: number, value: number])[]
 ): ScenarioResult['points'] {
   return pairs.map(([yawDeg, value]) => ({ yawDeg, value }));
+}
+
+/** A Reynolds sweep at zero yaw, as pairs of speed [km/h] and value. */
+export function speeds(
+  ...pairs: readonly (readonly [speedKmh: number, value: number])[]
+): ScenarioResult['points'] {
+  return pairs.map(([speedKmh, value]) => ({ yawDeg: 0, value, speedKmh }));
 }

@@ -100,5 +100,11 @@ export const VELTHORPE_SCENARIO: Scenario = {
     ],
   ),
   withdrawals: [],
-  adoptions: [{ result: 'A-23', date: '2026-10-15', comment: 'Surface as it goes into release.' }],
+  policies: [],
+  adjustments: {},
+  correlations: {},
+  judgements: [],
+  checked: [],
+  plans: {},
+  adoptions: [{ results: ['A-23'], date: '2026-10-15', comment: 'Surface as it goes into release.' }],
 };

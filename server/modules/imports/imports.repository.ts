@@ -86,7 +86,7 @@ export async function listImports(tx: Tx, programmeId: string): Promise<readonly
   return rows.map(recordOf);
 }
 
-/** The newest other import of the same bytes in the programme, unless it was laid aside. */
+/** The newest other import of the same bytes (of a workbook, of the same sheet) in the programme, unless it was laid aside. */
 export async function sameFile(tx: Tx, record: ImportRecord): Promise<ImportRecord | undefined> {
   const [row] = await select(tx)
     .where(
@@ -94,6 +94,7 @@ export async function sameFile(tx: Tx, record: ImportRecord): Promise<ImportReco
         eq(imports.programmeId, record.programmeId),
         eq(imports.sha256, record.sha256),
         ne(imports.id, record.id),
+        sql`(${imports.summary}->>'sheet') is not distinct from ${record.facts.sheet === undefined ? null : String(record.facts.sheet)}`,
         sql`${imports.state} not in ('cancelled', 'failed')`,
       ),
     )

@@ -132,6 +132,25 @@ describe('a workbook over HTTP', () => {
     expect(await choose(other, 0)).toMatchObject({ sheet: 0, rowCount: 1 });
   });
 
+  it('stores one sheet of a workbook after another, but none of them twice', async () => {
+    await stored(await checked(await upload(several())));
+    const again = await checked(await upload(several()));
+    expect(again.sameFileAs).toMatchObject({ state: 'stored' });
+    expect(
+      await member.refused(importConfirm, {
+        params: where(again),
+        body: { leavingOutRefusedRows: again.counts.refused },
+        ifMatch: again.version,
+      }),
+    ).toMatchObject({ code: expect.stringMatching(/already-exists|unusable-input/) as string });
+
+    const other = await choose(again, 2);
+    expect(other.sameFileAs).toBeUndefined();
+    // The name that both sheets hold is taken by now; the other row is stored.
+    const done = await stored(await checked(other));
+    expect(done).toMatchObject({ state: 'stored', resultCount: 1 });
+  });
+
   it('refuses a sheet without a table and keeps the one that was read', async () => {
     const fresh = await upload(several());
     const problem = await member.refused(importChooseSheet, {

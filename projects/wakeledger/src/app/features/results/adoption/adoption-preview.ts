@@ -5,7 +5,8 @@ import type { RankingContext } from '#shared/core/ranking/ranking-context';
 import type { RankingInput } from '#shared/core/ranking/ranking-input';
 import type { RankedCombination } from '#shared/core/ranking/ranking-output';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
-import { buildRankingView } from '#shared/core/ranking/ranking-view-build';
+import { buildRankingView, reducedForChoices } from '#shared/core/ranking/ranking-view-build';
+import type { ReducedSet } from '#shared/core/reduction/reduce';
 import { Refused, type Refusal } from '#shared/core/refusal';
 
 export interface AdoptionPreview {
@@ -31,22 +32,29 @@ function contextWith(
   };
 }
 
-/** The ranking by drag area on adopted evidence, as everybody sees it. */
-export function adoptedRanking(inputs: RankingInput, context: RankingContext): RankingView {
-  return buildRankingView(inputs, context, DEFAULT_CHOICES);
+/** A ranking with the results at the reference that it is made from: they stay, whatever is adopted. */
+export interface AdoptedRanking {
+  readonly view: RankingView;
+  readonly reduced: ReducedSet;
+}
+
+/** The ranking by drag area on adopted evidence, as everybody sees it. @throws {Refused} what refuses the whole ranking */
+export function adoptedRanking(inputs: RankingInput, context: RankingContext): AdoptedRanking {
+  const reduced = reducedForChoices(inputs, DEFAULT_CHOICES);
+  return { view: buildRankingView(inputs, context, DEFAULT_CHOICES, reduced), reduced };
 }
 
 /** What the ranking would be with the orders carried out, beside what it is; the reason where the method refuses them. */
 export function previewAdoption(
   inputs: RankingInput,
   context: RankingContext,
-  before: RankingView,
+  before: AdoptedRanking,
   orders: readonly Pick<AdoptionOrder, 'variantId' | 'resultIds' | 'rule'>[],
 ): AdoptionPreview | Refusal {
   try {
-    const after = adoptedRanking(inputs, contextWith(context, orders));
+    const after = buildRankingView(inputs, contextWith(context, orders), DEFAULT_CHOICES, before.reduced);
     return {
-      comparison: compareRankings(before, after),
+      comparison: compareRankings(before.view, after),
       combinations: new Map(
         after.rows.flatMap(({ variantId, combination }) =>
           combination === null ? [] : [[variantId, combination] as const],

@@ -150,7 +150,7 @@ export const DEFAULT_CHECK_LIMITS = {
     { bodyShape: 'coupe', dragCoefficient: { from: 0.19, to: 0.42 }, frontalAreaM2: { from: 1.6, to: 2.4 } },
     { bodyShape: 'van', dragCoefficient: { from: 0.25, to: 0.55 }, frontalAreaM2: { from: 2.2, to: 6 } },
     { bodyShape: 'pickup', dragCoefficient: { from: 0.28, to: 0.6 }, frontalAreaM2: { from: 2.2, to: 3.8 } },
-    { bodyShape: 'other', dragCoefficient: { from: 0.1, to: 1.2 }, frontalAreaM2: { from: 0.5, to: 12 } },
+    { bodyShape: 'other', dragCoefficient: { from: 0.1, to: 1.2 }, frontalAreaM2: { from: 0.02, to: 12 } },
   ],
 } as const;
 

@@ -8,6 +8,7 @@ export interface WorkbookLimits {
   /** Of the texts that cells share, which are held in memory. */
   readonly sharedCharacters: number;
   readonly mergedAreas: number;
+  /** Less than a transaction may wait for its next statement (db/pools.ts): the refusal comes in words. */
   readonly milliseconds: number;
 }
 
@@ -16,7 +17,7 @@ export const WORKBOOK_LIMITS: WorkbookLimits = {
   inflatedBytes: 128 * 1024 * 1024,
   sharedCharacters: 32 * 1024 * 1024,
   mergedAreas: 20_000,
-  milliseconds: 60_000,
+  milliseconds: 45_000,
 };
 
 /** Ends work that takes too long; asked after every piece of it. */

@@ -28,6 +28,7 @@ import { EmptyState } from '../../ui/empty-state/empty-state';
 import { ProblemBanner } from '../../ui/problem-banner/problem-banner';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
 import { FigureDerivations } from './derivations/figure-derivations';
+import { PairPanel } from './pair-panel';
 import { OrderComparison } from './order-comparison';
 import { RankingChart } from './ranking-chart';
 import { typedArea } from './typed-area';
@@ -45,6 +46,7 @@ import { groupSentence, ignoredSentences, noticeSentence } from './ranking-words
     Busy,
     EmptyState,
     OrderComparison,
+    PairPanel,
     ProblemBanner,
     RankingChart,
     RankingControls,

@@ -17,11 +17,12 @@ export interface TestDatabase {
   readonly drop: () => Promise<void>;
 }
 
-export async function createTestDatabase(): Promise<TestDatabase> {
+/** `bare`: not migrated at all, for tests of migrations themselves. */
+export async function createTestDatabase(state: 'migrated' | 'bare' = 'migrated'): Promise<TestDatabase> {
   const cluster = readCluster();
   const name = `wakeledger_test_${randomBytes(6).toString('hex')}`;
   await runStatements(cluster.superuserUrl, [
-    `CREATE DATABASE ${name} TEMPLATE ${TEMPLATE} OWNER ${ROLE_NAMES.owner}`,
+    `CREATE DATABASE ${name} ${state === 'bare' ? '' : `TEMPLATE ${TEMPLATE}`} OWNER ${ROLE_NAMES.owner}`,
     ...connectStatements(name),
   ]);
   const superuserUrl = cluster.superuserUrl.replace(/\/postgres$/, `/${name}`);

@@ -5,7 +5,7 @@ import { DEFAULT_POLICIES } from '#shared/core/constants';
 import { facilityFields, programmeFields } from '#shared/testing/domain-fields';
 import type { Tunnel } from '../app/features/test-plans/planned';
 
-/** A programme at 120 km/h in standard air, with L = 4.5 m: Re 9.24e6, and so 600 km/h for one fifth in the same air. */
+/** A programme at 120 km/h in standard air, with L = 4.5 m: Re 1.03e7, and so 600 km/h for one fifth in the same air. */
 export const PLANNED_PROGRAMME: Programme = {
   ...programmeFields({ referenceAir: { state: 'iso-2533-sea-level' } }),
   id: 'dunlin',

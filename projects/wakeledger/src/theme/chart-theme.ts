@@ -22,6 +22,17 @@ export function chartTheme(colours: ColourValues): Record<string, unknown> {
     backgroundColor: 'transparent',
     textStyle: { color: colours.ink, fontFamily: TEXT },
     line: { symbol: 'none', lineStyle: { width: 1.5 }, smooth: false },
+    // Names at lines and points: in ink, readable across what they lie on.
+    scatter: {
+      label: {
+        color: colours.ink,
+        fontFamily: TEXT,
+        fontSize: 12,
+        textBorderWidth: 0,
+        backgroundColor: colours.paper,
+        padding: [0, 2],
+      },
+    },
     categoryAxis: { ...axis, splitLine: { show: false } },
     valueAxis: axis,
     timeAxis: axis,

@@ -81,7 +81,7 @@ export class PlanAnswer {
   });
   protected readonly ways = computed(() => {
     const plan = this.plan();
-    return plan && plan.needed.speedKmh > plan.attainable.speedKmh ? waysOut(plan, this.sweeps()) : undefined;
+    return plan && !plan.reachable ? waysOut(plan, this.sweeps()) : undefined;
   });
   protected readonly model = computed(() => {
     const plan = this.plan();

@@ -53,12 +53,20 @@ interface FigureRow {
       <ng-container i18n
         >Blockage {{ blockage().ratio }} of the section’s {{ blockage().section }}:</ng-container
       >
-      <span class="wl-{{ blockage().look.tone }}"
+      &ngsp;<span class="wl-{{ blockage().look.tone }}"
         ><span aria-hidden="true">{{ blockage().look.sign }} </span>{{ blockage().look.word }}</span
       >
     </p>
   `,
   styles: `
+    :host {
+      display: block;
+      min-width: 0;
+    }
+    thead .wl-figure {
+      max-width: 11em;
+      white-space: normal;
+    }
     .look {
       display: block;
       font-size: var(--wl-small);
@@ -80,12 +88,12 @@ export class PlanFigures {
   protected readonly columns = computed((): readonly { readonly head: string; readonly flow: FlowAt }[] => {
     const { needed, attainable, settled } = this.plan();
     return [
-      { head: $localize`to reach what is wanted`, flow: needed },
+      { head: $localize`needed`, flow: needed },
       {
-        head: $localize`at the highest speed allowed (${CEILING_WORDS[attainable.ceiling]}:LIMIT:)`,
+        head: $localize`highest allowed: ${CEILING_WORDS[attainable.ceiling]}:LIMIT:`,
         flow: attainable,
       },
-      ...(settled ? [{ head: $localize`at the speed settled on`, flow: settled }] : []),
+      ...(settled ? [{ head: $localize`settled on`, flow: settled }] : []),
     ];
   });
 

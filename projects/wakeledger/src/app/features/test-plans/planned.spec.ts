@@ -74,6 +74,24 @@ describe('a planned test', () => {
 });
 
 describe('the ways out of a refused test', () => {
+  it('name a smaller model where it fills too much of the section', () => {
+    const plan = planOf({ scale: 0.7 });
+    expect(plan.reachable).toBe(false);
+    const [smaller, ...others] = waysOut(plan, []);
+    // β = s²·2.27/8.2 = 0.10 at s = 0.601.
+    expect(smaller).toMatchObject({ kind: 'smaller', limit: 0.1, trial: { scale: 0.601 } });
+    expect(others).toEqual([]);
+    expect(planOf({ scale: 0.601 }).reachable).toBe(true);
+  });
+
+  it('raise neither pressure nor cold where only the force balance holds the speed down', () => {
+    const plan = planOf({ scale: 0.5, maximumForceN: 100 });
+    expect(plan.attainable.ceiling).toBe('balance');
+    expect(waysOut(plan, []).map(({ kind }) => kind)).toEqual(['sweep', 'turbulence']);
+    const tried = planOf({ scale: 0.5, maximumForceN: 100, ...way(plan, 'sweep').trial });
+    expect(tried.reachable).toBe(true);
+  });
+
   it('each bring it within the Mach limit when they are tried', () => {
     const plan = planOf();
     for (const kind of ['scale', 'pressure'] as const) {

@@ -19,6 +19,8 @@ const GAS_WORDS = { air: $localize`air`, nitrogen: $localize`nitrogen` } as cons
 /** One way out in words, with its own number. */
 export function wayInWords(way: WayOut, format: QuantityFormat): WayInWords {
   switch (way.kind) {
+    case 'smaller':
+      return smallerWords(way, format);
     case 'scale':
       return scaleWords(way, format);
     case 'pressure':
@@ -34,6 +36,19 @@ export function wayInWords(way: WayOut, format: QuantityFormat): WayInWords {
 
 const scaleText = (scale: number, format: QuantityFormat): string =>
   format.value(scale, 'number', { digits: 3 });
+
+function smallerWords({ scale, limit }: Of<'smaller'>, format: QuantityFormat): WayInWords {
+  const text = scaleText(scale, format);
+  const percent = format.text(100 * limit, 'percent', { digits: 0 });
+  return {
+    title: $localize`A smaller model: scale ${text}:SCALE:`,
+    sentences: [
+      $localize`Then it fills ${percent}:LIMIT: of the section, the most that is accepted. It needs a higher speed for the same Reynolds number. A larger facility does the same without that.`,
+    ],
+    validity: undefined,
+    tryIt: $localize`Try scale ${text}:SCALE:`,
+  };
+}
 
 function scaleWords({ scale, blockage, trial }: Of<'scale'>, format: QuantityFormat): WayInWords {
   if (scale === null || blockage === null) {

@@ -23,6 +23,13 @@ export interface Trial {
 
 export type WayOut =
   | {
+      readonly kind: 'smaller';
+      /** The largest scale that the blockage limit of the section allows. */
+      readonly scale: number;
+      readonly limit: number;
+      readonly trial: Trial;
+    }
+  | {
       readonly kind: 'scale';
       /** Null: the model would have to be larger than the vehicle. */
       readonly scale: number | null;
@@ -75,10 +82,26 @@ const floorTo = (value: number, step: number): number =>
   Number((Math.floor(value / step + 1e-9) * step).toPrecision(12));
 
 /**
- * Every way by itself, for a test that does not reach what it has to. The limit is what the Mach number and the facility's
- * speed allow; a colder gas keeps the Mach number, so that its speed stays within that of the facility (method section 15).
+ * Every way by itself, for a test that does not reach what it has to, or whose model fills too much of the section. The limit is
+ * what the Mach number and the facility's speed allow; a colder gas keeps the Mach number, so that its speed stays within
+ * that of the facility (method section 15).
  */
 export function waysOut(plan: Planned, sweeps: readonly SweptResult[]): readonly WayOut[] {
+  return [
+    ...smallerWays(plan),
+    ...(plan.needed.speedKmh > plan.attainable.speedKmh ? fasterWays(plan, sweeps) : []),
+  ];
+}
+
+function smallerWays({ output, limits, setting }: Planned): readonly WayOut[] {
+  if (output.blockageVerdict !== 'excluded') return [];
+  const { blockageLimits, facility } = setting;
+  const scale = floorTo(limits.blockageExcludedScale, 0.001);
+  const limit = facility.kind === 'open-jet' ? blockageLimits.openJetLimit : blockageLimits.blockageExcluded;
+  return scale > 0 ? [{ kind: 'smaller', scale, limit, trial: { scale } }] : [];
+}
+
+function fasterWays(plan: Planned, sweeps: readonly SweptResult[]): readonly WayOut[] {
   const { setting, needed, inputs } = plan;
   const facilityMach =
     setting.facility.maximumSpeedMs === null
@@ -86,6 +109,8 @@ export function waysOut(plan: Planned, sweeps: readonly SweptResult[]): readonly
       : setting.facility.maximumSpeedMs / setting.speedOfSoundMs;
   const machLimit = Math.min(setting.machLimit, facilityMach);
   const bounded = { ...setting, machLimit };
+  // Where only the balance holds the speed down, a colder gas or more pressure would raise the force further.
+  if (needed.mach <= machLimit) return [sweepWay(plan, sweeps, plan.attainable.mach), turbulenceWay(plan)];
   const ways = waysOutOf(bounded, needed.mach, inputs.coolingGas ?? 'air');
   return [
     scaleWay(plan, ways.scaleAtMachLimit),

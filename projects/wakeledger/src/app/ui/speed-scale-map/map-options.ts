@@ -34,7 +34,7 @@ export function mapHeightKmh({ limits, neededKmh, working }: SpeedScaleModel): n
     1.1 * working.speedKmh,
     1.1 * Math.min(neededKmh, 2.2 * limitKmh),
   );
-  return Math.ceil(highest / 50) * 50;
+  return Math.ceil(highest / 100) * 100;
 }
 
 /** Speed against scale with every limit drawn in and named at its line, the region that keeps them all shaded. */
@@ -128,9 +128,16 @@ export function mapOptions(model: SpeedScaleModel, format: QuantityFormat): ECha
         'wanted',
         { scale: working.scale, speedKmh: neededKmh * factor },
         'emptyDiamond',
+        'left',
         $localize`needed`,
       ),
-      point('here', { scale: working.scale, speedKmh: working.speedKmh * factor }, 'circle', $localize`here`),
+      point(
+        'here',
+        { scale: working.scale, speedKmh: working.speedKmh * factor },
+        'circle',
+        'right',
+        $localize`here`,
+      ),
     ],
   };
 }
@@ -149,17 +156,19 @@ function line(ink: Ink, at: Curve, type: string, kmh: (speedMs: number) => numbe
 /** A name at the place where its curve, which falls with the scale, passes a height; kept inside the map. */
 function named(ink: Ink, at: Curve, words: string, height: number, kmh: (speedMs: number) => number) {
   const scale = Math.min(0.72, Math.max(SMALLEST_SCALE, kmh(at(1)) / height));
-  return label(ink, [scale, Math.min(height, kmh(at(scale)))], words, 'right');
+  return label(ink, [scale, Math.min(height, kmh(at(scale)))], words, { position: 'right', distance: 6 });
 }
 
-function label(ink: Ink, at: Pair, words: string, position: string) {
+/** A name by itself, above all lines. */
+function label(ink: Ink, at: Pair, words: string, placing: Readonly<Record<string, unknown>>) {
   return {
     type: 'scatter',
     name: INK_NAMES[ink],
     silent: true,
+    z: 4,
     symbolSize: 1,
     data: [at],
-    label: { show: true, formatter: words, position, distance: 6 },
+    label: { show: true, formatter: words, ...placing },
   };
 }
 
@@ -177,22 +186,8 @@ function level(ink: Ink, speedMs: number, words: string, type: string, kmh: (spe
         [0, speed],
         [1, speed],
       ],
-      endLabel: { show: false },
     },
-    {
-      type: 'scatter',
-      name: INK_NAMES[ink],
-      silent: true,
-      symbolSize: 1,
-      data: [[1, speed]],
-      label: {
-        show: true,
-        formatter: words,
-        position: 'insideBottomRight',
-        align: 'right',
-        offset: [-4, -2],
-      },
-    },
+    label(ink, [1, speed], words, { position: 'top', align: 'right', distance: 1 }),
   ];
 }
 
@@ -211,21 +206,13 @@ function upright(ink: Ink, scale: number, words: string, type: string, height: n
         [scale, height],
       ],
     },
-    {
-      type: 'scatter',
-      name: INK_NAMES[ink],
-      silent: true,
-      symbolSize: 1,
-      data: [[scale, 0]],
-      label: {
-        show: true,
-        formatter: words,
-        rotate: 90,
-        align: 'left',
-        verticalAlign: 'bottom',
-        offset: [4, -4],
-      },
-    },
+    label(ink, [scale, 0], words, {
+      position: 'inside',
+      rotate: 90,
+      align: 'left',
+      verticalAlign: 'bottom',
+      offset: [-3, -5],
+    }),
   ];
 }
 
@@ -243,7 +230,13 @@ function region(slices: readonly (readonly [number, number, number])[]) {
   ];
 }
 
-function point(ink: Ink, { scale, speedKmh }: MapPoint, symbol: string, words: string) {
+function point(
+  ink: Ink,
+  { scale, speedKmh }: MapPoint,
+  symbol: string,
+  position: 'left' | 'right',
+  words: string,
+) {
   return {
     type: 'scatter',
     name: INK_NAMES[ink],
@@ -252,6 +245,6 @@ function point(ink: Ink, { scale, speedKmh }: MapPoint, symbol: string, words: s
     symbol,
     symbolSize: 13,
     data: [[scale, speedKmh]],
-    label: { show: true, formatter: words, position: 'left', distance: 4, fontWeight: 600 },
+    label: { show: true, formatter: words, position, distance: 5, fontWeight: 600 },
   };
 }

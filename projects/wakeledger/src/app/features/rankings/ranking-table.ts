@@ -13,7 +13,7 @@ import { StatementLine } from '../../ui/statement-line/statement-line';
 import { bracketsOf } from './brackets';
 import type { FigureKind } from './figure-kind';
 import { GridFocus } from './grid-focus';
-import { evidenceWords } from './evidence-line';
+import { evidenceWords, scatterWords } from './evidence-line';
 import { cautionWords } from './method-words';
 import { probabilityWords } from './ranking-words';
 import { RowMovement } from './row-movement';
@@ -91,6 +91,6 @@ export class RankingTable {
   }
 
   protected cautionsOf(row: ViewRow): readonly string[] {
-    return row.cautions.map(cautionWords);
+    return [...row.cautions.map(cautionWords), ...scatterWords(row, this.format)];
   }
 }

@@ -29,6 +29,8 @@ export function chartTheme(colours: ColourValues): Record<string, unknown> {
         fontFamily: TEXT,
         fontSize: 12,
         textBorderWidth: 0,
+        // Else a name is as faint as its point.
+        opacity: 1,
         backgroundColor: colours.paper,
         padding: [0, 2],
       },

@@ -6,7 +6,7 @@ import type { JudgementChange } from '#shared/contracts/proposals';
 import { withChange } from '#shared/core/ranking/judgement-changes';
 import type { ChoiceQuery } from '#shared/core/ranking/ranking-choices';
 import type { RankingView } from '#shared/core/ranking/ranking-view';
-import { ApiProblem, asApiProblem } from '../../../core/api/api-problem';
+import { type ApiProblem, asApiProblem } from '../../../core/api/api-problem';
 import { newCommandKey } from '../../../core/api/command-key';
 import { ProposalsApi, type NewProposal } from '../../../data/proposals/proposals-api';
 import { TryingActions } from '../../../data/rankings/rankings.actions';

@@ -20,7 +20,7 @@ const DRAFT: PairDraft = {
 
 describe('the table of pairs', () => {
   const shown = (draft: PairDraft, strict = false) => {
-    const decided = jest.fn<void, [{ key: string; decision: PairDecision }]>();
+    const decided = jest.fn((_told: { readonly key: string; readonly decision: PairDecision }) => undefined);
     const fixture = TestBed.createComponent(PairTable, {
       bindings: [
         inputBinding('drafts', signal([draft])),

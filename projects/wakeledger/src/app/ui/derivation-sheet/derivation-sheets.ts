@@ -31,10 +31,11 @@ export function derivationSheets(derivation: Derivation): readonly SheetToWrite[
       name: $localize`Uncertainty`,
       rows: [
         BUDGET_HEAD,
-        ...budget.map(({ label, share, u }): readonly CsvCell[] => [
+        ...budget.map(({ label, share, u, freedom }): readonly CsvCell[] => [
           label,
           share,
           ...(u ? numberAndUnit(u) : []),
+          ...(u && freedom ? [freedom] : []),
         ]),
         ...(budgetNote ? [[budgetNote]] : []),
       ],
@@ -61,6 +62,7 @@ const BUDGET_HEAD = [
   $localize`Share of the variance, 0 to 1`,
   $localize`Standard uncertainty`,
   $localize`Unit`,
+  $localize`Degrees of freedom`,
 ];
 
 const NUMBER = String.raw`-?\d+(?:\.\d+)?(?:e[+-]?\d+)?`;

@@ -29,6 +29,8 @@ export interface BudgetShare {
   readonly share: number;
   /** Standard uncertainty with its unit. */
   readonly u?: Worded;
+  /** Degrees of freedom ν behind it; `∞` where nothing is known against it. */
+  readonly freedom?: string;
 }
 
 /** Everything the sheet shows of one figure. */

@@ -30,10 +30,16 @@ export function derivationFromTrace(trace: Trace, summary: string, format: Quant
     },
     summary,
     steps: trace.steps.map((step) => stepFromTrace(step, format)),
-    budget: trace.budget.map(({ label, shareOfVariance, amount }) => ({
+    budget: trace.budget.map(({ label, shareOfVariance, amount, degreesOfFreedom }) => ({
       label,
       share: shareOfVariance,
       u: wordedUncertainty(amount, trace.unit, format),
+      freedom: freedomWords(degreesOfFreedom, format),
     })),
   };
+}
+
+/** Degrees of freedom as they stand in a budget. */
+export function freedomWords(degreesOfFreedom: number | null, format: QuantityFormat): string {
+  return degreesOfFreedom === null ? '∞' : format.value(degreesOfFreedom, 'number', { digits: 0 });
 }

@@ -2,9 +2,14 @@ import { TestBed } from '@angular/core/testing';
 import { provideEffects } from '@ngrx/effects';
 import { Store, provideStore } from '@ngrx/store';
 import { NEVER } from 'rxjs';
+import type { JudgementChange } from '#shared/contracts/proposals';
 import { fiveVariants, type RankingScenario } from '#shared/testing/ranking-scenario';
 import { provideRankings } from '../../../data/rankings/provide-rankings';
-import { RankingPageActions, RankingsApiActions } from '../../../data/rankings/rankings.actions';
+import {
+  RankingPageActions,
+  RankingsApiActions,
+  TryingActions,
+} from '../../../data/rankings/rankings.actions';
 import { RankingsApi } from '../../../data/rankings/rankings-api';
 import { selectRankingView } from '../../../data/rankings/rankings.selectors';
 import { FigureDerivations } from './figure-derivations';
@@ -33,6 +38,7 @@ function derive(
   kind: Parameters<FigureDerivations['of']>[0],
   basis = 'zero-yaw',
   sources: RankingScenario = fiveVariants(),
+  changes: readonly JudgementChange[] = [],
 ) {
   TestBed.configureTestingModule({
     providers: [
@@ -46,6 +52,7 @@ function derive(
   const address = { cycle: 'short', basis };
   store.dispatch(RankingPageActions.opened({ programmeId: 'p', mode: 'computes', address }));
   store.dispatch(RankingsApiActions.sourcesLoaded({ programmeId: 'p', sources }));
+  store.dispatch(TryingActions.changed({ programmeId: 'p', changes }));
   const view = store.selectSignal(selectRankingView)();
   const row = view?.rows.find(({ variantId }) => variantId === 'sport');
   if (!view || !row) throw new Error('There is no ranking.');
@@ -61,6 +68,17 @@ describe('the derivation of a figure, for those who hold the inputs', () => {
     );
     const full = derivation.steps.find(({ method }) => method === 'full-scale-drag-area@1');
     expect(Number.parseFloat(full?.result.plain ?? '')).toBeCloseTo(row.figure.dragAreaM2, 6);
+  });
+
+  it('says so where something is tried on the ranking, and carries the budget with degrees of freedom', () => {
+    const change = { kind: 'facility', facilityId: 'belt', biasURelative: 0.02 } as const;
+    const { derivation } = derive('drag-area', 'zero-yaw', fiveVariants(), [change]);
+    expect(derivation.summary).toMatch(/^Tried, not saved\. Sport/);
+    TestBed.resetTestingModule();
+    expect(derive('drag-area').derivation.summary).toMatch(/^Sport/);
+    const bias = derivation.budget.find(({ label }) => label.startsWith('facility bias'));
+    expect(bias).toMatchObject({ freedom: '∞' });
+    expect(bias?.share).toBeGreaterThan(0.5);
   });
 
   it('ends in the wind average on that basis, but energy keeps to zero yaw', () => {

@@ -1,6 +1,7 @@
 import { Injectable, inject } from '@angular/core';
 import { Store } from '@ngrx/store';
 import type { RankingView, ViewRow } from '#shared/core/ranking/ranking-view';
+import { rankingsFeature } from '../../../data/rankings/rankings.feature';
 import { type DerivationSources, selectDerivationSources } from '../../../data/rankings/rankings.selectors';
 import type { Derivation, DerivationStep } from '../../../ui/derivation-sheet/derivation';
 import { stepFromTrace } from '../../../ui/derivation-sheet/from-trace';
@@ -15,8 +16,17 @@ import { dragTrace, energyTrace } from './traces';
 export class FigureDerivations {
   private readonly format = inject(QuantityFormat);
   private readonly sources = inject(Store).selectSignal(selectDerivationSources);
+  private readonly tried = inject(Store).selectSignal(rankingsFeature.selectTried);
 
+  /** Of a ranking with something tried on it, each says so: what is copied or saved travels without its page. */
   of(kind: FigureKind, row: ViewRow, view: RankingView): Derivation {
+    const derivation = this.derived(kind, row, view);
+    return this.tried().length === 0
+      ? derivation
+      : { ...derivation, summary: $localize`Tried, not saved. ${derivation.summary}:SUMMARY:` };
+  }
+
+  private derived(kind: FigureKind, row: ViewRow, view: RankingView): Derivation {
     const sources = this.sources();
     const steps = sources && this.tracedSteps(kind, row, view, sources);
     if (!steps) return outlineDerivation(kind, row, view, this.format);

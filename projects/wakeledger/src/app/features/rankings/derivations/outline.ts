@@ -1,6 +1,7 @@
 import { plain } from '#shared/core/derivation/in-values';
 import type { RankingView, ViewContribution, ViewRow, ViewStep } from '#shared/core/ranking/ranking-view';
 import type { BudgetShare, Derivation, DerivationStep } from '../../../ui/derivation-sheet/derivation';
+import { freedomWords } from '../../../ui/derivation-sheet/from-trace';
 import { plainFigure, wordedUncertainty } from '../../../ui/derivation-sheet/worded';
 import type { QuantityFormat } from '../../../ui/quantity/quantity-format';
 import { evidenceWords } from '../evidence-line';
@@ -16,6 +17,7 @@ function budgetShares(
     label: contributionWords(each),
     share: each.shareOfVariance,
     u: wordedUncertainty(each.amountM2, 'm²', format),
+    freedom: freedomWords(each.degreesOfFreedom, format),
   }));
 }
 

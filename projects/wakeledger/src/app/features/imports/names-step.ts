@@ -17,7 +17,7 @@ import { BODY_SHAPES, type Variant } from '#shared/contracts/variants';
 import { asApiProblem } from '../../core/api/api-problem';
 import { FacilitiesApi } from '../../data/facilities/facilities-api';
 import { VariantsApi } from '../../data/variants/variants-api';
-import { BODY_SHAPE_WORDS } from './body-shape-words';
+import { BODY_SHAPE_NAMES } from '../../ui/words/body-shape-words';
 import { ImportInView } from './import-in-view';
 import {
   facilityDrafts,
@@ -49,7 +49,7 @@ export class NamesStep {
   protected readonly facilities = signal<readonly Facility[]>([]);
   protected readonly drafts = linkedSignal(() => variantDrafts(this.detail()));
   protected readonly places = linkedSignal(() => facilityDrafts(this.detail()));
-  protected readonly shapes = BODY_SHAPES.map((shape) => ({ shape, words: BODY_SHAPE_WORDS[shape] }));
+  protected readonly shapes = BODY_SHAPES.map((shape) => ({ shape, words: BODY_SHAPE_NAMES[shape] }));
   /** Set once the person tried to go on: only then are gaps named. */
   protected readonly tried = signal(false);
   protected readonly trouble = troubleOf;

@@ -1,7 +1,8 @@
 import type { Configuration, VariantFields } from '#shared/contracts/variants';
 import type { ComparedField } from '../../core/editing/conflict-rows';
 import type { QuantityFormat } from '../../ui/quantity/quantity-format';
-import { AREA_METHOD_WORDS, BODY_SHAPE_WORDS, configurationWords } from './variant-words';
+import { BODY_SHAPE_NAMES } from '../../ui/words/body-shape-words';
+import { AREA_METHOD_WORDS, configurationWords } from './variant-words';
 
 /** A variant's fields as they read beside those of a colleague's version, in the order of the form. */
 export function variantComparison(format: QuantityFormat): readonly ComparedField<VariantFields>[] {
@@ -9,7 +10,7 @@ export function variantComparison(format: QuantityFormat): readonly ComparedFiel
     value === undefined ? '' : format.text(value, 'length');
   return [
     { label: $localize`Name`, read: ({ name }) => name },
-    { label: $localize`Body`, read: ({ bodyShape }) => BODY_SHAPE_WORDS[bodyShape] },
+    { label: $localize`Body`, read: ({ bodyShape }) => BODY_SHAPE_NAMES[bodyShape] },
     { label: $localize`Description`, read: ({ description }) => description ?? '' },
     { label: $localize`Length`, read: ({ lengthMm }) => length(lengthMm) },
     { label: $localize`Width`, read: ({ widthMm }) => length(widthMm) },

@@ -34,13 +34,14 @@ import { Field, WlInput } from '../../ui/field/field';
 import { NumberField } from '../../ui/field/number-field';
 import { ProblemBanner } from '../../ui/problem-banner/problem-banner';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
+import { BODY_SHAPE_NAMES } from '../../ui/words/body-shape-words';
 import { configurationForm } from './configuration-form';
 import { ConfigurationFields } from './configuration-fields';
 import { confirmRetirement } from './confirm-retirement';
 import { variantComparison } from './variant-comparison';
 import { clearVariant, frontalAreaForm, setVariant, variantFieldsOf, variantForm } from './variant-form';
 import { VariantPicture } from './variant-picture';
-import { AREA_METHOD_WORDS, BODY_SHAPE_WORDS, standingArea } from './variant-words';
+import { AREA_METHOD_WORDS, standingArea } from './variant-words';
 
 /** One variant: its dimensions, the history of its frontal area, its configurations, its picture. */
 @Component({
@@ -94,7 +95,7 @@ export class VariantFormPage implements HoldsChanges {
     return id !== undefined && this.loading().kind === 'ready' && !this.known().has(id);
   });
 
-  protected readonly bodyShapes = BODY_SHAPES.map((value) => ({ value, words: BODY_SHAPE_WORDS[value] }));
+  protected readonly bodyShapes = BODY_SHAPES.map((value) => ({ value, words: BODY_SHAPE_NAMES[value] }));
   protected readonly areaMethods = Object.entries(AREA_METHOD_WORDS).map(([value, words]) => ({
     value,
     words,

@@ -24,9 +24,10 @@ import { EmptyState } from '../../ui/empty-state/empty-state';
 import { Picture } from '../../ui/picture/picture';
 import { ProblemBanner } from '../../ui/problem-banner/problem-banner';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
+import { BODY_SHAPE_NAMES } from '../../ui/words/body-shape-words';
 import { confirmRetirement } from './confirm-retirement';
 import { bodyDimensions } from './body-dimensions';
-import { AREA_METHOD_WORDS, BODY_SHAPE_WORDS, configurationWords, standingArea } from './variant-words';
+import { AREA_METHOD_WORDS, configurationWords, standingArea } from './variant-words';
 
 /** Which variants does this programme compare? Each with its picture, dimensions, frontal area and configurations. */
 @Component({
@@ -116,7 +117,7 @@ export class VariantListPage {
       variant,
       retire: $localize`Retire ${variant.name}:NAME:`,
       bringBack: $localize`Bring ${variant.name}:NAME: back`,
-      body: [BODY_SHAPE_WORDS[variant.bodyShape], variant.description ?? '']
+      body: [BODY_SHAPE_NAMES[variant.bodyShape], variant.description ?? '']
         .filter((part) => part)
         .join(' · '),
       picture:

@@ -1,17 +1,5 @@
-import type { BODY_SHAPES, Configuration, FrontalArea } from '#shared/contracts/variants';
+import type { Configuration, FrontalArea } from '#shared/contracts/variants';
 import type { QuantityFormat } from '../../ui/quantity/quantity-format';
-
-export const BODY_SHAPE_WORDS: Readonly<Record<(typeof BODY_SHAPES)[number], string>> = {
-  hatch: $localize`Hatch`,
-  liftback: $localize`Liftback`,
-  saloon: $localize`Saloon`,
-  estate: $localize`Estate`,
-  crossover: $localize`Crossover`,
-  coupe: $localize`Coupé`,
-  van: $localize`Van`,
-  pickup: $localize`Pick-up`,
-  other: $localize`Other`,
-};
 
 export const AREA_METHOD_WORDS: Readonly<Record<FrontalArea['method'], string>> = {
   'projected-image': $localize`projected image`,

@@ -108,7 +108,7 @@ async function surroundingsOf(
   };
 }
 
-async function record(work: Work, action: string, before: object, after: TestPlan): Promise<void> {
+async function record(work: Work, action: string, before: Partial<TestPlan>, after: TestPlan): Promise<void> {
   await recordAudit(work, {
     action,
     entityKind: 'test-plan',

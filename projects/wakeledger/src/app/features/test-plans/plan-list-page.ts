@@ -9,7 +9,7 @@ import { Busy } from '../../ui/busy/busy';
 import { EmptyState } from '../../ui/empty-state/empty-state';
 import { ProblemBanner } from '../../ui/problem-banner/problem-banner';
 import { QuantityFormat } from '../../ui/quantity/quantity-format';
-import { machWords, reynoldsWords, speedWords, STATE_WORDS, stateOf } from './plan-words';
+import { MACH_LOOKS, machWords, reynoldsWords, speedWords, STATE_WORDS, stateOf } from './plan-words';
 import { flowAt, isTunnel, planned } from './planned';
 import { planSurroundings } from './plan-surroundings';
 
@@ -74,17 +74,20 @@ export class PlanListPage {
     readonly speed: string;
     readonly mach: string;
     readonly reynolds: string;
+    /** The word where that speed is beyond the Mach limit. */
+    readonly refused: string | undefined;
   } {
     const ground = this.around.ground();
     const tunnel = this.around.facilitiesById().get(plan.facilityId);
     const state = ground && isTunnel(tunnel) ? planned(plan.inputs, { ...ground, tunnel }) : undefined;
-    if (state?.kind !== 'planned') return { speed: '–', mach: '–', reynolds: '–' };
+    if (state?.kind !== 'planned') return { speed: '–', mach: '–', reynolds: '–', refused: undefined };
     const speedKmh = plan.inputs.speedKmh ?? state.needed.speedKmh;
     const flow = flowAt(state.setting, speedKmh, plan.inputs.maximumForceN);
     return {
       speed: speedWords(flow.speedKmh, this.format),
       mach: machWords(flow.mach, this.format),
       reynolds: reynoldsWords(flow.reynolds, this.format),
+      refused: flow.machVerdict === 'refused' ? MACH_LOOKS.refused.word : undefined,
     };
   }
 }

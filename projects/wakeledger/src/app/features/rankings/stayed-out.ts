@@ -85,6 +85,10 @@ import { stayedOutEntries } from './stayed-out-groups';
     li {
       padding: 2px 0;
     }
+    li a {
+      display: inline-block;
+      min-height: 24px;
+    }
     .missing {
       margin: 8px 0 2px;
       font-size: var(--wl-small);

@@ -63,6 +63,7 @@ const jsonText = (value: unknown): string | undefined =>
 
 async function loadCorrelations(writer: SeedWriter, scenario: Scenario, by: string): Promise<void> {
   const input = rankingInputOf(scenario, 'newest');
+  const variantOf = new Map(scenario.results.map(({ name, variant }) => [name, variant]));
   for (const [key, { name, facility, referenceFacility, versions }] of Object.entries(
     scenario.correlations,
   )) {
@@ -93,9 +94,18 @@ async function loadCorrelations(writer: SeedWriter, scenario: Scenario, by: stri
               referenceFacility,
               names,
             );
+            const geometry = scenario.variants[variantOf.get(names[0]) ?? '']?.name;
             const resultId = writer.id('result', names[0]);
             const referenceResultId = writer.id('result', names[1]);
-            return { resultId, referenceResultId, dragAreaM2, uM2, referenceDragAreaM2, referenceUM2 };
+            return {
+              geometry,
+              resultId,
+              referenceResultId,
+              dragAreaM2,
+              uM2,
+              referenceDragAreaM2,
+              referenceUM2,
+            };
           }),
         ),
         comment,

@@ -1,9 +1,13 @@
 import pg from 'pg';
+import { adjustmentList } from '#shared/contracts/adjustments';
 import { adoptionList } from '#shared/contracts/adoptions';
+import { correlationList, correlationRead } from '#shared/contracts/correlations';
+import { policiesRead } from '#shared/contracts/policies';
 import { resultEnter, resultList } from '#shared/contracts/results';
 import { facilityList } from '#shared/contracts/facilities';
 import { programmeList, programmeRead } from '#shared/contracts/programmes';
 import { sessionRead } from '#shared/contracts/session';
+import { testPlanList } from '#shared/contracts/test-plans';
 import { variantList } from '#shared/contracts/variants';
 import { evaluateRank } from '#shared/core/ranking/rank';
 import { seedDemo } from '../../seeds/demo/index';
@@ -142,6 +146,22 @@ describe('the demo scenario in a database', () => {
       const member = await ApiMember.signIn(api.caller, organisationOf(ALDERMERE), role);
       expect((await member.ok(sessionRead)).member?.latestProgrammeId).toBe(await programmeId());
     }
+  });
+
+  it('keeps limits, adjustments, a correlation in its second version, and plans, as the screens read them', async () => {
+    const params = { programmeId: await programmeId() };
+    const { versions } = await aldermere.ok(policiesRead);
+    expect(versions[0]).toMatchObject({ number: 1, values: { reynoldsToleranceM2: 0.004 } });
+    expect((await aldermere.ok(adjustmentList)).adjustments).toHaveLength(2);
+    const [summary] = (await aldermere.ok(correlationList)).correlations;
+    expect(summary).toMatchObject({ latestNumber: 2, inUse: { versionNumber: 2, since: '2026-07-01' } });
+    const correlation = await aldermere.ok(correlationRead, {
+      params: { correlationId: summary?.id ?? '' },
+    });
+    expect(correlation.versions.map(({ pairs }) => pairs.length)).toEqual([7, 4]);
+    const { plans } = await aldermere.ok(testPlanList, { params });
+    expect(plans.filter(({ expectedSince }) => expectedSince !== undefined)).toHaveLength(1);
+    expect(plans).toHaveLength(2);
   });
 
   it('goes on counting entries where the scenario ends', async () => {

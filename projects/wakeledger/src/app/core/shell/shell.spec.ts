@@ -46,6 +46,7 @@ describe('the shell', () => {
       'Ranking',
       'Variants',
       'Results',
+      'Proposals',
       'Import',
       'Test planning',
       'Reference',

@@ -50,7 +50,7 @@ export default defineConfig({
     env: { PORT: String(PORT) },
     url: `${baseURL}/readyz`,
     reuseExistingServer: false,
-    timeout: 300_000,
+    timeout: 600_000,
     gracefulShutdown: { signal: 'SIGTERM', timeout: 20_000 },
     stdout: 'pipe',
   },

@@ -51,7 +51,7 @@ test('a sweep that is flat above the minimum resolves the caution, moves the ran
 
   await openResult(page, programme, 'M-01');
   await expect(page.getByText('▲ caution', { exact: true })).toBeVisible();
-  await expect(page.locator('wl-checks')).toContainText('transition');
+  await expect(page.locator('wl-checks')).toContainText('Transition, caution');
   await page.getByRole('link', { name: 'Ranking' }).click();
   await expect(leader).toHaveText('Hatch');
 

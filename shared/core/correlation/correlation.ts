@@ -133,6 +133,9 @@ export function fitCorrelation(pairs: readonly CorrelationPairInput[], where = '
   };
 }
 
+/** As many digits as tell it from the range's end: `0.5624`. */
+const inWords = (dragAreaM2: number): string => dragAreaM2.toPrecision(4);
+
 /**
  * A drag area [m²] carried to the reference facility: ȳ + b·(x − x̄).
  *
@@ -143,7 +146,7 @@ export function correlatedDragArea(fit: CorrelationFit, dragAreaM2: number, corr
     refuse(
       'correlation-range',
       `correlation:${correlationId}`,
-      `${dragAreaM2} m² lies outside the pairs, ${fit.validFromM2} to ${fit.validToM2} m².`,
+      `A drag area of ${inWords(dragAreaM2)} m² lies outside what its pairs cover, ${inWords(fit.validFromM2)} to ${inWords(fit.validToM2)} m². A pair beyond it would widen the range.`,
     );
   }
   return fit.referenceCentroidM2 + fit.slope * (dragAreaM2 - fit.centroidM2);

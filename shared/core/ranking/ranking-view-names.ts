@@ -54,6 +54,8 @@ function nameOfKey(names: RankingNames, kind: string, id: string): string {
     case 'blockage-method':
       return versionedFacility(names, id);
     case 'frontal-area':
+    case 'reynolds-shape':
+    case 'combination':
       return variantName(names, id);
     case 'as-built-scale':
       return names.models.get(id) ?? id;

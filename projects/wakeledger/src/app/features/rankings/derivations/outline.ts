@@ -51,6 +51,34 @@ function outlineStep(
   };
 }
 
+/** The one step of a weighted mean that may be shown: how many results it rests on and how well they agree. */
+function combinationStep(row: ViewRow, format: QuantityFormat): DerivationStep {
+  const { dragAreaM2 } = row.figure;
+  const birge = row.combination?.birgeRatio ?? null;
+  return {
+    title: $localize`Weighted mean of ${row.evidence.length}:COUNT: results`,
+    result: {
+      shown: format.text(dragAreaM2, 'drag-area', { digits: 4 }),
+      plain: `${plain(dragAreaM2)} m²`,
+    },
+    formulaMathml:
+      '<mrow><mo>∑</mo><mi>w</mi><mi>x</mi><mo>/</mo><mo>∑</mo><mi>w</mi><mo>,</mo><mi>w</mi><mo>=</mo><mn>1</mn><mo>/</mo><msup><mi>u</mi><mn>2</mn></msup></mrow>',
+    formulaText: '∑wx/∑w, w = 1/u²',
+    values: { shown: '', plain: '' },
+    source: $localize`the raw readings are kept with the results, for those who may see them`,
+    method: 'weighted-mean@1',
+    assumed: [],
+    cautions: [
+      ...row.cautions.map(cautionWords),
+      ...(birge !== null && birge > 1
+        ? [
+            $localize`the results differ by more than their uncertainties explain (Birge ratio ${format.value(birge, 'number', { digits: 2 })}:RATIO:): the uncertainty is widened`,
+          ]
+        : []),
+    ],
+  };
+}
+
 /** The end of a figure's derivation, from the drag area on: the same for everybody. */
 export function closingSteps(
   kind: FigureKind,
@@ -135,9 +163,10 @@ export function outlineDerivation(
   view: RankingView,
   format: QuantityFormat,
 ): Derivation {
-  const steps = row.steps.map((step, index) =>
-    outlineStep(step, row, format, index === row.steps.length - 1),
-  );
+  const steps =
+    row.combination === null
+      ? row.steps.map((step, index) => outlineStep(step, row, format, index === row.steps.length - 1))
+      : [combinationStep(row, format)];
   return {
     ...headOf(kind, row, view, format),
     steps: [...steps, ...closingSteps(kind, row, view, format)],

@@ -15,6 +15,8 @@ function keyNames({ inputs, context }: DerivationSources): KeyNames {
     ...inputs.variants,
     ...inputs.results,
     ...context.sessions,
+    ...(inputs.adjustments ?? []),
+    ...(inputs.correlations ?? []),
   ];
   return new Map(named.flatMap(({ id, name }) => (name == null ? [] : [[id, name] as const])));
 }

@@ -76,13 +76,8 @@ test('a sweep that is flat above the minimum resolves the caution, moves the ran
 
   await page.getByRole('link', { name: 'Ranking' }).click();
   await expect(leader).toHaveText('Sport');
-  await page
-    .getByRole('row')
-    .filter({ hasText: 'Hatch' })
-    .first()
-    .getByRole('button', { name: /derivation/ })
-    .first()
-    .click();
+  const hatch = page.getByRole('grid').getByRole('row').filter({ hasText: 'Hatch' });
+  await hatch.getByRole('button').first().click();
   const sheet = page.getByRole('dialog');
   await expect(sheet).toContainText('M-02');
   await expect(sheet).toContainText(/Reynolds/);

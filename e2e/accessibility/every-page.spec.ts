@@ -22,7 +22,7 @@ test('sign-in has nothing that axe objects to, in light and dark', async ({ page
 
 for (const role of ['aerodynamicist', 'stylist', 'administrator'] as const) {
   test(`axe objects to no page that a link leads the ${role} to, in light and dark`, async ({ page }) => {
-    test.setTimeout(600_000);
+    test.setTimeout(1_200_000);
     await continueAs(page, role);
     const programme = await programmeNamed(page, 'Dunlin');
     const waiting = ['/programmes', `/programmes/${programme}/ranking`, ...WITHOUT_LINK];
